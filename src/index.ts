@@ -1,0 +1,28 @@
+/**
+ * The public face of the engine. Everything else in src/ is private. Inputs and outputs are plain JSON data;
+ * quantities are in the units of the property table, shares are mass fractions 0..1, prices per tonne.
+ */
+export type { PredictedProperties, PredictedProperty, RuleSpread } from './blend/predictedProperties';
+export type { PredictionOptions, PropertyAt } from './blend/predictionOptions';
+export { type PredictOptions, predictBlend } from './blend/predictBlend';
+export type { Dose, Limit, Order, ShareBasis, ShareRule, StockSet } from './optimise/order';
+export type {
+  BlendOutcome,
+  Caution,
+  LeftOut,
+  LimitCheck,
+  OrderProblem,
+  Proof,
+  SolveProgress,
+  Stopped,
+} from './optimise/outcome';
+export { kinematicViscosityAt, kvFromWalther, logTemperature, type ViscosityPoint, waltherIndex } from './property/kinematicViscosity';
+export { OWN_RULES, type OwnProperty, type OwnRule } from './property/ownProperty';
+export type { PropertyDefinition, Reproducibility } from './property/propertyDefinition';
+export { PROPERTY_TABLE, propertyDefinition, VI_DEFINITION } from './property/propertyTable';
+export { kv40ForViscosityIndex, reportedViscosityIndex, viscosityIndex } from './property/viscosityIndex';
+export { VISCOSITY_RULE_TABLE, VISCOSITY_RULES, type ViscosityRule } from './property/viscosityRule';
+export { FAMILIES, type Family, isBaseOil } from './stock/family';
+export { FIGURE_ORIGINS, type Figure, type FigureOrigin } from './stock/figure';
+export { findFigure } from './stock/findFigure';
+export type { Recipe, RecipeLine, Stock } from './stock/stock';
