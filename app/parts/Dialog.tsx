@@ -1,0 +1,39 @@
+import { type ReactNode, useEffect, useId, useRef } from 'react';
+import { IconButton } from './IconButton';
+import styles from './Dialog.module.css';
+
+export interface DialogProps {
+  title: string;
+  open: boolean;
+  onClose(): void;
+  children: ReactNode;
+  /** Buttons at the foot. */
+  actions?: ReactNode;
+}
+
+/** A question that holds the page until it is answered; Escape closes it. */
+export function Dialog({ title, open, onClose, children, actions }: DialogProps) {
+  const ref = useRef<HTMLDialogElement>(null);
+  const headingId = useId();
+
+  useEffect(() => {
+    const dialog = ref.current;
+    if (dialog && open && !dialog.open) dialog.showModal();
+    if (dialog && !open && dialog.open) dialog.close();
+  }, [open]);
+
+  return (
+    <dialog ref={ref} className={styles.dialog} aria-labelledby={headingId} onClose={onClose}>
+      {open && (
+        <>
+          <div className={styles.head}>
+            <h2 id={headingId}>{title}</h2>
+            <IconButton icon="remove" label="Close" onClick={onClose} />
+          </div>
+          {children}
+          {actions && <div className={styles.actions}>{actions}</div>}
+        </>
+      )}
+    </dialog>
+  );
+}

@@ -1,0 +1,149 @@
+import { type ChangeEvent, type FocusEvent, type KeyboardEvent, useRef, useState } from 'react';
+import { formatForEditing, formatNumber, parseNumber } from './numberText';
+
+export interface NumberDraftOptions {
+  value?: number;
+  /** Decimals shown at least. */
+  digits: number;
+  /** What one arrow key adds; default one unit of the last digit. */
+  step?: number;
+  /** Values outside cannot be right and are not taken. */
+  sense?: { min: number; max: number };
+  /** Undefined where the field was emptied. */
+  onCommit(value: number | undefined): void;
+  /** Told of each readable number while it is being typed. */
+  onDraft?(value: number): void;
+  /** Text that an earlier reading could not make sense of, kept as typed. */
+  unreadText?: string;
+  /** Told of a text that cannot be read, so that it can be kept. */
+  onUnread?(text: string): void;
+}
+
+type Reading = { value: number | undefined } | { problem: string };
+
+/** The life of a number being typed: draft, reading, commit, revert, step. */
+export function useNumberDraft(options: NumberDraftOptions) {
+  const { value, digits, unreadText, onCommit, onDraft, onUnread } = options;
+  const [draft, setDraft] = useState<string>();
+  const [problem, setProblem] = useState<string>();
+  const [seenValue, setSeenValue] = useState(value);
+  const atFocus = useRef<{ value: number | undefined }>(undefined);
+  const focused = useRef(false);
+
+  // An undo or a drag elsewhere changed the value: what was left unread no longer speaks of it.
+  if (!Object.is(seenValue, value)) {
+    setSeenValue(value);
+    if (problem !== undefined) {
+      setProblem(undefined);
+      setDraft(undefined);
+    }
+  }
+
+  const shown = draft ?? unreadText ?? formatForEditing(value, digits);
+
+  function read(text: string): Reading {
+    const parsed = parseNumber(text);
+    if ('empty' in parsed) return { value: undefined };
+    if ('problem' in parsed) return { problem: withLastGood(parsed.problem) };
+    const { sense } = options;
+    if (sense && (parsed.value < sense.min || parsed.value > sense.max)) {
+      return { problem: withLastGood(`${text.trim()} cannot be right: expected ${rangeText(sense, digits)}.`) };
+    }
+    return { value: parsed.value };
+  }
+
+  function withLastGood(text: string): string {
+    return value === undefined || onUnread ? text : `${text} Until then ${formatForEditing(value, digits)} counts.`;
+  }
+
+  function commit() {
+    if (draft === undefined) return;
+    const reading = read(draft);
+    if ('problem' in reading) {
+      setProblem(reading.problem);
+      onUnread?.(draft);
+      return;
+    }
+    setDraft(undefined);
+    setProblem(undefined);
+    if (!Object.is(reading.value, atFocus.current?.value) || unreadText !== undefined || problem !== undefined) {
+      onCommit(reading.value);
+    }
+    atFocus.current = { value: reading.value };
+  }
+
+  function revert() {
+    const start = atFocus.current;
+    setDraft(undefined);
+    setProblem(undefined);
+    if (start && !Object.is(start.value, value)) onCommit(start.value);
+  }
+
+  function stepBy(steps: number) {
+    const reading = read(shown);
+    const from = 'value' in reading ? reading.value : value;
+    if (from === undefined) return;
+    const step = options.step ?? 10 ** -digits;
+    const next = Number((from + steps * step).toFixed(10));
+    const { sense } = options;
+    if (sense && (next < sense.min || next > sense.max)) return;
+    setProblem(undefined);
+    if (onDraft) {
+      setDraft(formatForEditing(next, digits));
+      onDraft(next);
+    } else {
+      setDraft(undefined);
+      onCommit(next);
+    }
+  }
+
+  function onKeyDown(event: KeyboardEvent<HTMLInputElement>) {
+    if (event.key === 'Enter') commit();
+    else if (event.key === 'Escape' && (draft !== undefined || problem !== undefined)) {
+      event.stopPropagation();
+      revert();
+    } else if (event.key === 'ArrowUp' || event.key === 'ArrowDown') {
+      event.preventDefault();
+      stepBy((event.key === 'ArrowUp' ? 1 : -1) * (event.shiftKey ? 10 : 1));
+    }
+  }
+
+  function onChange(event: ChangeEvent<HTMLInputElement>) {
+    const text = event.target.value;
+    setDraft(text);
+    setProblem(undefined);
+    const reading = read(text);
+    if (onDraft && 'value' in reading && reading.value !== undefined) onDraft(reading.value);
+  }
+
+  return {
+    problem: problem ?? (draft === undefined && unreadText !== undefined ? unreadProblem(unreadText) : undefined),
+    dirty: draft !== undefined && focused.current,
+    inputProps: {
+      value: shown,
+      onChange,
+      onKeyDown,
+      onFocus(event: FocusEvent<HTMLInputElement>) {
+        focused.current = true;
+        atFocus.current = { value };
+        event.target.select();
+      },
+      onBlur() {
+        focused.current = false;
+        commit();
+      },
+    },
+  };
+}
+
+function unreadProblem(text: string): string {
+  const parsed = parseNumber(text);
+  return 'problem' in parsed ? parsed.problem : `“${text}” was not taken. Type the number again.`;
+}
+
+function rangeText(sense: { min: number; max: number }, digits: number): string {
+  const bound = (value: number) => formatNumber(value, Number.isInteger(value) ? 0 : digits);
+  if (sense.max === Infinity) return `at least ${bound(sense.min)}`;
+  if (sense.min === -Infinity) return `at most ${bound(sense.max)}`;
+  return `${bound(sense.min)} to ${bound(sense.max)}`;
+}
