@@ -6,6 +6,8 @@ import { type NumberDraftOptions, useNumberDraft } from './useNumberDraft';
 export interface NumberFieldProps extends NumberDraftOptions {
   label: string;
   unit?: string;
+  /** Read aloud before the label where the page shows it elsewhere: the row's name. */
+  context?: string;
   /** The label is read aloud only. */
   hideLabel?: boolean;
   /** Label to the left instead of above. */
@@ -14,6 +16,8 @@ export interface NumberFieldProps extends NumberDraftOptions {
   disabled?: boolean;
   /** Something wrong with the value that only the caller can know ("above the most"). */
   problem?: string;
+  /** Id of a message elsewhere that says what is wrong with the value. */
+  problemId?: string;
   hint?: string;
   className?: string;
 }
@@ -25,22 +29,25 @@ export interface NumberFieldProps extends NumberDraftOptions {
 export function NumberField({
   label,
   unit,
+  context,
   hideLabel,
   inline,
   placeholder,
   disabled,
   problem,
+  problemId,
   hint,
   className,
   ...draftOptions
 }: NumberFieldProps) {
   const id = useId();
   const draft = useNumberDraft(draftOptions);
-  const message = draft.problem ?? problem;
-  const describedBy = [message && `${id}-problem`, hint && `${id}-hint`].filter(Boolean).join(' ');
+  const message = draft.problem ?? (draft.dirty ? undefined : problem);
+  const describedBy = [message && `${id}-problem`, problemId, hint && `${id}-hint`].filter(Boolean).join(' ');
   return (
     <span className={classNames(styles.field, inline && styles.inline, className)}>
       <label htmlFor={id} className={hideLabel ? 'visually-hidden' : styles.label}>
+        {context && <span className="visually-hidden">{context}, </span>}
         {label}
         {unit && <span className="visually-hidden">, {unit}</span>}
       </label>
@@ -54,7 +61,7 @@ export function NumberField({
           spellCheck={false}
           placeholder={placeholder}
           disabled={disabled}
-          aria-invalid={message ? true : undefined}
+          aria-invalid={message || problemId ? true : undefined}
           aria-describedby={describedBy || undefined}
           data-dirty={draft.dirty || undefined}
           {...draft.inputProps}

@@ -9,6 +9,8 @@ export interface NumberDraftOptions {
   step?: number;
   /** Values outside cannot be right and are not taken. */
   sense?: { min: number; max: number };
+  /** Why a readable number is not taken all the same, or nothing. */
+  check?(value: number): string | undefined;
   /** Undefined where the field was emptied. */
   onCommit(value: number | undefined): void;
   /** Told of each readable number while it is being typed. */
@@ -28,7 +30,7 @@ export function useNumberDraft(options: NumberDraftOptions) {
   const [problem, setProblem] = useState<string>();
   const [seenValue, setSeenValue] = useState(value);
   const atFocus = useRef<{ value: number | undefined }>(undefined);
-  const focused = useRef(false);
+  const stepped = useRef(false);
 
   // An undo or a drag elsewhere changed the value: what was left unread no longer speaks of it.
   if (!Object.is(seenValue, value)) {
@@ -49,7 +51,8 @@ export function useNumberDraft(options: NumberDraftOptions) {
     if (sense && (parsed.value < sense.min || parsed.value > sense.max)) {
       return { problem: withLastGood(`${text.trim()} cannot be right: expected ${rangeText(sense, digits)}.`) };
     }
-    return { value: parsed.value };
+    const refused = options.check?.(parsed.value);
+    return refused ? { problem: withLastGood(refused) } : { value: parsed.value };
   }
 
   function withLastGood(text: string): string {
@@ -57,7 +60,11 @@ export function useNumberDraft(options: NumberDraftOptions) {
   }
 
   function commit() {
-    if (draft === undefined) return;
+    if (draft === undefined) {
+      if (stepped.current) onCommit(value);
+      stepped.current = false;
+      return;
+    }
     const reading = read(draft);
     if ('problem' in reading) {
       setProblem(reading.problem);
@@ -76,6 +83,7 @@ export function useNumberDraft(options: NumberDraftOptions) {
     const start = atFocus.current;
     setDraft(undefined);
     setProblem(undefined);
+    stepped.current = false;
     if (start && !Object.is(start.value, value)) onCommit(start.value);
   }
 
@@ -88,18 +96,15 @@ export function useNumberDraft(options: NumberDraftOptions) {
     const { sense } = options;
     if (sense && (next < sense.min || next > sense.max)) return;
     setProblem(undefined);
-    if (onDraft) {
-      setDraft(formatForEditing(next, digits));
-      onDraft(next);
-    } else {
-      setDraft(undefined);
-      onCommit(next);
-    }
+    setDraft(undefined);
+    stepped.current = onDraft !== undefined;
+    if (onDraft) onDraft(next);
+    else onCommit(next);
   }
 
   function onKeyDown(event: KeyboardEvent<HTMLInputElement>) {
     if (event.key === 'Enter') commit();
-    else if (event.key === 'Escape' && (draft !== undefined || problem !== undefined)) {
+    else if (event.key === 'Escape' && (draft !== undefined || stepped.current)) {
       event.stopPropagation();
       revert();
     } else if (event.key === 'ArrowUp' || event.key === 'ArrowDown') {
@@ -118,20 +123,16 @@ export function useNumberDraft(options: NumberDraftOptions) {
 
   return {
     problem: problem ?? (draft === undefined && unreadText !== undefined ? unreadProblem(unreadText) : undefined),
-    dirty: draft !== undefined && focused.current,
+    dirty: draft !== undefined && problem === undefined,
     inputProps: {
       value: shown,
       onChange,
       onKeyDown,
       onFocus(event: FocusEvent<HTMLInputElement>) {
-        focused.current = true;
         atFocus.current = { value };
         event.target.select();
       },
-      onBlur() {
-        focused.current = false;
-        commit();
-      },
+      onBlur: commit,
     },
   };
 }

@@ -1,0 +1,77 @@
+import { type Limit, type OwnProperty, PROPERTY_TABLE, type PropertyDefinition, VI_DEFINITION, type WorkbookOrder } from '../../src';
+import { Select, type SelectOption } from '../parts/Select';
+import { useWorkbook } from '../state/workbookStore';
+import styles from './LimitList.module.css';
+import { isSameProperty } from './limitEnds';
+import { limitName, shortLimitName } from './limitWords';
+import { editOrder } from './useOrder';
+
+/** Where a viscosity at a temperature of one's own starts; it is then changed in the row. */
+const ANOTHER_TEMPERATURE = 20;
+
+/** Adds an empty limit on a property; its ends are then typed. */
+export function AddLimit({ order, onAdded }: { order: WorkbookOrder; onAdded(limit: Limit): void }) {
+  const ownProperties = useWorkbook(({ workbook }) => workbook.ownProperties);
+  const choices = limitChoices(ownProperties).filter(
+    ({ limit }) => !order.limits.some((existing) => isSameProperty(existing, limit)),
+  );
+  const option = ({ limit }: Choice): SelectOption<string> => ({
+    value: keyOf(limit),
+    label: limitName(limit, ownProperties),
+  });
+  const groups = ['Viscosity', 'Other properties', 'Own properties'].map((label) => ({
+    label,
+    options: choices.filter(({ group }) => group === label).map(option),
+  }));
+
+  function add(key: string) {
+    const choice = choices.find(({ limit }) => keyOf(limit) === key);
+    if (!choice) return;
+    const { limit } = choice;
+    editOrder(order.id, `add a limit on ${shortLimitName(limit, ownProperties)}`, ({ limits }) => {
+      limits.push({ ...limit });
+    });
+    onAdded(limit);
+  }
+
+  return (
+    <div className={styles.add}>
+      <Select
+        label="Add a limit"
+        hideLabel
+        value=""
+        placeholder="Add a limit on …"
+        options={groups.filter(({ options }) => options.length > 0)}
+        onChange={add}
+      />
+    </div>
+  );
+}
+
+interface Choice {
+  group: string;
+  limit: Limit;
+}
+
+function limitChoices(ownProperties: readonly OwnProperty[]): Choice[] {
+  const table = PROPERTY_TABLE.filter(({ id }) => id !== 'pourPointDepressed');
+  return [
+    ...table.flatMap((definition) => choicesOf(definition, groupOf(definition))),
+    { group: 'Viscosity', limit: { property: VI_DEFINITION.id } },
+    ...ownProperties.map(({ id }) => ({ group: 'Own properties', limit: { property: id } })),
+  ];
+}
+
+function choicesOf({ id, temperatures, anyTemperature }: PropertyDefinition, group: string): Choice[] {
+  if (!temperatures) return [{ group, limit: { property: id } }];
+  const all = anyTemperature ? [...temperatures, ANOTHER_TEMPERATURE] : temperatures;
+  return all.map((celsius) => ({ group, limit: { property: id, celsius } }));
+}
+
+function groupOf({ index, unit }: PropertyDefinition): string {
+  return index === 'viscosity' || unit === 'mPa·s' ? 'Viscosity' : 'Other properties';
+}
+
+function keyOf({ property, celsius }: Limit): string {
+  return `${property}@${celsius ?? ''}`;
+}

@@ -1,0 +1,56 @@
+import type { ShareRule, WorkbookOrder } from '../../src';
+import { Section } from '../parts/Section';
+import { Select } from '../parts/Select';
+import { useAnswer } from '../state/answerStore';
+import { problemsAt } from './problemsAt';
+import styles from './rules.module.css';
+import { ShareRuleRow } from './ShareRuleRow';
+import { editOrder, useProducts } from './useOrder';
+
+const NEW_RULES: Record<ShareRule['kind'], { label: string; rule: ShareRule }> = {
+  share: { label: 'share of some stocks', rule: { kind: 'share', set: {} } },
+  ratio: { label: 'ratio of some stocks to others', rule: { kind: 'ratio', set: {}, to: {} } },
+  count: { label: 'number of stocks used', rule: { kind: 'count', set: {} } },
+  excludes: { label: 'this stock not with those', rule: { kind: 'excludes', stockId: '', set: {} } },
+  flag: { label: 'flag that every stock carries', rule: { kind: 'flag', flag: '' } },
+};
+
+/** Rules of the mix beyond its properties. */
+export function ShareRuleList({ order }: { order: WorkbookOrder }) {
+  const products = useProducts();
+  const answer = useAnswer(order.id);
+  return (
+    <Section title="Shares and other rules" level={3}>
+      {order.shares.length === 0 && <p className={styles.empty}>No rules: any stocks in any shares.</p>}
+      <ul className={styles.list}>
+        {order.shares.map((rule, index) => (
+          <ShareRuleRow
+            // Rules have no id and keep their order; a rule that is taken out takes its unfinished typing with it.
+            key={`${rule.kind} ${index} of ${order.shares.length}`}
+            rule={rule}
+            products={products}
+            problems={problemsAt(answer, 'shares', index)}
+            onChange={(next) =>
+              editOrder(order.id, 'change a rule', ({ shares }) => {
+                shares[index] = next;
+              })
+            }
+            onRemove={() => editOrder(order.id, 'remove a rule', ({ shares }) => shares.splice(index, 1))}
+          />
+        ))}
+      </ul>
+      <div className={styles.add}>
+        <Select
+          label="Add a rule"
+          hideLabel
+          value=""
+          placeholder="Add a rule on …"
+          options={Object.entries(NEW_RULES).map(([kind, { label }]) => ({ value: kind as ShareRule['kind'], label }))}
+          onChange={(kind) =>
+            editOrder(order.id, 'add a rule', ({ shares }) => shares.push(structuredClone(NEW_RULES[kind].rule)))
+          }
+        />
+      </div>
+    </Section>
+  );
+}
