@@ -5,6 +5,8 @@
 export type { PredictedProperties, PredictedProperty, RuleSpread } from './blend/predictedProperties';
 export type { PredictionOptions, PropertyAt } from './blend/predictionOptions';
 export { type PredictOptions, predictBlend } from './blend/predictBlend';
+export { createHighsEngine, type HighsLoading } from './optimise/linear/highsEngine';
+export type { LinearEngine } from './optimise/linear/linearEngine';
 export type { Dose, Limit, Order, ShareBasis, ShareRule, StockSet } from './optimise/order';
 export type {
   BlendOutcome,
@@ -16,6 +18,8 @@ export type {
   SolveProgress,
   Stopped,
 } from './optimise/outcome';
+export { solveBlend } from './optimise/solveBlend';
+export type { SolveOptions } from './optimise/solveOptions';
 export { kinematicViscosityAt, kvFromWalther, logTemperature, type ViscosityPoint, waltherIndex } from './property/kinematicViscosity';
 export { OWN_RULES, type OwnProperty, type OwnRule } from './property/ownProperty';
 export type { PropertyDefinition, Reproducibility } from './property/propertyDefinition';

@@ -52,12 +52,12 @@ function viscosityLine(stock: Stock): ViscosityLine {
 }
 
 function viscosityValue(stock: Stock, celsius: number, options: PredictionOptions): StockValue {
-  const exact = findFigure(stock, 'kv', celsius);
-  const direct = exact && known(exact);
-  if (direct) return direct;
   if (stock.figures.some((figure) => figure.property === 'kv' && figure.origin === 'as the rest')) {
     return { state: 'as the rest' };
   }
+  const exact = findFigure(stock, 'kv', celsius);
+  const direct = exact && known(exact);
+  if (direct) return direct;
   try {
     const { points, estimated } = viscosityLine(stock);
     if (points.length < 2) {

@@ -80,8 +80,10 @@ export interface BlendOutcome {
   cautions: Caution[];
   /** Not empty exactly when `stopped` is 'refused' or 'engine failed'. */
   problems: OrderProblem[];
-  /** For an impossible order: places in `order.limits` that cannot hold together as far as the root proof tells. */
+  /** For an impossible order: places in `order.limits` that the proofs of impossibility lean on. */
   conflict?: number[];
+  /** For an impossible order: doses, rules and bounds that the proofs lean on, in words. */
+  conflictRules?: string[];
   work: { nodes: number; linearPrograms: number; milliseconds: number };
 }
 

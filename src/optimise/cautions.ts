@@ -1,0 +1,113 @@
+import type { PredictedProperties } from '../blend/predictedProperties';
+import { propertyDefinition } from '../property/propertyTable';
+import { VISCOSITY_RULE_TABLE } from '../property/viscosityRule';
+import { findFigure } from '../stock/findFigure';
+import type { Recipe, Stock } from '../stock/stock';
+import { limitInWords } from './checkLimits';
+import type { Order } from './order';
+import type { Caution, LimitCheck } from './outcome';
+
+/** The cube-root rule is far off for unlike stocks by its nature: its disagreement tells nothing. */
+const RULES_THAT_COUNT = new Set(['wright', 'walther', 'refutas', 'logarithmic']);
+/** R of a viscosity index that follows from those of KV40 and KV100 [-]; from memory, 2.6 to 7 for a PAO 6. */
+const VI_REPRODUCIBILITY = 3;
+
+function reproducibility(property: string, value: number): number {
+  if (property === 'vi') return VI_REPRODUCIBILITY;
+  const found = propertyDefinition(property)?.reproducibility;
+  if (!found) return 0;
+  return 'relative' in found ? found.relative * Math.abs(value) : found.absolute;
+}
+
+/** Rules that put the mix outside a limit by more than the method's reproducibility. */
+function disagreeing(check: LimitCheck, predicted: PredictedProperties): string[] {
+  const spread = predicted.spread.find((entry) => entry.property === check.property && entry.celsius === check.celsius);
+  const slack = reproducibility(check.property, check.value);
+  return (spread?.byRule ?? []).flatMap(({ rule, value }) => {
+    if (value === undefined || !RULES_THAT_COUNT.has(rule)) return [];
+    const outside = Math.max((check.min ?? -Infinity) - value, value - (check.max ?? Infinity));
+    return outside > slack ? [rule] : [];
+  });
+}
+
+function trialBlend(order: Order, checks: readonly LimitCheck[], predicted: PredictedProperties): Caution[] {
+  const parts = checks.flatMap((check) => {
+    const rules = disagreeing(check, predicted);
+    if (rules.length === 0) return [];
+    const names = rules.map((rule) => VISCOSITY_RULE_TABLE[rule as keyof typeof VISCOSITY_RULE_TABLE].label);
+    return [`${limitInWords(order.limits[check.limit], order)} (outside by ${names.join(', ')})`];
+  });
+  if (parts.length === 0) return [];
+  const message = `Make a trial blend first: the blending rules disagree on pass or fail for ${parts.join('; ')}.`;
+  return [{ kind: 'trial blend', message }];
+}
+
+function names(stocks: readonly Stock[]): string {
+  return stocks.map((stock) => stock.name).join(', ');
+}
+
+function asTheRest(predicted: PredictedProperties, used: readonly Stock[], order: Order): Caution[] {
+  return predicted.properties.flatMap((property) => {
+    const limited = order.limits.some((limit) => limit.property === property.property);
+    const taking = used.filter((stock) => property.asTheRest.includes(stock.id));
+    if (!limited || taking.length === 0) return [];
+    const label = limitInWords(property, order);
+    return [{ kind: 'as the rest' as const, message: `${label}: ${names(taking)} counted as taking the value of the rest.` }];
+  });
+}
+
+function estimated(predicted: PredictedProperties, used: readonly Stock[], order: Order): Caution[] {
+  return predicted.properties.flatMap((property) => {
+    const from = used.filter((stock) => property.estimatedFrom.includes(stock.id));
+    if (from.length === 0) return [];
+    return [{ kind: 'estimate' as const, message: `${limitInWords(property, order)} rests on estimated figures of ${names(from)}.` }];
+  });
+}
+
+function mixedMethods(order: Order, used: readonly Stock[]): Caution[] {
+  return order.limits.flatMap((limit) => {
+    const methods = new Set(
+      used.flatMap((stock) => findFigure(stock, limit.property, limit.celsius)?.method?.trim() || []),
+    );
+    if (methods.size < 2) return [];
+    const message = `${limitInWords(limit, order)}: the stocks were measured by different methods (${[...methods].join(', ')}).`;
+    return [{ kind: 'mixed methods' as const, message }];
+  });
+}
+
+/** A thin and a heavy stock together: the linear rule of Noack reads low (common practice, no source). */
+function model(order: Order, recipe: Recipe, used: readonly Stock[]): Caution[] {
+  const cautions: Caution[] = [];
+  if (order.limits.some((limit) => limit.property === 'noack')) {
+    const heavy = used.flatMap((stock) => {
+      const share = recipe.find((line) => line.stockId === stock.id)?.massFraction ?? 0;
+      return share >= 0.1 ? (findFigure(stock, 'kv', 100)?.value ?? []) : [];
+    });
+    if (heavy.length > 1 && Math.max(...heavy) > 4 * Math.min(...heavy)) {
+      cautions.push({ kind: 'model', message: 'Noack volatility: the linear rule reads low for a thin and a heavy stock together.' });
+    }
+  }
+  const thickeners = used.filter((stock) => stock.family === 'thickener');
+  if (thickeners.length > 0) {
+    const message = `${names(thickeners)}: blending viscosities of polymers hold near the trial mix they were worked back from.`;
+    cautions.push({ kind: 'model', message });
+  }
+  return cautions;
+}
+
+/** What the reader of a recipe must know beside its figures. */
+export function cautionsOf(
+  order: Order,
+  recipe: Recipe,
+  predicted: PredictedProperties,
+  checks: readonly LimitCheck[],
+): Caution[] {
+  const used = order.stocks.filter((stock) => recipe.some((line) => line.stockId === stock.id));
+  return [
+    ...trialBlend(order, checks, predicted),
+    ...asTheRest(predicted, used, order),
+    ...estimated(predicted, used, order),
+    ...mixedMethods(order, used),
+    ...model(order, recipe, used),
+  ];
+}

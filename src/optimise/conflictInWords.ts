@@ -1,0 +1,49 @@
+import type { Order } from './order';
+import type { ModelRow, SearchModel } from './rows/searchModel';
+
+/** What stands in the way of an impossible order, as far as the proofs tell. */
+export interface Conflict {
+  /** Places in `order.limits`. */
+  limits: number[];
+  /** Doses, share rules and bounds, in sentences. */
+  rules: string[];
+}
+
+function ruleInWords(row: ModelRow, order: Order, model: SearchModel): string | undefined {
+  const { source } = row;
+  if (source.kind === 'dose') {
+    const stock = model.stocks.find((candidate) => candidate.id === order.doses?.[source.dose]?.stockId);
+    return `the dose of ${stock?.name ?? 'a stock'}`;
+  }
+  if (source.kind === 'share') return `rule ${source.share + 1} on shares`;
+  if (source.kind === 'most stocks') return `at most ${order.mostStocks} stocks`;
+  if (source.kind === 'presence') return `the least dose of ${model.stocks[source.stock].name}`;
+  return undefined;
+}
+
+/** Stocks that must be used more than they may: no search is needed to see that. */
+export function impossibleBounds(model: SearchModel): string[] {
+  return model.stocks.flatMap((stock, i) =>
+    model.lower[i] > model.upper[i]
+      ? [`${stock.name} must be at least ${percent(model.lower[i])} of the mix, but may be at most ${percent(model.upper[i])}`]
+      : [],
+  );
+}
+
+function percent(share: number): string {
+  return `${Number((100 * share).toPrecision(6))} %`;
+}
+
+/** The limits and rules that the proofs of impossibility lean on. */
+export function conflictOf(order: Order, model: SearchModel, rows: readonly ModelRow[], usesVi: boolean): Conflict {
+  const limits = new Set<number>();
+  const rules = new Set(impossibleBounds(model));
+  for (const row of rows) {
+    if (row.source.kind === 'limit') limits.add(row.source.limit);
+    const words = ruleInWords(row, order, model);
+    if (words) rules.add(words);
+  }
+  if (usesVi && model.vi?.min) limits.add(model.vi.min.limit);
+  if (usesVi && model.vi?.max) limits.add(model.vi.max.limit);
+  return { limits: [...limits].sort((a, b) => a - b), rules: [...rules] };
+}

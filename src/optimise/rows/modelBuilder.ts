@@ -1,0 +1,93 @@
+import type { Stock } from '../../stock/stock';
+import type { ModelRow, Presence, RowSource, SearchModel, WholeLots } from './searchModel';
+
+/** From this share on a stock counts as used where a rule asks for "at least so many" and it has no least dose. */
+export const LEAST_SHARE_THAT_COUNTS = 1e-4;
+
+/** Collects columns and rows of a search model. */
+export class ModelBuilder {
+  readonly rows: ModelRow[] = [];
+  readonly presences: Presence[] = [];
+  readonly wholeLots: WholeLots[] = [];
+  readonly #cost: number[] = [];
+  readonly #lower: number[] = [];
+  readonly #upper: number[] = [];
+  readonly #place: ReadonlyMap<string, number>;
+
+  constructor(readonly stocks: Stock[]) {
+    this.#place = new Map(stocks.map((stock, place) => [stock.id, place]));
+    for (const stock of stocks) this.addColumn(stock.pricePerTonne, 0, 1);
+    this.addRow({ kind: 'sum' }, 1, 1, stocks.map((_, place) => [place, 1]));
+  }
+
+  placeOf(stockId: string): number | undefined {
+    return this.#place.get(stockId);
+  }
+
+  addColumn(cost: number, lower: number, upper: number): number {
+    this.#cost.push(cost);
+    this.#lower.push(lower);
+    this.#upper.push(upper);
+    return this.#cost.length - 1;
+  }
+
+  addRow(source: RowSource, lower: number, upper: number, entries: readonly (readonly [number, number])[]): void {
+    const used = entries.filter(([, value]) => value !== 0);
+    this.rows.push({ source, lower, upper, columns: used.map(([column]) => column), values: used.map(([, value]) => value) });
+  }
+
+  lower(column: number): number {
+    return this.#lower[column];
+  }
+
+  upper(column: number): number {
+    return this.#upper[column];
+  }
+
+  raiseLower(column: number, value: number): void {
+    this.#lower[column] = Math.max(this.#lower[column], value);
+  }
+
+  cutUpper(column: number, value: number): void {
+    this.#upper[column] = Math.min(this.#upper[column], value);
+  }
+
+  /** The presence of a stock: absent, or at least `least`. Rows tie it to the share once bounds are final. */
+  presenceOf(stock: number): Presence {
+    const found = this.presences.find((presence) => presence.stock === stock);
+    if (found) return found;
+    const presence: Presence = { stock, column: this.addColumn(0, 0, 1), least: this.stocks[stock].leastDoseIfUsed ?? 0 };
+    this.presences.push(presence);
+    return presence;
+  }
+
+  /** Ties every presence to its share: share ≤ upper · presence, share ≥ least · presence. */
+  #tiePresences(): void {
+    for (const { stock, column, least } of this.presences) {
+      if (this.#lower[stock] > 0) this.#lower[column] = 1;
+      this.addRow({ kind: 'presence', stock }, -Infinity, 0, [
+        [stock, 1],
+        [column, -this.#upper[stock]],
+      ]);
+      if (least > 0) {
+        this.addRow({ kind: 'presence', stock }, 0, Infinity, [
+          [stock, 1],
+          [column, -least],
+        ]);
+      }
+    }
+  }
+
+  build(): SearchModel {
+    this.#tiePresences();
+    return {
+      stocks: this.stocks,
+      cost: Float64Array.from(this.#cost),
+      lower: Float64Array.from(this.#lower),
+      upper: Float64Array.from(this.#upper),
+      rows: this.rows,
+      presences: this.presences,
+      wholeLots: this.wholeLots,
+    };
+  }
+}

@@ -1,0 +1,76 @@
+import type { LinearEngine } from '../linear/linearEngine';
+import type { SearchModel } from '../rows/searchModel';
+import type { ResolvedOptions } from '../solveOptions';
+import { BranchAndBound, type RecipeCheck, type SearchResult } from './branchAndBound';
+
+/** Least cost per tonne: one search. */
+export function leastCostPerTonne(
+  engine: LinearEngine,
+  model: SearchModel,
+  options: ResolvedOptions,
+  isRecipe: RecipeCheck,
+): Promise<SearchResult> {
+  return new BranchAndBound(engine, model, options, isRecipe).run();
+}
+
+const MOST_ROUNDS = 12;
+
+function volumeOf(specificVolumes: Float64Array, values: ArrayLike<number>): number {
+  return specificVolumes.reduce((sum, volume, i) => sum + volume * values[i], 0);
+}
+
+function costOf(model: SearchModel, values: ArrayLike<number>): number {
+  return model.cost.reduce((sum, price, j) => sum + price * values[j], 0);
+}
+
+/**
+ * Least cost per cubic metre: Dinkelbach's method. With a trial price θ per m³ the search minimises cost - θ·volume;
+ * where the least difference is zero, θ is the least cost per m³. Two or three searches. A lower bound D of the
+ * difference proves cost/volume ≥ θ + D/(least volume) for D ≤ 0.
+ *
+ * @param specificVolumes m³ per tonne of each stock, along the model's stocks.
+ */
+export async function leastCostPerCubicMetre(
+  engine: LinearEngine,
+  model: SearchModel,
+  specificVolumes: Float64Array,
+  options: ResolvedOptions,
+  isRecipe: RecipeCheck,
+): Promise<SearchResult> {
+  const leastVolume = specificVolumes.reduce((least, volume) => Math.min(least, volume), Infinity);
+  const start = options.now();
+  let found = await leastCostPerTonne(engine, model, options, isRecipe);
+  let best = found.best;
+  if (!best || found.stopped !== 'finished') return withoutBound(found, best && best.cost / volumeOf(specificVolumes, best.values));
+  let price = best.cost / volumeOf(specificVolumes, best.values);
+  let lowerBound = -Infinity;
+  let nodes = found.nodes;
+  let linearPrograms = found.linearPrograms;
+  for (let round = 0; round < MOST_ROUNDS; round++) {
+    const trial = price;
+    const cost = model.cost.map((value, j) => value - (j < specificVolumes.length ? trial * specificVolumes[j] : 0));
+    const gapReference = Math.max(1e-12, Math.abs(trial) * leastVolume) / 2;
+    const rest = { ...options, timeLimitMs: Math.max(0, options.timeLimitMs - (options.now() - start)) };
+    found = await leastCostPerTonne(engine, { ...model, cost, gapReference }, rest, isRecipe);
+    nodes += found.nodes;
+    linearPrograms += found.linearPrograms;
+    if (found.best) {
+      const ratio = costOf(model, found.best.values) / volumeOf(specificVolumes, found.best.values);
+      if (ratio < price) {
+        price = ratio;
+        best = found.best;
+      }
+    }
+    lowerBound = Math.max(lowerBound, trial + Math.min(0, found.lowerBound) / leastVolume);
+    const close = price - lowerBound <= options.relativeGap * Math.abs(price);
+    if (close || found.stopped !== 'finished' || price >= trial) break;
+  }
+  const values = best.values;
+  return { ...found, best: { values, cost: price }, lowerBound: Math.min(price, lowerBound), nodes, linearPrograms };
+}
+
+/** A search that ended early says nothing of the cost per m³ below its recipe. */
+function withoutBound(found: SearchResult, price: number | undefined): SearchResult {
+  if (price === undefined || !found.best) return found;
+  return { ...found, best: { ...found.best, cost: price }, lowerBound: -Infinity };
+}

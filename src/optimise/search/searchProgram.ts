@@ -1,0 +1,208 @@
+import { viscosityIndex } from '../../property/viscosityIndex';
+import type { LinearEngine, LinearProgram, LinearResult, LinearRow, LinearSession } from '../linear/linearEngine';
+import type { SearchModel, ViLimits } from '../rows/searchModel';
+import { type ExtraTerms, safeBound } from './safeBound';
+import type { Line } from './viLine';
+import { knot, pieceOf, viKv40 } from './viPieces';
+
+/** Lines that hold the viscosity index over an interval of KV100: above the mix's KV40 index, and below it. */
+export interface ViRows {
+  /** Ends of the interval as indices of KV100. */
+  from: number;
+  to: number;
+  above?: readonly [Line, Line];
+  below?: Line;
+}
+
+const DYNAMIC_ROWS = 5;
+/** Columns of the three sums that carry viscosity, in this order: weights, KV100 indices, KV40 indices. */
+const SUMS = 3;
+
+/**
+ * A search model in a linear engine: static rows, and, where the viscosity index is limited, three free columns
+ * Q = Σ w x, N100 = Σ w I100 x, N40 = Σ w I40 x with five rows over them. An interval of KV100 and its lines are then
+ * a dozen coefficients, whatever the number of stocks.
+ */
+export class SearchProgram {
+  readonly model: SearchModel;
+  readonly lower: Float64Array;
+  readonly upper: Float64Array;
+  readonly #session: LinearSession;
+  readonly #costScale: number;
+  readonly #staticRows: number;
+  readonly #columns: number;
+  /** Scale of the sums, of the KV100 rows and of the VI rows: a residual of 1 is one reporting unit. */
+  readonly #scale: { sums: number; kv100: number; vi: number };
+  readonly #coefficients = new Float64Array(DYNAMIC_ROWS * SUMS).fill(1);
+  #active = new Array<boolean>(DYNAMIC_ROWS).fill(false);
+  solves = 0;
+
+  constructor(engine: LinearEngine, model: SearchModel) {
+    this.model = model;
+    this.#columns = model.cost.length;
+    this.lower = Float64Array.from(model.lower);
+    this.upper = Float64Array.from(model.upper);
+    this.#staticRows = model.rows.length;
+    this.#costScale = 1000 / model.cost.reduce((most, cost) => Math.max(most, Math.abs(cost)), 1e-300);
+    this.#scale = model.vi ? viScales(model.vi) : { sums: 1, kv100: 1, vi: 1 };
+    this.#session = engine.open(this.#program());
+  }
+
+  #program(): LinearProgram {
+    const { model } = this;
+    const sums = model.vi ? SUMS : 0;
+    const costRow: LinearRow = this.#costRow(model.cost);
+    const rows: LinearRow[] = [...model.rows, costRow];
+    const infinite = (sign: number) => Array.from({ length: sums }, () => sign * Infinity);
+    if (model.vi) rows.push(...this.#sumRows(model.vi), ...this.#dynamicRows());
+    return {
+      cost: Float64Array.from([...model.cost.map((cost) => cost * this.#costScale), ...infinite(1).map(() => 0)]),
+      lower: Float64Array.from([...model.lower, ...infinite(-1)]),
+      upper: Float64Array.from([...model.upper, ...infinite(1)]),
+      rows,
+    };
+  }
+
+  /** Cost of the mix, free until a ceiling is set. */
+  #costRow(cost: Float64Array): LinearRow {
+    const columns = [...cost.keys()];
+    return { lower: -Infinity, upper: Infinity, columns, values: columns.map((j) => cost[j] * this.#costScale) };
+  }
+
+  #sumRows(vi: ViLimits): LinearRow[] {
+    const parts = [vi.weights, vi.weights.map((w, i) => w * vi.index100[i]), vi.weights.map((w, i) => w * vi.index40[i])];
+    return parts.map((part, place) => {
+      const used = [...part.keys()].filter((i) => part[i] !== 0);
+      return {
+        lower: 0,
+        upper: 0,
+        columns: [...used, this.#columns + place],
+        values: [...used.map((i) => part[i] * this.#scale.sums), -1],
+      };
+    });
+  }
+
+  #dynamicRows(): LinearRow[] {
+    const columns = [this.#columns, this.#columns + 1, this.#columns + 2];
+    // Any non-zero pattern: the coefficients are set before the first solve.
+    return Array.from({ length: DYNAMIC_ROWS }, () => ({ lower: -Infinity, upper: Infinity, columns, values: [1, 1, 1] }));
+  }
+
+  setBounds(column: number, lower: number, upper: number): void {
+    if (this.lower[column] === lower && this.upper[column] === upper) return;
+    this.lower[column] = lower;
+    this.upper[column] = upper;
+    this.#session.setColumnBounds(column, lower, upper);
+  }
+
+  #setDynamic(row: number, coefficients: readonly [number, number, number] | undefined, upperSide: boolean): void {
+    const first = this.#staticRows + 1 + SUMS + row;
+    if (!coefficients) {
+      if (this.#active[row]) this.#session.setRowBounds(first, -Infinity, Infinity);
+      this.#active[row] = false;
+      return;
+    }
+    coefficients.forEach((value, sum) => {
+      if (this.#coefficients[row * SUMS + sum] === value) return;
+      this.#coefficients[row * SUMS + sum] = value;
+      this.#session.setCoefficient(first, this.#columns + sum, value);
+    });
+    if (!this.#active[row]) this.#session.setRowBounds(first, upperSide ? -Infinity : 0, upperSide ? 0 : Infinity);
+    this.#active[row] = true;
+  }
+
+  /** Sets the interval of KV100 and its lines. */
+  setViRows({ from, to, above, below }: ViRows): void {
+    const kv = this.#scale.kv100 / this.#scale.sums;
+    const vi = this.#scale.vi / this.#scale.sums;
+    const line = ({ offset, slope }: Line) => [-offset * vi, -slope * vi, vi] as const;
+    this.#setDynamic(0, [-from * kv, kv, 0], false);
+    this.#setDynamic(1, [-to * kv, kv, 0], true);
+    this.#setDynamic(2, above && line(above[0]), true);
+    this.#setDynamic(3, above && line(above[1]), true);
+    this.#setDynamic(4, below && line(below), false);
+  }
+
+  /** Minimises something else under a ceiling on the cost: used once, to choose among equals. */
+  solveForTie(weights: Float64Array, ceiling: number): LinearResult {
+    this.#session.forget();
+    weights.forEach((weight, column) => void this.#session.setCost(column, weight));
+    this.#session.setRowBounds(this.#staticRows, -Infinity, ceiling * this.#costScale);
+    const result = this.solve();
+    this.model.cost.forEach((cost, column) => void this.#session.setCost(column, cost * this.#costScale));
+    this.#session.setRowBounds(this.#staticRows, -Infinity, Infinity);
+    return result;
+  }
+
+  solve(): LinearResult {
+    this.solves++;
+    return this.#session.solve();
+  }
+
+  /** What the dynamic rows pull on each stock under the multipliers of a solve. */
+  #extra(multipliers: Float64Array, scale: number): ExtraTerms | undefined {
+    const { vi } = this.model;
+    if (!vi) return undefined;
+    const sums = [0, 0, 0];
+    const sizes = [0, 0, 0];
+    for (let row = 0; row < DYNAMIC_ROWS; row++) {
+      const multiplier = multipliers[this.#staticRows + 1 + SUMS + row] * scale;
+      const lowerSide = row === 0 || row === 4;
+      // A multiplier of the wrong sign leans on an infinite side: dropping it keeps the bound valid.
+      if (!this.#active[row] || !Number.isFinite(multiplier) || (lowerSide ? multiplier < 0 : multiplier > 0)) continue;
+      for (let sum = 0; sum < SUMS; sum++) {
+        const pull = multiplier * this.#coefficients[row * SUMS + sum] * this.#scale.sums;
+        sums[sum] += pull;
+        sizes[sum] += Math.abs(pull);
+      }
+    }
+    const pull = new Float64Array(this.#columns);
+    const magnitude = new Float64Array(this.#columns);
+    vi.weights.forEach((weight, i) => {
+      pull[i] = weight * (sums[0] + sums[1] * vi.index100[i] + sums[2] * vi.index40[i]);
+      magnitude[i] = weight * (sizes[0] + sizes[1] * Math.abs(vi.index100[i]) + sizes[2] * Math.abs(vi.index40[i]));
+    });
+    return { pull, magnitude };
+  }
+
+  /** Proven lower bound of the cost at the present bounds and lines, from the duals of a solve. */
+  boundOf(duals: Float64Array): number {
+    const scale = 1 / this.#costScale;
+    const multipliers = duals.subarray(0, this.#staticRows).map((dual) => dual * scale);
+    const { model, lower, upper } = this;
+    return safeBound({ cost: model.cost, lower, upper, rows: model.rows }, multipliers, this.#extra(duals, scale));
+  }
+
+  /** True where a ray proves that nothing meets the rows at the present bounds and lines; the rows it leans on. */
+  certifies(ray: Float64Array): { proven: boolean; rows: number[]; usesVi: boolean } {
+    const { model, lower, upper } = this;
+    const cost = new Float64Array(this.#columns);
+    for (const sign of [1, -1]) {
+      const turned = ray.map((value) => sign * value);
+      const multipliers = turned.subarray(0, this.#staticRows);
+      if (safeBound({ cost, lower, upper, rows: model.rows }, multipliers, this.#extra(turned, 1)) > 0) {
+        const rows = [...multipliers.keys()].filter((row) => multipliers[row] !== 0);
+        const lines = [2, 3, 4].map((row) => turned[this.#staticRows + 1 + SUMS + row]);
+        return { proven: true, rows, usesVi: model.vi !== undefined && lines.some((dual) => dual !== 0) };
+      }
+    }
+    return { proven: false, rows: [], usesVi: false };
+  }
+
+  dispose(): void {
+    this.#session.dispose();
+  }
+}
+
+/** Scales at the middle of the reachable KV100: 0.01 mm²/s for the interval rows, one VI point for the lines. */
+function viScales({ index, kv100, weights, min, max }: ViLimits): { sums: number; kv100: number; vi: number } {
+  const middle = Math.sqrt(kv100.from * Math.max(kv100.from, kv100.to));
+  const used = weights.filter((weight) => weight > 0);
+  const meanWeight = used.reduce((sum, weight) => sum + weight, 0) / Math.max(1, used.length) || 1;
+  const target = min?.value ?? max?.value ?? 100;
+  const kv40 = viKv40(target, pieceOf(Math.max(knot(0), middle)), middle).value;
+  const perPoint = Math.abs(viscosityIndex(kv40 * 1.001, middle) - viscosityIndex(kv40, middle)) / (0.001 * kv40);
+  const kvScale = 1 / (index.slope(middle) * 0.01 * meanWeight);
+  const viScale = perPoint / (index.slope(kv40) * meanWeight);
+  return { sums: Math.max(kvScale, viScale), kv100: kvScale, vi: viScale };
+}
