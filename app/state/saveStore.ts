@@ -4,10 +4,17 @@ import { create } from 'zustand';
 export interface SaveState {
   state: 'saved' | 'saving' | 'failed' | 'unavailable';
   message?: string;
+  /** A stored workbook that could not be read at the start: kept, and to be had as a file. */
+  setAside?: { text: string; message: string };
 }
 
 export const useSave = create<SaveState>(() => ({ state: 'saved' }));
 
-export function setSave(save: SaveState): void {
-  useSave.setState(save, true);
+/** Says how saving goes; what was set aside stays known. */
+export function setSave({ state, message }: Omit<SaveState, 'setAside'>): void {
+  useSave.setState({ state, message });
+}
+
+export function setSetAside(setAside: SaveState['setAside']): void {
+  useSave.setState({ setAside });
 }

@@ -1,0 +1,151 @@
+import { useMemo } from 'react';
+import { emptyWorkbook, restoreWorkbook, serialiseWorkbook } from '../../src';
+import { demoWorkbook } from '../demo/demoWorkbook';
+import { useAnswers } from './answerStore';
+import { environment } from './environment';
+import { deleteOrder, duplicateOrder, newOrder } from './orderEdits';
+import { useSave } from './saveStore';
+import { cancelSolve } from './solving';
+import { announce, selectOrder, useView } from './viewStore';
+import { redo, replaceWorkbook, undo, useWorkbook } from './workbookStore';
+
+/** One thing the user can do, shared by button, key and menu. */
+export interface Command<Arguments extends unknown[] = []> {
+  id: string;
+  label: string;
+  /** "Mod+Z"; Mod is Ctrl, or Cmd on a Mac. */
+  keys?: string | readonly string[];
+  enabled(): boolean;
+  run(...input: Arguments): unknown;
+  /** True where undo takes it back. */
+  undoable: boolean;
+}
+
+/** Largest file read [bytes]; the text inside has its own bound. */
+const LARGEST_FILE = 80_000_000;
+
+const always = () => true;
+const workbook = () => useWorkbook.getState().workbook;
+const orderOnScreen = () => workbook().orders.find(({ id }) => id === useView.getState().orderId);
+
+function fileName(name: string): string {
+  const plain = name
+    .normalize('NFKD')
+    .replace(/[^\w]+/g, '-')
+    .replace(/^-+|-+$/g, '')
+    .slice(0, 60);
+  return `${plain || 'workbook'}.basewright.json`;
+}
+
+function exportWorkbook(): void {
+  const current = workbook();
+  environment().download(fileName(current.name), serialiseWorkbook(current));
+  announce('Workbook exported.');
+}
+
+/** What a chosen file holds: a text, or why it cannot be read. */
+async function fileText(file: File): Promise<{ text: string } | { message: string }> {
+  if (file.size > LARGEST_FILE) return { message: 'This file is too large for a workbook. Pick another file.' };
+  try {
+    return { text: await file.text() };
+  } catch {
+    return { message: 'This file could not be read. Check that it is still there, and pick it again.' };
+  }
+}
+
+/** How an import went. On trouble the workbook is as it was. */
+export type Imported = { ok: true; notes: string[] } | { ok: false; message: string };
+
+async function importWorkbook(file: File): Promise<Imported> {
+  const read = await fileText(file);
+  const restored = 'text' in read ? restoreWorkbook(read.text) : { ok: false as const, message: read.message };
+  if (!restored.ok) {
+    announce(`${file.name} was not imported. ${restored.message}`);
+    return { ok: false, message: restored.message };
+  }
+  replaceWorkbook(restored.workbook, `import of ${file.name}`);
+  selectOrder(restored.workbook.orders[0]?.id);
+  announce([`${file.name} imported.`, ...restored.notes].join(' '));
+  return { ok: true, notes: restored.notes };
+}
+
+function newEmptyWorkbook(): void {
+  replaceWorkbook(emptyWorkbook(environment().newId(), 'New workbook'), 'new empty workbook');
+  selectOrder(undefined);
+  announce('A new empty workbook. Undo brings the former one back.');
+}
+
+function openDemo(): void {
+  const demo = demoWorkbook(environment().newId());
+  replaceWorkbook(demo, 'opening the demo');
+  selectOrder(demo.orders[0]?.id);
+  announce('The demo workbook. Its figures are invented. Undo brings the former workbook back.');
+}
+
+function exportSetAside(): void {
+  const { setAside } = useSave.getState();
+  if (setAside) environment().download('set-aside.basewright.json', setAside.text);
+}
+
+function isSolving(): boolean {
+  const { orderId } = useView.getState();
+  return orderId !== undefined && useAnswers.getState().answers[orderId]?.phase === 'solving';
+}
+
+export const COMMANDS = {
+  undo: { id: 'undo', label: 'Undo', keys: 'Mod+Z', enabled: () => useWorkbook.getState().canUndo, run: undo, undoable: false },
+  redo: {
+    id: 'redo',
+    label: 'Redo',
+    keys: ['Mod+Shift+Z', 'Mod+Y'],
+    enabled: () => useWorkbook.getState().canRedo,
+    run: redo,
+    undoable: false,
+  },
+  newOrder: { id: 'newOrder', label: 'New order', enabled: always, run: newOrder, undoable: true },
+  duplicateOrder: {
+    id: 'duplicateOrder',
+    label: 'Duplicate order',
+    enabled: () => orderOnScreen() !== undefined,
+    run: duplicateOrder,
+    undoable: true,
+  },
+  deleteOrder: {
+    id: 'deleteOrder',
+    label: 'Delete order',
+    enabled: () => orderOnScreen() !== undefined,
+    run: deleteOrder,
+    undoable: true,
+  },
+  cancelSolve: { id: 'cancelSolve', label: 'Cancel', enabled: isSolving, run: cancelSolve, undoable: false },
+  newEmptyWorkbook: { id: 'newEmptyWorkbook', label: 'New empty workbook', enabled: always, run: newEmptyWorkbook, undoable: true },
+  openDemo: { id: 'openDemo', label: 'Open the demo', enabled: always, run: openDemo, undoable: true },
+  exportWorkbook: { id: 'exportWorkbook', label: 'Export workbook', keys: 'Mod+S', enabled: always, run: exportWorkbook, undoable: false },
+  importWorkbook: { id: 'importWorkbook', label: 'Import workbook', enabled: always, run: importWorkbook, undoable: true },
+  exportSetAside: {
+    id: 'exportSetAside',
+    label: 'Export the workbook that could not be read',
+    enabled: () => useSave.getState().setAside !== undefined,
+    run: exportSetAside,
+    undoable: false,
+  },
+} satisfies Record<string, Command | Command<[File]>>;
+
+export type Commands = typeof COMMANDS;
+
+const { importWorkbook: _needsAFile, ...withoutInput } = COMMANDS;
+
+/** The commands that need nothing but a key or a click. */
+export const PLAIN_COMMANDS: readonly Command[] = Object.values(withoutInput);
+
+/** The commands; whoever reads them renders anew when one of them may have become possible or impossible. */
+export function useCommands(): Commands {
+  const canUndo = useWorkbook((state) => state.canUndo);
+  const canRedo = useWorkbook((state) => state.canRedo);
+  const orders = useWorkbook((state) => state.workbook.orders);
+  const orderId = useView((state) => state.orderId);
+  const solving = useAnswers(({ answers }) => orderId !== undefined && answers[orderId]?.phase === 'solving');
+  const setAside = useSave((state) => state.setAside);
+  // biome-ignore lint/correctness/useExhaustiveDependencies: a new object tells memoised readers that enabled() may differ
+  return useMemo(() => ({ ...COMMANDS }), [canUndo, canRedo, orders, orderId, solving, setAside]);
+}
