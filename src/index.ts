@@ -30,3 +30,18 @@ export { FAMILIES, type Family, isBaseOil } from './stock/family';
 export { FIGURE_ORIGINS, type Figure, type FigureOrigin } from './stock/figure';
 export { findFigure } from './stock/findFigure';
 export type { Recipe, RecipeLine, Stock } from './stock/stock';
+export { emptyOrder } from './workbook/emptyOrder';
+export { emptyWorkbook } from './workbook/emptyWorkbook';
+export type { OmittedProduct, UnreadCell } from './workbook/engineStocks';
+export { type Restored, restoreWorkbook } from './workbook/restoreWorkbook';
+export { serialiseWorkbook } from './workbook/serialiseWorkbook';
+export { type EngineOrder, toOrder } from './workbook/toOrder';
+export {
+  type Lot,
+  type Product,
+  type Workbook,
+  type WorkbookOrder,
+  type WorkbookSettings,
+  WORKBOOK_FORMAT,
+  WORKBOOK_VERSION,
+} from './workbook/workbook';

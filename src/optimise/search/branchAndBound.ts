@@ -147,9 +147,8 @@ export class BranchAndBound {
     }
     const { values } = result;
     if (this.#isSettledBy(values) && this.#offer(values)) {
+      // The recipe sits a rounding above the bound: nothing is left to split.
       this.#close(bound);
-      if (bound >= this.#cutoff()) return;
-      // The recipe sits a rounding above the bound: nothing to split.
       return;
     }
     this.#tryNear(open, values);
@@ -205,7 +204,7 @@ export class BranchAndBound {
 
   /** Takes a solution as the best recipe if it is one and cheaper; true where it is a recipe. */
   #offer(values: Float64Array): boolean {
-    const cost = this.model.cost.reduce((sum, price, column) => sum + price * values[column], 0);
+    const cost = this.#costOf(values);
     if (this.#best && cost >= this.#best.cost) return this.isRecipe(values);
     if (!this.isRecipe(values)) return false;
     this.#best = { values: Float64Array.from(values), cost };
@@ -294,22 +293,38 @@ export class BranchAndBound {
     return this.#best ? Math.min(this.#best.cost, bound) : bound;
   }
 
-  /** Among recipes of the proven cost the same one is always taken: least sum of ranks, from the logical basis. */
+  /**
+   * Among recipes of the proven cost the same one is always taken, the one of least rank sum: only columns that cost
+   * nothing to move may move, so that no trace of a dearer stock slips in under the ceiling.
+   */
   #chooseAmongEquals(): void {
     const best = this.#best;
     const { model } = this;
-    if (!best) return;
-    if (!this.#load({ bound: 0, depth: 0 })) return;
-    for (const bound of roundedBounds(model, this.#rows, best.values, this.#program.lower, this.#program.upper)) {
-      this.#program.setBounds(bound.column, bound.lower, bound.upper);
+    if (!best || !this.#load({ bound: 0, depth: 0 })) return;
+    const program = this.#program;
+    for (const bound of roundedBounds(model, this.#rows, best.values, program.lower, program.upper)) {
+      program.setBounds(bound.column, bound.lower, bound.upper);
     }
-    if (model.vi) this.#setInnerRows(mixViscosity(model.vi, best.values).kv100, this.#root().kv100 ?? { from: 2, to: 2 });
-    const ranks = Float64Array.from(model.cost, (_, column) => (column < model.stocks.length ? 1 + column / model.stocks.length : 0));
-    const ceiling = best.cost + 1e-10 * Math.abs(best.cost);
-    const result = this.#program.solveForTie(ranks, ceiling);
+    const root = this.#root().kv100;
+    if (model.vi && root) this.#setInnerRows(mixViscosity(model.vi, best.values).kv100, root);
+    const again = program.solve();
+    if (again.status !== 'optimal') return;
+    const idle = program.idleColumns(again.values, again.duals);
+    if (!idle.includes(true)) return;
+    idle.forEach((isIdle, column) => {
+      if (isIdle) return;
+      if (again.values[column] <= program.lower[column] + 1e-9) program.setBounds(column, program.lower[column], program.lower[column]);
+    });
+    const { length } = model.stocks;
+    const ranks = Float64Array.from(model.cost, (_, column) => (column < length ? 1 + column / length : 0));
+    const result = program.solveForTie(ranks, best.cost);
     if (result.status !== 'optimal' || !this.#isSettledBy(result.values) || !this.isRecipe(result.values)) return;
-    const cost = model.cost.reduce((sum, price, column) => sum + price * result.values[column], 0);
-    if (cost <= best.cost + 2e-10 * Math.abs(best.cost)) this.#best = { values: Float64Array.from(result.values), cost };
+    const cost = this.#costOf(result.values);
+    if (cost <= best.cost + 1e-9 * Math.abs(best.cost)) this.#best = { values: Float64Array.from(result.values), cost };
+  }
+
+  #costOf(values: Float64Array): number {
+    return this.model.cost.reduce((sum, price, column) => sum + price * values[column], 0);
   }
 
   #result(stopped: SearchResult['stopped']): SearchResult {

@@ -24,11 +24,16 @@ const EPSILON = 2 ** -52;
  * allowance for rounding. The only source of a bound in the search. With cost zero, a result above zero proves that
  * nothing meets the rows. A multiplier that leans on an infinite side is dropped.
  */
-export function safeBound(
+export function safeBound(program: BoundedProgram, multipliers: ArrayLike<number>, extra?: ExtraTerms): number {
+  return priceOut(program, multipliers, extra).bound;
+}
+
+/** The bound together with the reduced costs it rests on. */
+export function priceOut(
   { cost, lower, upper, rows }: BoundedProgram,
   multipliers: ArrayLike<number>,
   extra?: ExtraTerms,
-): number {
+): { bound: number; reduced: Float64Array } {
   const columns = cost.length;
   const reduced = Float64Array.from(cost);
   const magnitude = Float64Array.from(cost, Math.abs);
@@ -55,5 +60,5 @@ export function safeBound(
     bound += reduced[j] > 0 ? reduced[j] * lower[j] : reduced[j] * upper[j];
     size += magnitude[j] * Math.max(Math.abs(lower[j]), Math.abs(upper[j]));
   }
-  return bound - (rows.length + columns + 8) * EPSILON * size;
+  return { bound: bound - (rows.length + columns + 8) * EPSILON * size, reduced };
 }

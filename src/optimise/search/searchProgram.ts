@@ -1,7 +1,7 @@
 import { viscosityIndex } from '../../property/viscosityIndex';
 import type { LinearEngine, LinearProgram, LinearResult, LinearRow, LinearSession } from '../linear/linearEngine';
 import type { SearchModel, ViLimits } from '../rows/searchModel';
-import { type ExtraTerms, safeBound } from './safeBound';
+import { type ExtraTerms, priceOut, safeBound } from './safeBound';
 import type { Line } from './viLine';
 import { knot, pieceOf, viKv40 } from './viPieces';
 
@@ -123,7 +123,7 @@ export class SearchProgram {
     this.#setDynamic(4, below && line(below), false);
   }
 
-  /** Minimises something else under a ceiling on the cost: used once, to choose among equals. */
+  /** Minimises something else under a ceiling on the cost: used once, to choose among equals, from a fresh basis. */
   solveForTie(weights: Float64Array, ceiling: number): LinearResult {
     this.#session.forget();
     weights.forEach((weight, column) => void this.#session.setCost(column, weight));
@@ -167,10 +167,24 @@ export class SearchProgram {
 
   /** Proven lower bound of the cost at the present bounds and lines, from the duals of a solve. */
   boundOf(duals: Float64Array): number {
+    return this.#priceOut(duals).bound;
+  }
+
+  /** True for columns that sit on a bound and would change nothing in the cost if they moved. */
+  idleColumns(values: Float64Array, duals: Float64Array): boolean[] {
+    const { reduced } = this.#priceOut(duals);
+    const { lower, upper } = this;
+    return this.model.stocks.map((_, j) => {
+      const onBound = values[j] <= lower[j] + 1e-9 || values[j] >= upper[j] - 1e-9;
+      return onBound && lower[j] < upper[j] && Math.abs(reduced[j]) * this.#costScale < 1e-7;
+    });
+  }
+
+  #priceOut(duals: Float64Array) {
     const scale = 1 / this.#costScale;
     const multipliers = duals.subarray(0, this.#staticRows).map((dual) => dual * scale);
     const { model, lower, upper } = this;
-    return safeBound({ cost: model.cost, lower, upper, rows: model.rows }, multipliers, this.#extra(duals, scale));
+    return priceOut({ cost: model.cost, lower, upper, rows: model.rows }, multipliers, this.#extra(duals, scale));
   }
 
   /** True where a ray proves that nothing meets the rows at the present bounds and lines; the rows it leans on. */

@@ -1,0 +1,5 @@
+import type { LinearEngine } from './linearEngine';
+
+export function createJavascriptEngine(): LinearEngine {
+  throw new Error('not yet');
+}
