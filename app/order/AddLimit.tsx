@@ -1,4 +1,11 @@
-import { type Limit, type OwnProperty, PROPERTY_TABLE, type PropertyDefinition, VI_DEFINITION, type WorkbookOrder } from '../../src';
+import {
+  type Limit,
+  type OwnProperty,
+  PROPERTY_TABLE,
+  type PropertyDefinition,
+  VI_DEFINITION,
+  type WorkbookOrder,
+} from '../../src';
 import { Select, type SelectOption } from '../parts/Select';
 import { useWorkbook } from '../state/workbookStore';
 import styles from './LimitList.module.css';

@@ -3,7 +3,7 @@ import { Section } from '../parts/Section';
 import { Select } from '../parts/Select';
 import { useAnswer } from '../state/answerStore';
 import { DoseRow } from './DoseRow';
-import { problemsAt } from './problemsAt';
+import { doseProblems } from './problemsAt';
 import styles from './rules.module.css';
 import { editOrder, useProducts } from './useOrder';
 
@@ -20,7 +20,9 @@ export function DoseList({ order }: { order: WorkbookOrder }) {
 
   return (
     <Section title="Doses" level={3}>
-      {order.doses.length === 0 && <p className={styles.empty}>Nothing is dosed: every stock is taken by cost alone.</p>}
+      {order.doses.length === 0 && (
+        <p className={styles.empty}>Nothing is dosed: every stock is taken by cost alone.</p>
+      )}
       <ul className={styles.list}>
         {order.doses.map((dose, index) => (
           <DoseRow
@@ -28,7 +30,7 @@ export function DoseList({ order }: { order: WorkbookOrder }) {
             dose={dose}
             name={nameOf(dose.stockId)}
             known={products.some(({ id }) => id === dose.stockId)}
-            problems={problemsAt(answer, 'doses', index)}
+            problems={doseProblems(answer, dose.stockId)}
             onChange={(next: Dose) =>
               editOrder(order.id, `change the dose of ${nameOf(dose.stockId)}`, ({ doses }) => {
                 doses[index] = next;

@@ -67,7 +67,11 @@ export function DoseRow({
           }
         />
       )}
-      <BasisSelect label={`What the dose of ${name} is counted against`} value={dose.of} onChange={(of) => onChange({ ...dose, of })} />
+      <BasisSelect
+        label={`What the dose of ${name} is counted against`}
+        value={dose.of}
+        onChange={(of) => onChange({ ...dose, of })}
+      />
     </RuleRow>
   );
 }

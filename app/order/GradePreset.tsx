@@ -1,5 +1,5 @@
 import { useState } from 'react';
-import { type Grade, GRADES, type Limit, propertyDefinition, type WorkbookOrder } from '../../src';
+import { GRADES, type Grade, type Limit, propertyDefinition, type WorkbookOrder } from '../../src';
 import { IconButton } from '../parts/IconButton';
 import { Notice } from '../parts/Notice';
 import { Select } from '../parts/Select';

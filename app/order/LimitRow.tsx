@@ -4,9 +4,9 @@ import { IconButton } from '../parts/IconButton';
 import { NumberField } from '../parts/NumberField';
 import type { Answer } from '../state/answerStore';
 import { endEdit, useWorkbook } from '../state/workbookStore';
+import styles from './LimitList.module.css';
 import { LimitMore } from './LimitMore';
 import { LimitName } from './LimitName';
-import styles from './LimitList.module.css';
 import { checkOf, marksOf, mixValue } from './limitAnswer';
 import { type End, setEnd, upperEnd } from './limitEnds';
 import { contradiction, limitName, shortLimitName, unitOf } from './limitWords';
@@ -123,7 +123,9 @@ export function LimitRow({ orderId, limit, index, answer, isNew }: LimitRowProps
         </p>
       )}
       <div id={`${id}-more`} hidden={!open}>
-        {open && <LimitMore limit={limit} definition={definition} name={name} unit={unitOf(definition)} onEdit={edit} />}
+        {open && (
+          <LimitMore limit={limit} definition={definition} name={name} unit={unitOf(definition)} onEdit={edit} />
+        )}
       </div>
     </li>
   );

@@ -3,13 +3,12 @@ import type { Limit, PropertyDefinition } from '../../src';
 import { formatNumber } from '../parts/numberText';
 import { useWidth } from '../parts/useWidth';
 import { type End, upperEnd } from './limitEnds';
-import { limitName } from './limitWords';
 import styles from './Rail.module.css';
 import { RailEnd } from './RailEnd';
-import { RAIL } from './railLayout';
 import { RailMix } from './RailMix';
 import { RailStocks } from './RailStocks';
 import { RailZone } from './RailZone';
+import { RAIL } from './railLayout';
 import { keepScale, type RailScale, scaleNumbers, toFraction } from './railScale';
 import type { StockMark } from './stockOnRail';
 
@@ -48,12 +47,8 @@ export function Rail({ limit, definition, mix, passes, stale, marks, onMove, onE
 
   return (
     <div ref={ref} className={styles.rail}>
-      <svg
-        width={width}
-        height={RAIL.height}
-        role="group"
-        aria-label={`${limitName(limit)}, scale from ${formatNumber(scale.lo, 1)} to ${formatNumber(scale.hi, 1)}`}
-      >
+      {/* biome-ignore lint/a11y/noSvgWithoutTitle: its ends name themselves; a title would cover those of the marks */}
+      <svg width={width} height={RAIL.height}>
         <ScaleNumbers scale={scale} x={x} most={Math.floor(inner / 70)} />
         <line className={styles.track} x1={RAIL.margin} x2={RAIL.margin + inner} y1={RAIL.middle} y2={RAIL.middle} />
         <RailZone limit={limit} definition={definition} x={x} right={RAIL.margin + inner} />
@@ -66,7 +61,15 @@ export function Rail({ limit, definition, mix, passes, stale, marks, onMove, onE
         {limit.min !== undefined && <RailEnd end="min" value={limit.min} other={upper} x={x} {...shared} />}
         {upper !== undefined && <RailEnd end="max" value={upper} other={limit.min} x={x} {...shared} />}
         {mix !== undefined && (
-          <RailMix value={mix} definition={definition} scale={scale} x={x} width={width} passes={passes} stale={stale} />
+          <RailMix
+            value={mix}
+            definition={definition}
+            scale={scale}
+            x={x}
+            width={width}
+            passes={passes}
+            stale={stale}
+          />
         )}
       </svg>
     </div>
@@ -77,6 +80,7 @@ function ScaleNumbers({ scale, x, most }: { scale: RailScale; x(value: number): 
   const numbers = scaleNumbers(scale, Math.max(most, 2));
   const digits = Math.max(0, ...numbers.map((value) => (String(value).split('.')[1] ?? '').length));
   return (
+    // biome-ignore lint/a11y/noAriaHiddenOnFocusable: the numbers of a scale take no focus
     <g aria-hidden="true">
       {spread(numbers, x).map((value) => (
         <g key={value}>

@@ -68,7 +68,14 @@ export function RailEnd({
     >
       <rect className={styles.target} x={end === 'min' ? at - 22 : at - 4} y={4} width={26} height={40} />
       <line className={styles.edge} x1={at} x2={at} y1={RAIL.trackTop - 1} y2={RAIL.trackBottom + 1} />
-      <rect className={styles.grip} x={grip} y={RAIL.trackTop} width={6} height={RAIL.trackBottom - RAIL.trackTop} rx={2} />
+      <rect
+        className={styles.grip}
+        x={grip}
+        y={RAIL.trackTop}
+        width={6}
+        height={RAIL.trackBottom - RAIL.trackTop}
+        rx={2}
+      />
     </g>
   );
 }

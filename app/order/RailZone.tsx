@@ -30,7 +30,7 @@ export function RailZone({
   const margin = upperMargin(limit, definition.reportingUnit);
   const marginHigh = upper !== undefined && margin > 0 ? to - x(upper - margin) : 0;
   return (
-    <g aria-hidden="true">
+    <g>
       <pattern id={hatch} width="5" height="5" patternUnits="userSpaceOnUse" patternTransform="rotate(45)">
         <line className={styles.hatch} x1="0" x2="0" y1="0" y2="5" />
       </pattern>

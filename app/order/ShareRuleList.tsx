@@ -2,7 +2,7 @@ import type { ShareRule, WorkbookOrder } from '../../src';
 import { Section } from '../parts/Section';
 import { Select } from '../parts/Select';
 import { useAnswer } from '../state/answerStore';
-import { problemsAt } from './problemsAt';
+import { shareProblems } from './problemsAt';
 import styles from './rules.module.css';
 import { ShareRuleRow } from './ShareRuleRow';
 import { editOrder, useProducts } from './useOrder';
@@ -25,11 +25,11 @@ export function ShareRuleList({ order }: { order: WorkbookOrder }) {
       <ul className={styles.list}>
         {order.shares.map((rule, index) => (
           <ShareRuleRow
-            // Rules have no id and keep their order; a rule that is taken out takes its unfinished typing with it.
+            // biome-ignore lint/suspicious/noArrayIndexKey: rules have no id, keep their order, and the count is in the key
             key={`${rule.kind} ${index} of ${order.shares.length}`}
             rule={rule}
             products={products}
-            problems={problemsAt(answer, 'shares', index)}
+            problems={shareProblems(answer, index, rule.kind)}
             onChange={(next) =>
               editOrder(order.id, 'change a rule', ({ shares }) => {
                 shares[index] = next;

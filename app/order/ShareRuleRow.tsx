@@ -1,6 +1,6 @@
 import type { Product, ShareRule } from '../../src';
-import { CountRule, ExcludesRule, FlagRule, RatioRule, ShareOfSetRule } from './ruleFields';
 import { RuleRow } from './RuleRow';
+import { CountRule, ExcludesRule, FlagRule, RatioRule, ShareOfSetRule } from './ruleFields';
 import { isEmptySet } from './StockSetField';
 
 export interface RuleFieldsProps<Kind extends ShareRule['kind']> {

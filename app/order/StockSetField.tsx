@@ -24,11 +24,15 @@ export function StockSetField({
     { label: 'Flags', options: flags.map((flag) => ({ value: `flag:${flag}`, label: `carrying “${flag}”` })) },
   ];
   return (
-    <span className={styles.set} role="group" aria-label={label}>
+    <fieldset className={styles.set} aria-label={label}>
       {members.map(({ key, name }) => (
         <span key={key} className={styles.chip}>
           {name}
-          <IconButton icon="remove" label={`Take ${name} out of the set`} onClick={() => onChange(without(value, key))} />
+          <IconButton
+            icon="remove"
+            label={`Take ${name} out of the set`}
+            onClick={() => onChange(without(value, key))}
+          />
         </span>
       ))}
       <Select
@@ -41,7 +45,7 @@ export function StockSetField({
           .filter(({ options }) => options.length > 0)}
         onChange={(key) => onChange(including(value, key))}
       />
-    </span>
+    </fieldset>
   );
 }
 

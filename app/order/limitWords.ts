@@ -56,7 +56,8 @@ export function contradiction(limit: Limit, definition: PropertyDefinition): str
   const { value: most, strict } = upperEnd(limit);
   if (limit.min === undefined || most === undefined) return undefined;
   const least = withUnit(limit.min, definition);
-  if (limit.min > most) return `The least, ${least}, is above the most, ${withUnit(most, definition)}. Change one of them.`;
+  if (limit.min > most)
+    return `The least, ${least}, is above the most, ${withUnit(most, definition)}. Change one of them.`;
   if (strict && limit.min > most - definition.reportingUnit + 1e-9 * definition.reportingUnit) {
     return `Nothing lies at or above ${least} and below ${withUnit(most, definition)}. Change one of them.`;
   }

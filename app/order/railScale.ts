@@ -35,7 +35,11 @@ export function chooseScale({ values, logarithmic, reportingUnit, sense }: Scale
   const lo = Math.max(Math.floor(lowest / step + 1e-9) * step, sense.min);
   const hi = Math.min(Math.ceil(highest / step - 1e-9) * step, sense.max);
   const tidy = (value: number) => Number(value.toPrecision(10));
-  return { lo: logarithmic && lo <= 0 ? tidy(lowest) : tidy(lo), hi: hi > lo ? tidy(hi) : tidy(lo + step), logarithmic };
+  return {
+    lo: logarithmic && lo <= 0 ? tidy(lowest) : tidy(lo),
+    hi: hi > lo ? tidy(hi) : tidy(lo + step),
+    logarithmic,
+  };
 }
 
 /** Keeps the scale it has as long as everything can be seen on it and the values are not lost in a corner. */

@@ -13,7 +13,12 @@ export function ShareOfSetRule({ rule, products, onChange }: RuleFieldsProps<'sh
   return (
     <>
       <span className={styles.words}>Share of</span>
-      <StockSetField label="Stocks counted" value={rule.set} products={products} onChange={(set) => onChange({ ...rule, set })} />
+      <StockSetField
+        label="Stocks counted"
+        value={rule.set}
+        products={products}
+        onChange={(set) => onChange({ ...rule, set })}
+      />
       <RangeFields
         context="Share"
         unit="%"
@@ -22,7 +27,11 @@ export function ShareOfSetRule({ rule, products, onChange }: RuleFieldsProps<'sh
         value={range}
         onChange={({ min, max }) => onChange(withRange(rule, { min: fromPercent(min), max: fromPercent(max) }))}
       />
-      <BasisSelect label="What the share is counted against" value={rule.of} onChange={(of) => onChange({ ...rule, of })} />
+      <BasisSelect
+        label="What the share is counted against"
+        value={rule.of}
+        onChange={(of) => onChange({ ...rule, of })}
+      />
     </>
   );
 }
@@ -31,9 +40,19 @@ export function RatioRule({ rule, products, onChange }: RuleFieldsProps<'ratio'>
   return (
     <>
       <span className={styles.words}>Mass of</span>
-      <StockSetField label="Stocks counted" value={rule.set} products={products} onChange={(set) => onChange({ ...rule, set })} />
+      <StockSetField
+        label="Stocks counted"
+        value={rule.set}
+        products={products}
+        onChange={(set) => onChange({ ...rule, set })}
+      />
       <span className={styles.words}>to that of</span>
-      <StockSetField label="Stocks compared with" value={rule.to} products={products} onChange={(to) => onChange({ ...rule, to })} />
+      <StockSetField
+        label="Stocks compared with"
+        value={rule.to}
+        products={products}
+        onChange={(to) => onChange({ ...rule, to })}
+      />
       <RangeFields
         context="Ratio"
         unit="kg per kg"
@@ -50,7 +69,12 @@ export function CountRule({ rule, products, onChange }: RuleFieldsProps<'count'>
   return (
     <>
       <span className={styles.words}>Number used of</span>
-      <StockSetField label="Stocks counted" value={rule.set} products={products} onChange={(set) => onChange({ ...rule, set })} />
+      <StockSetField
+        label="Stocks counted"
+        value={rule.set}
+        products={products}
+        onChange={(set) => onChange({ ...rule, set })}
+      />
       <RangeFields
         context="Number of stocks"
         digits={0}
@@ -76,13 +100,20 @@ export function ExcludesRule({ rule, products, onChange }: RuleFieldsProps<'excl
         onChange={(stockId) => onChange({ ...rule, stockId })}
       />
       <span className={styles.words}>is used, none of</span>
-      <StockSetField label="Stocks excluded" value={rule.set} products={products} onChange={(set) => onChange({ ...rule, set })} />
+      <StockSetField
+        label="Stocks excluded"
+        value={rule.set}
+        products={products}
+        onChange={(set) => onChange({ ...rule, set })}
+      />
     </>
   );
 }
 
 export function FlagRule({ rule, products, onChange }: RuleFieldsProps<'flag'>) {
-  const flags = [...new Set([...products.flatMap((product) => product.flags ?? []), ...(rule.flag ? [rule.flag] : [])])];
+  const flags = [
+    ...new Set([...products.flatMap((product) => product.flags ?? []), ...(rule.flag ? [rule.flag] : [])]),
+  ];
   return (
     <>
       <span className={styles.words}>Every stock carries</span>

@@ -1,6 +1,6 @@
 import { type ReactNode, useEffect, useId, useRef } from 'react';
-import { IconButton } from './IconButton';
 import styles from './Dialog.module.css';
+import { IconButton } from './IconButton';
 
 export interface DialogProps {
   title: string;

@@ -1,0 +1,55 @@
+import { AnswerPanel } from '../answer/AnswerPanel';
+import { OrderEditor } from '../order/OrderEditor';
+import { useCommandKeys } from '../parts/useCommandKeys';
+import { PLAIN_COMMANDS } from '../state/commands';
+import { useView } from '../state/viewStore';
+import { StocksTable } from '../stocks/StocksTable';
+import { Announcer } from './Announcer';
+import { AnswerBar } from './AnswerBar';
+import styles from './App.module.css';
+import { ErrorBoundary } from './ErrorBoundary';
+import { Footer } from './Footer';
+import { Header } from './Header';
+import { OrderList } from './OrderList';
+import { PageNav } from './PageNav';
+
+/** The sheet: orders, the order, its answer, and the stocks below. */
+export function App() {
+  const orderId = useView((view) => view.orderId);
+  useCommandKeys(PLAIN_COMMANDS);
+  return (
+    <div className={styles.page}>
+      <Header />
+      <PageNav />
+      <main className={styles.sheet}>
+        <div className={styles.orders}>
+          <OrderList orderId={orderId} />
+        </div>
+        <div id="order" className={styles.order}>
+          {orderId === undefined ? (
+            <p className={styles.nothing}>Choose an order, or start a new one.</p>
+          ) : (
+            <ErrorBoundary key={orderId} what="The order">
+              <OrderEditor key={orderId} orderId={orderId} />
+            </ErrorBoundary>
+          )}
+        </div>
+        <div id="answer" className={styles.answer}>
+          {orderId !== undefined && (
+            <ErrorBoundary key={orderId} what="The answer">
+              <AnswerPanel orderId={orderId} />
+            </ErrorBoundary>
+          )}
+        </div>
+        <div id="stocks" className={styles.stocks}>
+          <ErrorBoundary what="The stocks">
+            <StocksTable />
+          </ErrorBoundary>
+        </div>
+      </main>
+      <Footer />
+      <AnswerBar orderId={orderId} />
+      <Announcer />
+    </div>
+  );
+}

@@ -1,0 +1,125 @@
+import { render, screen } from '@testing-library/react';
+import userEvent from '@testing-library/user-event';
+import { useState } from 'react';
+import { describe, expect, it, vi } from 'vitest';
+import { NumberField, type NumberFieldProps } from '../../../app/parts/NumberField';
+
+type Options = Partial<NumberFieldProps> & { start?: number };
+
+/** A field that keeps what it is told, as the page does. */
+function setUp({ start, ...options }: Options = {}) {
+  const onCommit = vi.fn<(value: number | undefined) => void>();
+  const onDraft = vi.fn<(value: number) => void>();
+  function Keeper() {
+    const [value, setValue] = useState(start);
+    return (
+      <NumberField
+        label="least"
+        unit="mm²/s"
+        digits={2}
+        {...options}
+        value={value}
+        onCommit={(next) => {
+          onCommit(next);
+          setValue(next);
+        }}
+        onDraft={
+          options.onDraft &&
+          ((next) => {
+            onDraft(next);
+            setValue(next);
+          })
+        }
+      />
+    );
+  }
+  render(<Keeper />);
+  const field = screen.getByRole('textbox', { name: /least, mm²\/s/ });
+  return { field, onCommit, onDraft, user: userEvent.setup() };
+}
+
+const live = () => undefined;
+
+describe('NumberField', () => {
+  it.each(['12,5', '12.5'])('takes %s and shows it in the user’s own decimal sign', async (text) => {
+    const { field, onCommit, user } = setUp();
+    await user.type(field, `${text}{Enter}`);
+    expect(onCommit).toHaveBeenCalledExactlyOnceWith(12.5);
+    expect(field).toHaveValue('12.50');
+  });
+
+  it('commits on leaving the field, and an emptied field as no number', async () => {
+    const { field, onCommit, user } = setUp({ start: 44.6 });
+    await user.clear(field);
+    await user.tab();
+    expect(onCommit).toHaveBeenCalledExactlyOnceWith(undefined);
+  });
+
+  it('says nothing when the field is left as it was', async () => {
+    const { field, onCommit, user } = setUp({ start: 44.6 });
+    await user.click(field);
+    await user.tab();
+    expect(onCommit).not.toHaveBeenCalled();
+  });
+
+  it('keeps what it cannot read as typed, says why beside it, and keeps the last good number', async () => {
+    const { field, onCommit, user } = setUp({ start: 44.6 });
+    await user.clear(field);
+    await user.type(field, '1,234{Enter}');
+    expect(field).toHaveValue('1,234');
+    expect(field).toBeInvalid();
+    expect(field).toHaveAccessibleDescription(
+      '“1,234” can be read in two ways. Write 1234 or 1.234. Until then 44.60 counts.',
+    );
+    expect(onCommit).not.toHaveBeenCalled();
+  });
+
+  it('hands a text it cannot read to whoever keeps it', async () => {
+    const onUnread = vi.fn();
+    const { field, user } = setUp({ onUnread });
+    await user.type(field, 'abut 12{Enter}');
+    expect(onUnread).toHaveBeenCalledExactlyOnceWith('abut 12');
+  });
+
+  it('shows a kept text with its problem', () => {
+    const { field } = setUp({ unreadText: '12..5' });
+    expect(field).toHaveValue('12..5');
+    expect(field).toHaveAccessibleDescription(/more than one way/);
+  });
+
+  it('does not take a number that cannot be right', async () => {
+    const { field, onCommit, user } = setUp({ sense: { min: 0, max: 100 }, start: 5 });
+    await user.clear(field);
+    await user.type(field, '150{Enter}');
+    expect(onCommit).not.toHaveBeenCalled();
+    expect(field).toHaveAccessibleDescription('150 cannot be right: expected 0 to 100. Until then 5.00 counts.');
+  });
+
+  it('goes back on Escape', async () => {
+    const { field, onCommit, user } = setUp({ start: 44.6 });
+    await user.clear(field);
+    await user.type(field, '50{Escape}');
+    expect(field).toHaveValue('44.60');
+    await user.tab();
+    expect(onCommit).not.toHaveBeenCalled();
+  });
+
+  it('goes back on Escape to the number it had on entering, though drafts were live', async () => {
+    const { field, onCommit, onDraft, user } = setUp({ start: 44.6, onDraft: live });
+    await user.clear(field);
+    await user.type(field, '50');
+    expect(onDraft.mock.calls).toEqual([[5], [50]]);
+    await user.keyboard('{Escape}');
+    expect(onCommit).toHaveBeenCalledExactlyOnceWith(44.6);
+    expect(field).toHaveValue('44.60');
+  });
+
+  it('steps by the reporting unit, ten of them with Shift, and commits once on leaving', async () => {
+    const { field, onCommit, onDraft, user } = setUp({ start: 44.6, step: 0.1, onDraft: live });
+    await user.click(field);
+    await user.keyboard('{ArrowUp}{ArrowUp}{ArrowDown}{Shift>}{ArrowUp}{/Shift}');
+    expect(onDraft.mock.calls).toEqual([[44.7], [44.8], [44.7], [45.7]]);
+    await user.tab();
+    expect(onCommit).toHaveBeenCalledExactlyOnceWith(45.7);
+  });
+});
