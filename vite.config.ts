@@ -1,5 +1,11 @@
 import react from '@vitejs/plugin-react';
-import { defineConfig } from 'vite';
+import { defineConfig, type Rolldown } from 'vite';
+
+/** highs reads node:module where it runs in Node, behind a test for Node: no news to whoever builds the app. */
+const onLog: Rolldown.InputOptions['onLog'] = (level, log, print) => {
+  if (!(log.message.includes('"node:module" has been externalized') && log.message.includes('highs')))
+    print(level, log);
+};
 
 export default defineConfig({
   root: 'app',
@@ -8,7 +14,7 @@ export default defineConfig({
   // Relative addresses, so that the built folder can be hosted under any path.
   base: './',
   plugins: [react()],
-  worker: { format: 'es' },
+  worker: { format: 'es', rolldownOptions: { onLog } },
   build: {
     outDir: '../dist',
     emptyOutDir: true,
@@ -16,6 +22,7 @@ export default defineConfig({
     // HiGHS (wasm) is meant to be a file of its own, and no asset may become a data: address the policy refuses.
     assetsInlineLimit: 0,
     rolldownOptions: {
+      onLog,
       output: {
         codeSplitting: {
           // The chart is loaded after the first paint. A group draws in the dependencies of its modules, so what
