@@ -28,7 +28,7 @@ test('the page needs at most 250 kB of JavaScript, gzipped, and neither the char
   const bytes = [...scripts.values()].reduce((sum, code) => sum + gzipSync(code).length, 0);
   console.log(`Initial JavaScript: ${(bytes / 1000).toFixed(1)} kB gzipped in ${scripts.size} files.`);
   expect(bytes).toBeLessThanOrEqual(INITIAL_BUDGET);
-  expect([...scripts.keys()].filter((file) => path.basename(file).startsWith('chart'))).toEqual([]);
+  expect([...scripts.keys()].filter((file) => path.basename(file).startsWith('chart-'))).toEqual([]);
   expect([...scripts.values()].some((code) => code.includes('recharts-'))).toBe(false);
 });
 
