@@ -12,6 +12,10 @@ function order(id: string, name: string, fields: Partial<WorkbookOrder>): Workbo
   return { ...emptyOrder(id, name), batchTonnes: 10, ...fields };
 }
 
+/** What a supplier recommends for mineral oils. */
+const DEPRESSANT_DOSE = { stockId: 'depressant', exactly: 0.002 };
+const GEAR_PACKAGE_DOSE = { stockId: 'gear-package', exactly: 0.018 };
+
 const hydraulicOil = order('vg-46-hydraulic', 'VG 46 hydraulic oil, Quillmere Presses', {
   note: 'Raise VI to 105 to see the price of ten points: the mix moves into Group II and III.',
   excludedProductIds: without('hydraulic-package', 'depressant'),
@@ -20,12 +24,14 @@ const hydraulicOil = order('vg-46-hydraulic', 'VG 46 hydraulic oil, Quillmere Pr
     { property: 'vi', min: 95 },
     { property: 'pourPoint', max: -24 },
   ],
-  doses: [
-    { stockId: 'hydraulic-package', exactly: 0.0085 },
-    { stockId: 'depressant', exactly: 0.002 },
-  ],
+  doses: [{ stockId: 'hydraulic-package', exactly: 0.0085 }, DEPRESSANT_DOSE],
   depressant: true,
-  laboratoryOnly: ['Foam, ASTM D892', 'Demulsibility, ASTM D1401', 'Copper strip, ASTM D130', 'Air release, ASTM D3427'],
+  laboratoryOnly: [
+    'Foam, ASTM D892',
+    'Demulsibility, ASTM D1401',
+    'Copper strip, ASTM D130',
+    'Air release, ASTM D3427',
+  ],
 });
 
 const drivelineBase = order('driveline-6', '6 mm²/s base for a driveline oil, Dunvarke Drivetrains', {
@@ -37,20 +43,22 @@ const drivelineBase = order('driveline-6', '6 mm²/s base for a driveline oil, D
     { property: 'noack', max: 8 },
     { property: 'pourPoint', max: -36 },
   ],
+  // The finished oil's package brings the depressant, so the base reads the figures with it and carries no dose.
   depressant: true,
   laboratoryOnly: ['Brookfield viscosity at -40 °C, ASTM D2983', 'Copper strip, ASTM D130'],
 });
 
 const multigradeBase = order('multigrade-base', 'Multigrade engine oil base, Orvenholt Fleet Oils', {
   note: 'The concentrate sits at its cap. Approved engine oils lock their base-oil slate: this is a study, not a formula.',
-  excludedProductIds: without('ocp-concentrate'),
+  excludedProductIds: without('ocp-concentrate', 'depressant'),
   limits: [
     { property: 'kv', celsius: 100, min: 10.2, max: 11.8 },
     { property: 'vi', min: 155 },
     { property: 'noack', max: 13 },
   ],
-  doses: [{ stockId: 'ocp-concentrate', max: 0.12 }],
+  doses: [{ stockId: 'ocp-concentrate', max: 0.12 }, DEPRESSANT_DOSE],
   shares: [{ kind: 'share', set: { families: ['Group I'] }, max: 0 }],
+  depressant: true,
   // The concentrate takes the Noack volatility of the rest up to its cap; its oil is of the same kind.
   greatestDoseAsTheRest: 0.12,
   laboratoryOnly: ['CCS, ASTM D5293', 'HTHS, ASTM D4683', 'MRV, ASTM D4684', 'KV100 after shear, ASTM D6278'],
@@ -64,12 +72,17 @@ const syntheticGearOil = order('vg-320-synthetic', 'VG 320 synthetic gear oil, S
     { property: 'vi', min: 150 },
     { property: 'pourPoint', max: -36 },
   ],
-  doses: [{ stockId: 'gear-package', exactly: 0.018 }],
+  doses: [GEAR_PACKAGE_DOSE],
   shares: [
     { kind: 'flag', flag: 'synthetic' },
     { kind: 'share', set: { families: ['ester'] }, min: 0.08, max: 0.15 },
   ],
-  laboratoryOnly: ['Foam, ASTM D892', 'Demulsibility, ASTM D2711', 'Copper strip, ASTM D130', 'FZG scuffing, ISO 14635-1'],
+  laboratoryOnly: [
+    'Foam, ASTM D892',
+    'Demulsibility, ASTM D2711',
+    'Copper strip, ASTM D130',
+    'FZG scuffing, ISO 14635-1',
+  ],
 });
 
 const impossibleBase = order('impossible-base', 'Thin base with little volatility, Moorkappel Compressors', {
@@ -92,8 +105,10 @@ const gearOilLimits: WorkbookOrder['limits'] = [
 
 const mineralGearOil = order('vg-220-mineral', 'VG 220 mineral gear oil, Pellwyck Cement Mills', {
   note: 'Half bright stock. The next order shows what it costs when bright stock is short.',
-  excludedProductIds: without(),
+  excludedProductIds: without('gear-package', 'depressant'),
   limits: gearOilLimits,
+  doses: [GEAR_PACKAGE_DOSE, DEPRESSANT_DOSE],
+  depressant: true,
   laboratoryOnly: ['Foam, ASTM D892', 'Demulsibility, ASTM D2711', 'Copper strip, ASTM D130'],
 });
 

@@ -93,7 +93,14 @@ function isSolving(): boolean {
 }
 
 export const COMMANDS = {
-  undo: { id: 'undo', label: 'Undo', keys: 'Mod+Z', enabled: () => useWorkbook.getState().canUndo, run: undo, undoable: false },
+  undo: {
+    id: 'undo',
+    label: 'Undo',
+    keys: 'Mod+Z',
+    enabled: () => useWorkbook.getState().canUndo,
+    run: undo,
+    undoable: false,
+  },
   redo: {
     id: 'redo',
     label: 'Redo',
@@ -118,10 +125,29 @@ export const COMMANDS = {
     undoable: true,
   },
   cancelSolve: { id: 'cancelSolve', label: 'Cancel', enabled: isSolving, run: cancelSolve, undoable: false },
-  newEmptyWorkbook: { id: 'newEmptyWorkbook', label: 'New empty workbook', enabled: always, run: newEmptyWorkbook, undoable: true },
+  newEmptyWorkbook: {
+    id: 'newEmptyWorkbook',
+    label: 'New empty workbook',
+    enabled: always,
+    run: newEmptyWorkbook,
+    undoable: true,
+  },
   openDemo: { id: 'openDemo', label: 'Open the demo', enabled: always, run: openDemo, undoable: true },
-  exportWorkbook: { id: 'exportWorkbook', label: 'Export workbook', keys: 'Mod+S', enabled: always, run: exportWorkbook, undoable: false },
-  importWorkbook: { id: 'importWorkbook', label: 'Import workbook', enabled: always, run: importWorkbook, undoable: true },
+  exportWorkbook: {
+    id: 'exportWorkbook',
+    label: 'Export workbook',
+    keys: 'Mod+S',
+    enabled: always,
+    run: exportWorkbook,
+    undoable: false,
+  },
+  importWorkbook: {
+    id: 'importWorkbook',
+    label: 'Import workbook',
+    enabled: always,
+    run: importWorkbook,
+    undoable: true,
+  },
   exportSetAside: {
     id: 'exportSetAside',
     label: 'Export the workbook that could not be read',
@@ -136,7 +162,7 @@ export type Commands = typeof COMMANDS;
 const { importWorkbook: _needsAFile, ...withoutInput } = COMMANDS;
 
 /** The commands that need nothing but a key or a click. */
-export const PLAIN_COMMANDS: readonly Command[] = Object.values(withoutInput);
+export const keyedCommands: readonly Command[] = Object.values(withoutInput);
 
 /** The commands; whoever reads them renders anew when one of them may have become possible or impossible. */
 export function useCommands(): Commands {

@@ -4,15 +4,15 @@ import { create } from 'zustand';
 export interface SaveState {
   state: 'saved' | 'saving' | 'failed' | 'unavailable';
   message?: string;
-  /** A stored workbook that could not be read at the start: kept, and to be had as a file. */
-  setAside?: { text: string; message: string };
+  /** A stored workbook that could not be read: kept, and to be had as a file. `message` where that is news. */
+  setAside?: { text: string; message?: string };
 }
 
 export const useSave = create<SaveState>(() => ({ state: 'saved' }));
 
-/** Says how saving goes; what was set aside stays known. */
+/** Says how saving goes. That a workbook was set aside stays in sight as long as nothing worse is to be said. */
 export function setSave({ state, message }: Omit<SaveState, 'setAside'>): void {
-  useSave.setState({ state, message });
+  useSave.setState(({ setAside }) => ({ state, message: message ?? setAside?.message }));
 }
 
 export function setSetAside(setAside: SaveState['setAside']): void {

@@ -22,7 +22,16 @@ function ask(workbook: Workbook, orderId: string): void {
   }
   asked.set(orderId, question);
   const sinceMs = phase === 'solving' ? answerOf(orderId).sinceMs : environment().now();
-  setAnswer(orderId, { phase: 'solving', stale: stale || phase !== 'idle', omitted, unread, notes, progress: undefined, message: undefined, sinceMs });
+  setAnswer(orderId, {
+    phase: 'solving',
+    stale: stale || phase !== 'idle',
+    omitted,
+    unread,
+    notes,
+    progress: undefined,
+    message: undefined,
+    sinceMs,
+  });
   const isNewest = () => asked.get(orderId) === question;
   client.solve(order, {
     onProgress: (progress) => isNewest() && setAnswer(orderId, { progress }),

@@ -31,14 +31,17 @@ async function lastWorkbook(storage: WorkbookStorage | undefined): Promise<Workb
   const loaded = await storage?.loadCurrent();
   if (loaded?.kind === 'workbook') {
     if (loaded.notes.length > 0) announce(loaded.notes.join(' '));
-    return loaded.workbook;
   }
   if (loaded?.kind === 'set aside') {
     const { text, message } = loaded.setAside;
-    setSetAside({ text, message });
-    announce(`The workbook kept in this browser could not be read and was set aside; the demo is open. ${message}`);
+    const news = `The workbook kept in this browser could not be read. It is set aside as it was (menu: export it); the demo is open. ${message}`;
+    setSetAside({ text, message: news });
+    announce(news);
+  } else {
+    const earlier = (await storage?.setAside())?.at(-1);
+    if (earlier) setSetAside({ text: earlier.text });
   }
-  return freshDemo();
+  return loaded?.kind === 'workbook' ? loaded.workbook : freshDemo();
 }
 
 /** Shows the order that was on screen, or the first; and a neighbour where the one on screen goes away. */

@@ -38,11 +38,7 @@ export function openWorkbook(workbook: Workbook): void {
  * Changes the workbook as one undo step. Edits in a row with the same `join` key are one step, until `endEdit()`
  * or an edit with another key. A change that changes nothing leaves no step.
  */
-export function editWorkbook(
-  label: string,
-  change: (draft: Workbook) => void,
-  { join }: { join?: string } = {},
-): void {
+export function editWorkbook(label: string, change: (draft: Workbook) => void, { join }: { join?: string } = {}): void {
   const { workbook, past } = useWorkbook.getState();
   const [next, forward, inverse] = produceWithPatches(workbook, (draft: Workbook) => {
     change(draft);

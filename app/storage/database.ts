@@ -38,7 +38,9 @@ const VERSION = 1;
 
 function createStores(database: IDBDatabase): void {
   database.createObjectStore('workbooks', { keyPath: 'id' });
-  database.createObjectStore('versions', { keyPath: 'key', autoIncrement: true }).createIndex('workbookId', 'workbookId');
+  database
+    .createObjectStore('versions', { keyPath: 'key', autoIncrement: true })
+    .createIndex('workbookId', 'workbookId');
   database.createObjectStore('setAside', { keyPath: 'key', autoIncrement: true });
   database.createObjectStore('meta');
 }

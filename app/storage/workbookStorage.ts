@@ -38,7 +38,13 @@ async function putVersion(database: Database, version: StoredVersion): Promise<v
   await transaction.done;
 }
 
-async function setAsideCurrent(database: Database, id: string, text: string, message: string, at: string): Promise<SetAside> {
+async function setAsideCurrent(
+  database: Database,
+  id: string,
+  text: string,
+  message: string,
+  at: string,
+): Promise<SetAside> {
   const setAside: SetAside = { text, message, setAsideAt: at };
   const transaction = database.transaction(['setAside', 'workbooks', 'meta'], 'readwrite');
   await transaction.objectStore('setAside').add(setAside);

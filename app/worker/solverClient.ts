@@ -49,7 +49,13 @@ interface Job {
 
 type Timer = ReturnType<typeof setTimeout> | undefined;
 
-const DEFAULTS = { timeLimitMs: 20_000, secondTimeLimitMs: 8_000, graceMs: 5_000, loadLimitMs: 60_000, patienceMs: 400 };
+const DEFAULTS = {
+  timeLimitMs: 20_000,
+  secondTimeLimitMs: 8_000,
+  graceMs: 5_000,
+  loadLimitMs: 60_000,
+  patienceMs: 400,
+};
 const CANCEL_GRACE_MS = 1_500;
 
 /**
@@ -136,14 +142,18 @@ export function createSolverClient(options: SolverClientOptions): SolverClient {
       if (running) watch();
       return;
     }
-    if (message.kind === 'no engine') return withoutHighs(message.message);
+    if (message.kind === 'no engine') {
+      withoutHighs(message.message);
+      return;
+    }
     const job = running;
     if (!job || message.id !== job.id) return;
     if (message.kind === 'progress') {
       if (!job.cancelled) watch();
       job.listener.onProgress?.(message.progress);
     } else if (message.kind === 'error') end(({ onFailed }) => onFailed(WORDS.failed(message.message)));
-    else if (job.cancelled === 'for a newer order' && message.outcome.stopped === 'cancelled') end((listener) => listener.onDropped?.());
+    else if (job.cancelled === 'for a newer order' && message.outcome.stopped === 'cancelled')
+      end((listener) => listener.onDropped?.());
     else end((listener) => listener.onOutcome(message.outcome, job.notice ?? notice));
   }
 
@@ -158,7 +168,10 @@ export function createSolverClient(options: SolverClientOptions): SolverClient {
 
   function withoutHighs(reason: string): void {
     stop();
-    if (kind === 'javascript') return end(({ onFailed }) => onFailed(WORDS.noEngine(reason)));
+    if (kind === 'javascript') {
+      end(({ onFailed }) => onFailed(WORDS.noEngine(reason)));
+      return;
+    }
     kind = 'javascript';
     notice = WORDS.secondEngine(reason);
     if (running) send({ ...running, sent: false });
@@ -168,8 +181,8 @@ export function createSolverClient(options: SolverClientOptions): SolverClient {
     const wasReady = ready;
     stop();
     // A worker that never came to life will not do so the second time.
-    if (!wasReady) return withoutHighs(reason || WORDS.notStarted);
-    if (!sendAgain(WORDS.restarted('broke down'))) endLost(WORDS.crashed(reason));
+    if (!wasReady) withoutHighs(reason || WORDS.notStarted);
+    else if (!sendAgain(WORDS.restarted('broke down'))) endLost(WORDS.crashed(reason));
   }
 
   /** Ends the job in hand without an answer, unless nobody waits for it any more. */
@@ -180,10 +193,13 @@ export function createSolverClient(options: SolverClientOptions): SolverClient {
   }
 
   function hung(): void {
-    if (!ready) return withoutHighs(WORDS.notLoaded(loadLimitMs));
+    if (!ready) {
+      withoutHighs(WORDS.notLoaded(loadLimitMs));
+      return;
+    }
     stop();
-    if (kind === 'javascript') return endLost(WORDS.secondEngineHung(secondTimeLimitMs + graceMs));
-    if (!sendAgain(WORDS.restarted('stopped answering'))) endLost(WORDS.hung);
+    if (kind === 'javascript') endLost(WORDS.secondEngineHung(secondTimeLimitMs + graceMs));
+    else if (!sendAgain(WORDS.restarted('stopped answering'))) endLost(WORDS.hung);
   }
 
   function cancelRunning(why: NonNullable<Job['cancelled']>): void {

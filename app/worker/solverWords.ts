@@ -14,6 +14,7 @@ export const WORDS = {
   hung: 'The solver stopped answering twice on this order and was ended. Change the order or reload the page. The workbook is safe.',
   secondEngineHung: (ms: number) =>
     `The slower solver did not answer in ${seconds(ms)} and was ended. Change a limit a little, or reload the page to try the main solver again.`,
-  failed: (reason: string) => `The solver broke off (${reason}). Change the order or reload the page. The workbook is safe.`,
+  failed: (reason: string) =>
+    `The solver broke off (${reason}). Change the order or reload the page. The workbook is safe.`,
   cancelled: 'Cancelled: the solver had to be ended, so there is no answer. Solve again by changing the order.',
 };

@@ -1,4 +1,4 @@
-import { type Workbook, WORKBOOK_FORMAT, WORKBOOK_VERSION } from './workbook';
+import { WORKBOOK_FORMAT, WORKBOOK_VERSION, type Workbook } from './workbook';
 
 /** A workbook with nothing in it but its settings (prices in euro until the user says otherwise). */
 export function emptyWorkbook(id: string, name: string): Workbook {

@@ -68,7 +68,9 @@ function engineShares(rule: ShareRule, known: StocksOf): ShareRule[] {
   if (rule.kind === 'flag') return [rule];
   if (rule.kind === 'excludes') {
     const set = stockSet(rule.set, known, false);
-    return isGone(rule.set, known) ? [] : stocksFor(rule.stockId, known).map(({ id }) => ({ ...rule, stockId: id, set }));
+    return isGone(rule.set, known)
+      ? []
+      : stocksFor(rule.stockId, known).map(({ id }) => ({ ...rule, stockId: id, set }));
   }
   const needed = (rule.min ?? 0) > 0;
   if (rule.kind === 'ratio') {
@@ -91,7 +93,10 @@ export function engineRules(order: WorkbookOrder, products: readonly ProductStoc
   const known: StocksOf = new Map(products.map((entry) => [entry.product.id, entry]));
   const rules: EngineRules = { doses: [], shares: [], notes: [] };
   for (const dose of order.doses) addDose(dose, known, rules);
-  rules.shares.push(...order.shares.flatMap((rule) => engineShares(rule, known)), ...products.flatMap(greatestOverLots));
+  rules.shares.push(
+    ...order.shares.flatMap((rule) => engineShares(rule, known)),
+    ...products.flatMap(greatestOverLots),
+  );
   if (order.mostStocks !== undefined && products.some(({ stocks }) => stocks.length > 1)) {
     rules.notes.push('The greatest number of stocks counts lots: two lots of a product count as two.');
   }

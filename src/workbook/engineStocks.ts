@@ -78,7 +78,13 @@ function typicalStock(product: Product): ProductStocks {
   const { id, name } = product;
   const price = product.unread?.pricePerTonne === undefined ? product.pricePerTonne : undefined;
   if (!isPrice(price)) return { product, stocks: [], trouble: [priceMessage(product)] };
-  const own = { id, name, pricePerTonne: price, figures: readFigures(product), availableTonnes: tonnesOnHand(product.lots) };
+  const own = {
+    id,
+    name,
+    pricePerTonne: price,
+    figures: readFigures(product),
+    availableTonnes: tonnesOnHand(product.lots),
+  };
   return { product, stocks: [stockOf(product, own)], trouble: [] };
 }
 

@@ -1,7 +1,20 @@
 import type { Dose, Limit, ShareBasis, ShareRule, StockSet } from '../optimise/order';
 import { VISCOSITY_RULES } from '../property/viscosityRule';
 import { FAMILIES } from '../stock/family';
-import { fail, flag, identity, listOf, number, object, oneOf, optional, type Place, type Reader, record, text } from './readers';
+import {
+  fail,
+  flag,
+  identity,
+  listOf,
+  number,
+  object,
+  oneOf,
+  optional,
+  type Place,
+  type Reader,
+  record,
+  text,
+} from './readers';
 import type { WorkbookOrder } from './workbook';
 
 const readBelow: Reader<number | true> = (value, place) => (value === true ? true : number(value, place));

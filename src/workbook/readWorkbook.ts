@@ -3,7 +3,7 @@ import { propertyDefinition } from '../property/propertyTable';
 import { flag, identity, listOf, number, oneOf, type Place, ReadFailure, record, text } from './readers';
 import { readOrder } from './readOrder';
 import { readProduct } from './readProduct';
-import { type Workbook, WORKBOOK_FORMAT, WORKBOOK_VERSION, type WorkbookSettings } from './workbook';
+import { WORKBOOK_FORMAT, WORKBOOK_VERSION, type Workbook, type WorkbookSettings } from './workbook';
 
 const readOwnProperty = record<OwnProperty>({
   id: identity,
@@ -35,12 +35,25 @@ function refuseDuplicates(what: string, ids: readonly string[]): void {
 
 /** Lots stand beside products as stocks of the engine, so their ids are unique over the whole workbook. */
 function refuseClashes({ products, orders, ownProperties }: Workbook): void {
-  refuseDuplicates('products', products.map(({ id }) => id));
-  refuseDuplicates('lots', products.flatMap(({ lots }) => lots.map(({ id }) => id)));
-  refuseDuplicates('orders', orders.map(({ id }) => id));
-  refuseDuplicates('own properties', ownProperties.map(({ id }) => id));
+  refuseDuplicates(
+    'products',
+    products.map(({ id }) => id),
+  );
+  refuseDuplicates(
+    'lots',
+    products.flatMap(({ lots }) => lots.map(({ id }) => id)),
+  );
+  refuseDuplicates(
+    'orders',
+    orders.map(({ id }) => id),
+  );
+  refuseDuplicates(
+    'own properties',
+    ownProperties.map(({ id }) => id),
+  );
   for (const [at, { id, digits }] of ownProperties.entries()) {
-    if (propertyDefinition(id)) throw new ReadFailure(`ownProperties[${at}].id ${JSON.stringify(id)} is a built-in property.`);
+    if (propertyDefinition(id))
+      throw new ReadFailure(`ownProperties[${at}].id ${JSON.stringify(id)} is a built-in property.`);
     if (!Number.isInteger(digits) || digits < 0 || digits > 10) {
       throw new ReadFailure(`ownProperties[${at}].digits must be a whole number from 0 to 10; it is ${digits}.`);
     }

@@ -29,9 +29,13 @@ export function fail({ path }: Place, wanted: string, value: unknown): never {
   throw new ReadFailure(`${path || 'The document'} must be ${wanted}; ${inWords(value)}.`);
 }
 
-const inside = (place: Place, step: string): Place => ({ ...place, path: place.path ? `${place.path}${step}` : step.replace(/^\./, '') });
+const inside = (place: Place, step: string): Place => ({
+  ...place,
+  path: place.path ? `${place.path}${step}` : step.replace(/^\./, ''),
+});
 
-export const text: Reader<string> = (value, place) => (typeof value === 'string' ? value : fail(place, 'a text', value));
+export const text: Reader<string> = (value, place) =>
+  typeof value === 'string' ? value : fail(place, 'a text', value);
 
 /** A text that names something: not empty. */
 export const identity: Reader<string> = (value, place) =>
@@ -72,7 +76,8 @@ export function record<T extends object>(fields: Fields<T>): Reader<T> {
   return (value, place) => {
     const given = object(value, place);
     for (const key of given.keys()) {
-      if (!Object.hasOwn(fields, key)) place.notes.push(`${inside(place, `.${key}`).path} is not known here and was left out.`);
+      if (!Object.hasOwn(fields, key))
+        place.notes.push(`${inside(place, `.${key}`).path} is not known here and was left out.`);
     }
     const names = Object.keys(fields) as (keyof T & string)[];
     const entries = names.map((key) => [key, fields[key](given.get(key), inside(place, `.${key}`))] as const);

@@ -1,7 +1,7 @@
-import { type Migration, MIGRATIONS, migrate } from './migrations';
+import { MIGRATIONS, type Migration, migrate } from './migrations';
 import { ReadFailure } from './readers';
 import { readWorkbook } from './readWorkbook';
-import { type Workbook, WORKBOOK_FORMAT, WORKBOOK_VERSION } from './workbook';
+import { WORKBOOK_FORMAT, WORKBOOK_VERSION, type Workbook } from './workbook';
 
 /** A workbook read back, or the sentence that says why not and what to do. Never half a workbook. */
 export type Restored = { ok: true; workbook: Workbook; notes: string[] } | { ok: false; message: string };
@@ -35,10 +35,17 @@ function shortened(notes: string[]): string[] {
   return [...notes.slice(0, MOST_NOTES), `… and ${notes.length - MOST_NOTES} more fields that are not known here.`];
 }
 
-function readMigrated(document: Record<string, unknown>, version: number, migrations: Readonly<Record<number, Migration>>): Restored {
+function readMigrated(
+  document: Record<string, unknown>,
+  version: number,
+  migrations: Readonly<Record<number, Migration>>,
+): Restored {
   try {
     const current = migrate(document, version, WORKBOOK_VERSION, migrations);
-    if (!current) return refused(`This workbook has version ${version}, which is not known. Export it again from the program that wrote it.`);
+    if (!current)
+      return refused(
+        `This workbook has version ${version}, which is not known. Export it again from the program that wrote it.`,
+      );
     const notes: string[] = [];
     const workbook = readWorkbook(current, notes);
     if (version < WORKBOOK_VERSION) notes.unshift(`Brought up from version ${version} to ${WORKBOOK_VERSION}.`);
@@ -55,16 +62,21 @@ function readMigrated(document: Record<string, unknown>, version: number, migrat
  */
 export function restoreWorkbook(text: string, migrations: Readonly<Record<number, Migration>> = MIGRATIONS): Restored {
   if (text.length > LONGEST_DOCUMENT) {
-    return refused(`This file is too long for a workbook (over ${LONGEST_DOCUMENT / 1e6} million characters). Pick another file.`);
+    return refused(
+      `This file is too long for a workbook (over ${LONGEST_DOCUMENT / 1e6} million characters). Pick another file.`,
+    );
   }
   if (text.trim() === '') return refused('This file is empty. Pick a workbook exported from Basewright.');
   const parsed = parse(text);
   if (!parsed) return refused('This file is not JSON, or was cut short. Pick a workbook exported from Basewright.');
   const { document } = parsed;
-  if (!isOurs(document)) return refused('This file is not a Basewright workbook. Pick a workbook exported from Basewright.');
+  if (!isOurs(document))
+    return refused('This file is not a Basewright workbook. Pick a workbook exported from Basewright.');
   const { version } = document;
   if (typeof version !== 'number' || !Number.isInteger(version) || version < 0) {
-    return refused('This workbook is damaged. version must be a whole number. Correct the file, or take an earlier copy of it.');
+    return refused(
+      'This workbook is damaged. version must be a whole number. Correct the file, or take an earlier copy of it.',
+    );
   }
   if (version > WORKBOOK_VERSION) {
     return refused(

@@ -1,4 +1,4 @@
-import type { Limit, Order, ShareRule, Dose } from '../optimise/order';
+import type { Dose, Limit, Order, ShareRule } from '../optimise/order';
 import type { OwnProperty } from '../property/ownProperty';
 import type { Family } from '../stock/family';
 import type { Figure } from '../stock/figure';
