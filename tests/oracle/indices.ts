@@ -8,6 +8,7 @@ import { tau, waltherOf } from './walther';
 export interface IndexRule {
   basis: 'mass' | 'volume';
   toIndex(value: number): number;
+  fromIndex(index: number): number;
   /** +1 where the index rises with the value, -1 where it falls. */
   sense: 1 | -1;
   /** One reporting unit of the property. */
@@ -15,17 +16,18 @@ export interface IndexRule {
 }
 
 function linear(basis: 'mass' | 'volume', unit: number): IndexRule {
-  return { basis, toIndex: (value) => value, sense: 1, unit };
+  return { basis, toIndex: (value) => value, fromIndex: (value) => value, sense: 1, unit };
 }
 
 function logarithmic(basis: 'mass' | 'volume', unit: number): IndexRule {
-  return { basis, toIndex: Math.log, sense: 1, unit };
+  return { basis, toIndex: Math.log, fromIndex: Math.exp, sense: 1, unit };
 }
 
 /** Hu and Burns: I = 3 262 000 (T/1000)^12.5, T in °R. */
 const pourPoint: IndexRule = {
   basis: 'volume',
   toIndex: (celsius) => 3262000 * (((celsius + 273.15) * 1.8) / 1000) ** 12.5,
+  fromIndex: (index) => ((index / 3262000) ** (1 / 12.5) * 1000) / 1.8 - 273.15,
   sense: 1,
   unit: 1,
 };
@@ -34,6 +36,7 @@ const pourPoint: IndexRule = {
 const flashPoint: IndexRule = {
   basis: 'volume',
   toIndex: (celsius) => 10 ** (-6.1188 + 2414 / (celsius + 273.15 - 42.6)),
+  fromIndex: (index) => 2414 / (Math.log10(index) + 6.1188) + 42.6 - 273.15,
   sense: -1,
   unit: 1,
 };
@@ -41,6 +44,7 @@ const flashPoint: IndexRule = {
 const anilinePoint: IndexRule = {
   basis: 'volume',
   toIndex: (celsius) => 1.124 * Math.exp(0.00657 * celsius),
+  fromIndex: (index) => Math.log(index / 1.124) / 0.00657,
   sense: 1,
   unit: 0.1,
 };

@@ -31,7 +31,7 @@ export class LinearModel {
   constructor(
     private readonly order: OrderRows,
     private readonly moving: number,
-    private readonly whole: boolean,
+    whole: boolean,
   ) {
     const { stocks, rows, choices, lower, upper, least, cost, volumes } = order;
     this.count = stocks.length;

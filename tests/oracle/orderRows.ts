@@ -30,16 +30,18 @@ export interface OrderRows {
   volumes?: number[];
 }
 
-type Seen = { value: number } | 'as the rest' | undefined;
+export type Seen = { value: number } | 'as the rest' | undefined;
 
-function seen(stock: Stock, property: string, celsius?: number): Seen {
+/** A figure of a stock as it stands: a value, "as the rest", or unknown. */
+export function seen(stock: Stock, property: string, celsius?: number): Seen {
   const figure = stock.figures.find((f) => f.property === property && (celsius === undefined || f.celsius === celsius));
   if (!figure) return undefined;
   if (figure.origin === 'as the rest') return 'as the rest';
   return figure.value === undefined ? undefined : { value: figure.value };
 }
 
-function pour(stock: Stock, depressant: boolean): Seen {
+/** The pour point an order reads: with depressant where it is used and known. */
+export function pour(stock: Stock, depressant: boolean): Seen {
   return (depressant ? seen(stock, 'pourPointDepressed') : undefined) ?? seen(stock, 'pourPoint');
 }
 
@@ -68,9 +70,14 @@ function needs(stock: Stock, order: Order): { unknown?: string; asTheRest: boole
   return { asTheRest };
 }
 
+/** One reporting unit of a property. */
+export function unitOf({ property }: Limit): number {
+  return property === 'kv' ? 0.01 : property === 'vi' ? 1 : INDEX_RULES[property].unit;
+}
+
 /** The ends of a limit: strict upper limits one reporting unit inside, margins applied. */
 export function endsOf(limit: Limit): { min?: number; max?: number } {
-  const unit = limit.property === 'kv' ? 0.01 : limit.property === 'vi' ? 1 : INDEX_RULES[limit.property].unit;
+  const unit = unitOf(limit);
   const margin = limit.insideBy ?? 0;
   const uppers: number[] = [];
   if (limit.max !== undefined) uppers.push(limit.below === true ? limit.max - unit : limit.max);

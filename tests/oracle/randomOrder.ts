@@ -38,7 +38,8 @@ export interface OrderShape {
 export const CONTINUOUS: OrderShape = { stocks: [4, 14], rules: true, choices: false };
 export const DISCRETE: OrderShape = { stocks: [4, 8], rules: true, choices: true };
 
-function randomStock(draw: Draw, place: number): Stock {
+/** One believable stock. */
+export function randomStock(draw: Draw, place: number): Stock {
   const kind = draw.pick(KINDS);
   const kv100 = draw.ratio(...kind.kv100);
   const vi = draw.between(...kind.vi);
@@ -73,7 +74,8 @@ function randomStock(draw: Draw, place: number): Stock {
   };
 }
 
-const valueOf = (stock: Stock, property: string, celsius?: number): number =>
+/** The value of a figure that is there. */
+export const figureOf = (stock: Stock, property: string, celsius?: number): number =>
   stock.figures.find((f) => f.property === property && (celsius === undefined || f.celsius === celsius))?.value ?? Number.NaN;
 
 /** KV40 and KV100 of a mix by the Wright method, for setting limits that are near what can be made. */
@@ -82,9 +84,9 @@ export function mixViscosities(stocks: readonly Stock[], x: readonly number[]): 
   let sum40 = 0;
   let sum100 = 0;
   stocks.forEach((stock, i) => {
-    const kv40 = valueOf(stock, 'kv', 40);
-    const kv100 = valueOf(stock, 'kv', 100);
-    const density = valueOf(stock, 'density');
+    const kv40 = figureOf(stock, 'kv', 40);
+    const kv100 = figureOf(stock, 'kv', 100);
+    const density = figureOf(stock, 'density');
     const term = viscosityTerm('wright', { kv40, kv100, density, blendWeight: stock.blendWeight ?? 1 });
     weight += x[i] * term.weight;
     sum40 += x[i] * term.weight * term.index40;
@@ -94,7 +96,7 @@ export function mixViscosities(stocks: readonly Stock[], x: readonly number[]): 
 }
 
 /** A mix of two to four stocks, KV100 at least 2.2. */
-function randomMix(draw: Draw, stocks: readonly Stock[]): number[] {
+export function randomMix(draw: Draw, stocks: readonly Stock[]): number[] {
   for (let attempt = 0; ; attempt++) {
     const chosen = draw.shuffled(stocks.map((_, i) => i)).slice(0, draw.whole(2, Math.min(4, stocks.length)));
     const x = stocks.map(() => 0);
@@ -166,7 +168,7 @@ export function randomOrder(seed: number, shape: OrderShape = CONTINUOUS): Order
   const mix = randomMix(draw, stocks);
   const { kv40, kv100 } = mixViscosities(stocks, mix);
   const width = shape.width ?? draw.pick<Width>([0.05, 0.25, 'none']);
-  const mean = (property: string) => stocks.reduce((sum, stock, i) => sum + mix[i] * valueOf(stock, property), 0);
+  const mean = (property: string) => stocks.reduce((sum, stock, i) => sum + mix[i] * figureOf(stock, property), 0);
   const limits: Limit[] = viscosityWindow(draw, width, kv40, kv100);
   if (kv100 >= 2) limits.push({ property: 'vi', min: Math.round(10 * (viOf(kv40, kv100) + draw.between(-4, 2))) / 10 });
   if (draw.chance(0.6)) limits.push({ property: 'noack', max: mean('noack') * draw.between(0.95, 1.4) });
