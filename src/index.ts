@@ -6,6 +6,7 @@ export type { PredictedProperties, PredictedProperty, RuleSpread } from './blend
 export type { PredictionOptions, PropertyAt } from './blend/predictionOptions';
 export { type PredictOptions, predictBlend } from './blend/predictBlend';
 export { createHighsEngine, type HighsLoading } from './optimise/linear/highsEngine';
+export { createJavascriptEngine } from './optimise/linear/javascriptEngine';
 export type { LinearEngine } from './optimise/linear/linearEngine';
 export type { Dose, Limit, Order, ShareBasis, ShareRule, StockSet } from './optimise/order';
 export type {
