@@ -1,5 +1,5 @@
 import { useMemo } from 'react';
-import { emptyWorkbook, restoreWorkbook, serialiseWorkbook } from '../../src';
+import { emptyWorkbook } from '../../src';
 import { demoWorkbook } from '../demo/demoWorkbook';
 import { useAnswers } from './answerStore';
 import { environment } from './environment';
@@ -7,6 +7,7 @@ import { deleteOrder, duplicateOrder, newOrder } from './orderEdits';
 import { useSave } from './saveStore';
 import { cancelSolve } from './solving';
 import { announce, selectOrder, useView } from './viewStore';
+import { exportWorkbook, importWorkbook } from './workbookFile';
 import { redo, replaceWorkbook, undo, useWorkbook } from './workbookStore';
 
 /** One thing the user can do, shared by button, key and menu. */
@@ -21,53 +22,9 @@ export interface Command<Arguments extends unknown[] = []> {
   undoable: boolean;
 }
 
-/** Largest file read [bytes]; the text inside has its own bound. */
-const LARGEST_FILE = 80_000_000;
-
 const always = () => true;
 const workbook = () => useWorkbook.getState().workbook;
 const orderOnScreen = () => workbook().orders.find(({ id }) => id === useView.getState().orderId);
-
-function fileName(name: string): string {
-  const plain = name
-    .normalize('NFKD')
-    .replace(/[^\w]+/g, '-')
-    .replace(/^-+|-+$/g, '')
-    .slice(0, 60);
-  return `${plain || 'workbook'}.basewright.json`;
-}
-
-function exportWorkbook(): void {
-  const current = workbook();
-  environment().download(fileName(current.name), serialiseWorkbook(current));
-  announce('Workbook exported.');
-}
-
-/** What a chosen file holds: a text, or why it cannot be read. */
-async function fileText(file: File): Promise<{ text: string } | { message: string }> {
-  if (file.size > LARGEST_FILE) return { message: 'This file is too large for a workbook. Pick another file.' };
-  try {
-    return { text: await file.text() };
-  } catch {
-    return { message: 'This file could not be read. Check that it is still there, and pick it again.' };
-  }
-}
-
-/** How an import went. On trouble the workbook is as it was. */
-export type Imported = { ok: true; notes: string[] } | { ok: false; message: string };
-
-async function importWorkbook(file: File): Promise<Imported> {
-  const read = await fileText(file);
-  const restored = 'text' in read ? restoreWorkbook(read.text) : { ok: false as const, message: read.message };
-  if (!restored.ok) {
-    announce(`${file.name} was not imported. ${restored.message}`);
-    return { ok: false, message: restored.message };
-  }
-  replaceWorkbook(restored.workbook, `import of ${file.name}`);
-  selectOrder(restored.workbook.orders[0]?.id);
-  announce([`${file.name} imported.`, ...restored.notes].join(' '));
-  return { ok: true, notes: restored.notes };
-}
 
 function newEmptyWorkbook(): void {
   replaceWorkbook(emptyWorkbook(environment().newId(), 'New workbook'), 'new empty workbook');

@@ -2,6 +2,7 @@ import type { BlendOutcome, Order, SolveProgress } from '../../src';
 import type { EngineKind } from './createWorker';
 import type { FromWorker, WorkerLike } from './protocol';
 import { WORDS } from './solverWords';
+import { createWorkerSeat } from './workerSeat';
 
 /** Told how a solve goes. Exactly one of `onOutcome`, `onFailed`, `onDropped` comes last. */
 export interface SolveListener {
@@ -23,7 +24,7 @@ export interface SolverClientOptions {
   graceMs?: number;
   /** Longest wait for the engine to load [ms]. */
   loadLimitMs?: number;
-  /** A solve that has run this long is cancelled as soon as a newer order waits [ms]. */
+  /** A solve that has run this long is cancelled once a newer order waits [ms]. */
   patienceMs?: number;
 }
 
@@ -39,15 +40,10 @@ interface Job {
   id: number;
   order: Order;
   listener: SolveListener;
-  sent: boolean;
-  /** Sent once more after a crash. */
-  again: boolean;
   cancelled?: 'by the user' | 'for a newer order';
-  /** What happened on the way to its answer. */
+  /** Set once it was sent again after a breakdown. */
   notice?: string;
 }
-
-type Timer = ReturnType<typeof setTimeout> | undefined;
 
 const DEFAULTS = {
   timeLimitMs: 20_000,
@@ -64,171 +60,130 @@ const CANCEL_GRACE_MS = 1_500;
  * cannot be loaded the second engine answers, and where that hangs it is killed. Each of these is told in a message.
  */
 export function createSolverClient(options: SolverClientOptions): SolverClient {
-  const { timeLimitMs, secondTimeLimitMs, graceMs, loadLimitMs, patienceMs } = { ...DEFAULTS, ...options };
+  const settings = { ...DEFAULTS, ...options };
+  const { graceMs, loadLimitMs } = settings;
   let kind: EngineKind = 'highs';
-  let worker: WorkerLike | undefined;
-  let ready = false;
   let running: Job | undefined;
   let waiting: Job | undefined;
   let lastId = 0;
-  let notice: string | undefined;
-  let watchdog: Timer;
-  let patience: Timer;
+  let engineNotice: string | undefined;
+  let patience: ReturnType<typeof setTimeout> | undefined;
+  const seat = createWorkerSeat({ createWorker: options.createWorker, hear, crashed, silent });
 
-  const limit = () => (kind === 'highs' ? timeLimitMs : secondTimeLimitMs);
-
-  function start(): WorkerLike | undefined {
-    if (worker) return worker;
-    try {
-      const started = options.createWorker(kind);
-      started.onmessage = ({ data }) => worker === started && hear(data);
-      started.onerror = (event) => {
-        event.preventDefault?.();
-        if (worker === started) crashed(event.message);
-      };
-      started.onmessageerror = () => worker === started && crashed('its answer could not be read');
-      ready = false;
-      worker = started;
-    } catch (error) {
-      worker = undefined;
-      crashed(error instanceof Error ? error.message : String(error));
-    }
-    return worker;
-  }
-
-  function stop(): void {
-    clearTimeout(watchdog);
-    worker?.terminate();
-    worker = undefined;
-    ready = false;
-  }
-
-  /** Restarted at every sign of life. */
-  function watch(ms = ready ? limit() + graceMs : loadLimitMs): void {
-    clearTimeout(watchdog);
-    watchdog = setTimeout(hung, ms);
-  }
+  const limit = () => (kind === 'highs' ? settings.timeLimitMs : settings.secondTimeLimitMs);
+  const watch = () => seat.watch(seat.isReady() ? limit() + graceMs : loadLimitMs);
 
   function send(job: Job): void {
     running = job;
-    const to = start();
-    if (!to || running !== job || job.sent) return;
-    job.sent = true;
-    watch();
-    to.postMessage({ kind: 'solve', id: job.id, order: job.order, timeLimitMs: limit() });
-  }
-
-  function next(): void {
-    clearTimeout(watchdog);
-    clearTimeout(patience);
-    running = undefined;
-    const job = waiting;
-    waiting = undefined;
-    if (job) send(job);
+    const { id, order } = job;
+    if (seat.post({ kind: 'solve', id, order, timeLimitMs: limit() })) watch();
   }
 
   function end(tell: (listener: SolveListener) => void): void {
     const job = running;
-    if (!job) return;
+    seat.quiet();
+    clearTimeout(patience);
     running = undefined;
-    tell(job.listener);
+    if (job) tell(job.listener);
     // The listener may have sent a new order already.
-    if (!running) next();
+    if (running || !waiting) return;
+    const next = waiting;
+    waiting = undefined;
+    send(next);
   }
 
-  function hear(message: FromWorker): void {
-    if (message.kind === 'ready') {
-      ready = true;
-      if (running) watch();
-      return;
-    }
-    if (message.kind === 'no engine') {
-      withoutHighs(message.message);
-      return;
-    }
-    const job = running;
-    if (!job || message.id !== job.id) return;
-    if (message.kind === 'progress') {
-      if (!job.cancelled) watch();
-      job.listener.onProgress?.(message.progress);
-    } else if (message.kind === 'error') end(({ onFailed }) => onFailed(WORDS.failed(message.message)));
-    else if (job.cancelled === 'for a newer order' && message.outcome.stopped === 'cancelled')
-      end((listener) => listener.onDropped?.());
-    else end((listener) => listener.onOutcome(message.outcome, job.notice ?? notice));
-  }
-
-  /** The order in hand once more, in a new worker; false where that was done already. */
-  function sendAgain(restarted: string): boolean {
-    const job = running;
-    if (!job) return true;
-    if (job.again || job.cancelled) return false;
-    send({ ...job, sent: false, again: true, notice: restarted });
-    return true;
-  }
-
-  function withoutHighs(reason: string): void {
-    stop();
-    if (kind === 'javascript') {
-      end(({ onFailed }) => onFailed(WORDS.noEngine(reason)));
-      return;
-    }
-    kind = 'javascript';
-    notice = WORDS.secondEngine(reason);
-    if (running) send({ ...running, sent: false });
-  }
-
-  function crashed(reason: string): void {
-    const wasReady = ready;
-    stop();
-    // A worker that never came to life will not do so the second time.
-    if (!wasReady) withoutHighs(reason || WORDS.notStarted);
-    else if (!sendAgain(WORDS.restarted('broke down'))) endLost(WORDS.crashed(reason));
-  }
-
-  /** Ends the job in hand without an answer, unless nobody waits for it any more. */
+  /** Ends the job in hand without an answer. */
   function endLost(message: string): void {
     const why = running?.cancelled;
     if (why === 'for a newer order') end((listener) => listener.onDropped?.());
     else end(({ onFailed }) => onFailed(why === 'by the user' ? WORDS.cancelled : message));
   }
 
-  function hung(): void {
-    if (!ready) {
-      withoutHighs(WORDS.notLoaded(loadLimitMs));
+  function hear(message: FromWorker): void {
+    if (message.kind === 'no engine') withoutEngine(message.message);
+    else if (message.kind === 'ready') {
+      if (running) watch();
+    } else if (running && message.id === running.id) hearOf(running, message);
+  }
+
+  function hearOf(job: Job, message: Exclude<FromWorker, { kind: 'ready' | 'no engine' }>): void {
+    if (message.kind === 'progress') {
+      if (!job.cancelled) watch();
+      job.listener.onProgress?.(message.progress);
+    } else if (message.kind === 'error') endLost(WORDS.failed(message.message));
+    else if (job.cancelled === 'for a newer order' && message.outcome.stopped === 'cancelled') endLost('');
+    else end((listener) => listener.onOutcome(message.outcome, job.notice ?? engineNotice));
+  }
+
+  /** HiGHS cannot be had: the second engine takes over, and after that nobody. */
+  function withoutEngine(reason: string): void {
+    seat.clear('javascript');
+    if (kind === 'javascript') {
+      endLost(WORDS.noEngine(reason));
       return;
     }
-    stop();
-    if (kind === 'javascript') endLost(WORDS.secondEngineHung(secondTimeLimitMs + graceMs));
-    else if (!sendAgain(WORDS.restarted('stopped answering'))) endLost(WORDS.hung);
+    kind = 'javascript';
+    engineNotice = WORDS.secondEngine(reason);
+    if (running) send(running);
+  }
+
+  /** The order in hand once more, in a new worker; given up where that was done already. */
+  function sendAgain(restarted: string, givenUp: string): void {
+    seat.clear(kind);
+    if (!running) return;
+    if (running.notice !== undefined || running.cancelled) endLost(givenUp);
+    else send({ ...running, notice: restarted });
+  }
+
+  function crashed(reason: string, wasReady: boolean): void {
+    // A worker that never came to life will not do so the second time.
+    if (wasReady) sendAgain(WORDS.restarted('broke down'), WORDS.crashed(reason));
+    else withoutEngine(reason || WORDS.notStarted);
+  }
+
+  function silent(wasReady: boolean): void {
+    if (!wasReady) withoutEngine(WORDS.notLoaded(loadLimitMs));
+    else if (kind === 'highs') sendAgain(WORDS.restarted('stopped answering'), WORDS.hung);
+    else {
+      seat.clear(kind);
+      endLost(WORDS.secondEngineHung(limit() + graceMs));
+    }
   }
 
   function cancelRunning(why: NonNullable<Job['cancelled']>): void {
     clearTimeout(patience);
-    if (!running || !worker) return;
+    if (!running) return;
     running.cancelled = why;
-    worker.postMessage({ kind: 'cancel', id: running.id });
-    if (ready) watch(CANCEL_GRACE_MS);
+    seat.post({ kind: 'cancel', id: running.id });
+    if (seat.isReady()) seat.watch(CANCEL_GRACE_MS);
   }
 
   return {
     solve(order, listener) {
       lastId += 1;
-      const job: Job = { id: lastId, order, listener, sent: false, again: false };
-      if (!running) return send(job);
-      waiting?.listener.onDropped?.();
-      if (!waiting && !running.cancelled) patience = setTimeout(() => cancelRunning('for a newer order'), patienceMs);
+      const job: Job = { id: lastId, order, listener };
+      if (!running) {
+        send(job);
+        return;
+      }
+      const before = waiting;
       waiting = job;
+      before?.listener.onDropped?.();
+      if (!before && !running.cancelled) {
+        patience = setTimeout(() => cancelRunning('for a newer order'), settings.patienceMs);
+      }
     },
     cancel() {
-      waiting?.listener.onDropped?.();
+      const before = waiting;
       waiting = undefined;
+      before?.listener.onDropped?.();
       cancelRunning('by the user');
     },
     dispose() {
       clearTimeout(patience);
       running = undefined;
       waiting = undefined;
-      stop();
+      seat.clear(kind);
     },
   };
 }

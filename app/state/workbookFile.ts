@@ -1,0 +1,50 @@
+import { restoreWorkbook, serialiseWorkbook } from '../../src';
+import { environment } from './environment';
+import { announce, selectOrder } from './viewStore';
+import { replaceWorkbook, useWorkbook } from './workbookStore';
+
+/** Largest file read [bytes]; the text inside has its own bound. */
+const LARGEST_FILE = 80_000_000;
+
+function fileName(name: string): string {
+  const plain = name
+    .normalize('NFKD')
+    .replace(/[^\w]+/g, '-')
+    .replace(/^-+|-+$/g, '')
+    .slice(0, 60);
+  return `${plain || 'workbook'}.basewright.json`;
+}
+
+/** Hands the workbook to the user as a file. */
+export function exportWorkbook(): void {
+  const { workbook } = useWorkbook.getState();
+  environment().download(fileName(workbook.name), serialiseWorkbook(workbook));
+  announce('Workbook exported.');
+}
+
+/** What a chosen file holds: a text, or why it cannot be read. */
+async function fileText(file: File): Promise<{ text: string } | { message: string }> {
+  if (file.size > LARGEST_FILE) return { message: 'This file is too large for a workbook. Pick another file.' };
+  try {
+    return { text: await file.text() };
+  } catch {
+    return { message: 'This file could not be read. Check that it is still there, and pick it again.' };
+  }
+}
+
+/** How an import went. On trouble the workbook is as it was. */
+export type Imported = { ok: true; notes: string[] } | { ok: false; message: string };
+
+/** Puts the workbook of a file on the page, as a step that can be undone. */
+export async function importWorkbook(file: File): Promise<Imported> {
+  const read = await fileText(file);
+  const restored = 'text' in read ? restoreWorkbook(read.text) : { ok: false as const, message: read.message };
+  if (!restored.ok) {
+    announce(`${file.name} was not imported. ${restored.message}`);
+    return { ok: false, message: restored.message };
+  }
+  replaceWorkbook(restored.workbook, `import of ${file.name}`);
+  selectOrder(restored.workbook.orders[0]?.id);
+  announce([`${file.name} imported.`, ...restored.notes].join(' '));
+  return { ok: true, notes: restored.notes };
+}
