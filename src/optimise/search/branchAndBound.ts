@@ -1,13 +1,13 @@
-import type { LinearEngine } from '../linear/linearEngine';
-import type { ModelRow, SearchModel } from '../rows/searchModel';
+import type { LinearEngine, LinearResult } from '../linear/linearEngine';
+import type { ModelRow, SearchModel, ViLimits } from '../rows/searchModel';
 import type { ResolvedOptions } from '../solveOptions';
 import { keepsPresences, keepsWholeLots, nextChoice, presenceRows, roundedBounds } from './discreteChoices';
 import { splitPoints } from './kv100Split';
 import { mixViscosity } from './mixViscosity';
 import { NodeHeap, type SearchNode } from './nodeHeap';
-import { SearchProgram } from './searchProgram';
-import { lowerLine, outerLines } from './viLine';
-import { curveAt } from './viCurve';
+import { SearchProgram, type ShadowPrices } from './searchProgram';
+import { viCurve } from './viCurve';
+import { chord, lowerLine, offsetAbove, outerLines, tangent } from './viLine';
 import { knot, pieceOf } from './viPieces';
 
 /** What a search found: shares of the best recipe if any, its cost, and the proven bound. */
@@ -24,13 +24,31 @@ export interface SearchResult {
 }
 
 /** Half width of the interval around a solution in which a recipe is sought, relative to KV100 [-]. */
-const NEAR = 5e-4;
+const NEAR = 2e-4;
+/** An interval of KV100 that spans less than this factor is narrow: its outer lines are as good as the curve. */
+const NARROW = 1.002;
+/** Rounds of moving the tangent to where the solution goes. */
+const MOST_TANGENTS = 4;
 /** A viscosity index that misses its limit by less than this many points is on it. */
 const ON_LIMIT = 1e-7;
 /** An interval of KV100 narrower than this (relative) is not split; it keeps its bound. */
 const NARROWEST = 1e-11;
 const PAUSE_EVERY_MS = 8;
 const PROGRESS_EVERY_MS = 100;
+
+type Solution = Extract<LinearResult, { status: 'optimal' }>;
+
+/** Bounds of the columns in a part of the search. */
+interface Box {
+  lower: Float64Array;
+  upper: Float64Array;
+}
+
+const MOST_PRICES = 3;
+
+function isNarrow({ kv100 }: SearchNode): boolean {
+  return kv100 !== undefined && kv100.to <= kv100.from * NARROW;
+}
 
 /** Accepts shares as a recipe: the exact check in physical units. */
 export type RecipeCheck = (values: Float64Array) => boolean;
@@ -42,7 +60,10 @@ export class BranchAndBound {
   readonly #open = new NodeHeap();
   readonly #conflictRows = new Set<number>();
   #usesVi = false;
-  #best: { values: Float64Array; cost: number } | undefined;
+  /** Prices of the latest solves near a recipe, newest first. */
+  readonly #prices: ShadowPrices[] = [];
+  /** `tied`: a stock could come in, or go, at no change in cost. */
+  #best: { values: Float64Array; cost: number; tied: boolean } | undefined;
   /** Least bound among the parts that were closed by cost, or could not be settled. */
   #closedBound = Infinity;
   #nodes = 0;
@@ -128,52 +149,65 @@ export class BranchAndBound {
   /** Solves one part: bounds it, tries a recipe in it, and splits it unless it is settled. */
   #settle(node: SearchNode): void {
     this.#nodes++;
-    if (!this.#load(node)) return;
+    const box = this.#boxOf(node);
+    if (!box || this.#isClosedByPrices(node, box)) return;
+    this.#load(node, box);
     const result = this.#program.solve();
-    if (result.status === 'infeasible') {
-      if (result.ray && this.#isCertified(result.ray)) return;
+    if (result.status === 'infeasible' && result.ray && this.#isCertified(result.ray)) return;
+    if (result.status !== 'optimal') {
       this.#splitBlindly(node);
       return;
     }
-    if (result.status === 'unknown') {
-      this.#splitBlindly(node);
+    const open: SearchNode = { ...node, bound: Math.max(node.bound, this.#program.boundOf(result.duals)) };
+    if (open.bound >= this.#cutoff()) {
+      this.#close(open.bound);
       return;
     }
-    const bound = Math.max(node.bound, this.#program.boundOf(result.duals));
-    const open: SearchNode = { ...node, bound };
-    if (bound >= this.#cutoff()) {
-      this.#close(bound);
-      return;
-    }
-    const { values } = result;
-    if (this.#isSettledBy(values) && this.#offer(values)) {
+    if (this.#isSettledBy(result.values) && this.#offer(result)) {
       // The recipe sits a rounding above the bound: nothing is left to split.
-      this.#close(bound);
+      this.#close(open.bound);
       return;
     }
-    this.#tryNear(open, values);
-    if (bound >= this.#cutoff()) {
-      this.#close(bound);
-      return;
-    }
-    this.#split(open, values);
+    if (this.#isWorthTrying(open)) this.#tryNear(open, result.values);
+    if (!this.#isClosedByPrices(open, box)) this.#split(open, box, result.values);
   }
 
-  /** Puts the bounds and lines of a part into the program; false where the part is empty. */
-  #load(node: SearchNode): boolean {
-    const { model } = this;
-    const lower = Float64Array.from(model.lower);
-    const upper = Float64Array.from(model.upper);
+  /** Bounds of the columns in a part; undefined where the part is empty. */
+  #boxOf(node: SearchNode): Box | undefined {
+    const lower = Float64Array.from(this.model.lower);
+    const upper = Float64Array.from(this.model.upper);
     for (let change = node.changes; change; change = change.parent) {
       lower[change.column] = Math.max(lower[change.column], change.lower);
       upper[change.column] = Math.min(upper[change.column], change.upper);
     }
     for (let column = 0; column < lower.length; column++) {
-      if (lower[column] > upper[column]) return false;
+      if (lower[column] > upper[column]) return undefined;
     }
+    return { lower, upper };
+  }
+
+  /** Puts the bounds and lines of a part into the program. */
+  #load(node: SearchNode, { lower, upper }: Box): void {
     for (let column = 0; column < lower.length; column++) this.#program.setBounds(column, lower[column], upper[column]);
     if (node.kv100) this.#setOuterRows(node.kv100);
+  }
+
+  /** Closes a part without a solve where prices found near the best recipe already bound it far enough. */
+  #isClosedByPrices(node: SearchNode, { lower, upper }: Box): boolean {
+    for (const prices of this.#prices) {
+      const bound = this.#program.shadowBound(prices, this.#offsetAbove(prices, node), lower, upper);
+      node.bound = Math.max(node.bound, bound);
+    }
+    if (node.bound < this.#cutoff()) return false;
+    this.#close(node.bound);
     return true;
+  }
+
+  /** How high a line of the prices' slope must lie to be above the curve over a part. */
+  #offsetAbove({ line }: ShadowPrices, { kv100 }: SearchNode): number {
+    const { vi } = this.model;
+    if (!vi?.min || !kv100 || !line) return 0;
+    return offsetAbove(viCurve(vi.index, vi.min.value), kv100.from, kv100.to, line.slope);
   }
 
   #setOuterRows({ from, to }: { from: number; to: number }): void {
@@ -183,8 +217,8 @@ export class BranchAndBound {
     this.#program.setViRows({
       from: index.toIndex(from),
       to: index.toIndex(to),
-      ...(min ? { above: outerLines({ index, vi: min.value }, from, to) } : {}),
-      ...(max ? { below: lowerLine({ index, vi: max.value }, from, to) } : {}),
+      ...(min ? { above: outerLines(viCurve(index, min.value), from, to) } : {}),
+      ...(max ? { below: lowerLine(viCurve(index, max.value), from, to) } : {}),
     });
   }
 
@@ -203,12 +237,23 @@ export class BranchAndBound {
   }
 
   /** Takes a solution as the best recipe if it is one and cheaper; true where it is a recipe. */
-  #offer(values: Float64Array): boolean {
-    const cost = this.#costOf(values);
-    if (this.#best && cost >= this.#best.cost) return this.isRecipe(values);
+  #offer({ values, duals }: Solution): boolean {
     if (!this.isRecipe(values)) return false;
-    this.#best = { values: Float64Array.from(values), cost };
+    const cost = this.#costOf(values);
+    if (this.#best && cost >= this.#best.cost) return true;
+    const tied = this.#program.idleColumns(values, duals).includes(true);
+    this.#best = { values: Float64Array.from(values), cost, tied };
     return true;
+  }
+
+  /**
+   * A recipe is sought in every part until there is one, and in narrow parts, where it is the answer. Elsewhere now and
+   * then: with discrete choices in every fourth part after the first twenty, else ever more rarely.
+   */
+  #isWorthTrying(node: SearchNode): boolean {
+    if (!this.#best || isNarrow(node)) return true;
+    if (this.model.presences.length > 0 || this.model.wholeLots.length > 0) return this.#nodes <= 20 || this.#nodes % 4 === 0;
+    return Number.isInteger(Math.log2(this.#nodes) / 2);
   }
 
   /** Looks for a recipe near a solution: choices rounded, KV100 close by, the curve's own line in place of the outer one. */
@@ -218,9 +263,41 @@ export class BranchAndBound {
     const discrete = roundedBounds(model, this.#rows, values, lower, upper);
     if (discrete.some((bound) => bound.lower > bound.upper)) return;
     for (const bound of discrete) this.#program.setBounds(bound.column, bound.lower, bound.upper);
-    if (model.vi && node.kv100) this.#setInnerRows(mixViscosity(model.vi, values).kv100, node.kv100);
+    if (model.vi && node.kv100) this.#setInnerRows(this.#followTangents(model.vi, node.kv100, values), node.kv100);
     const result = this.#program.solve();
-    if (result.status === 'optimal' && this.#isSettledBy(result.values)) this.#offer(result.values);
+    if (result.status !== 'optimal') return;
+    if (this.#isSettledBy(result.values) && this.#offer(result)) this.#remember(result.duals);
+  }
+
+  /** Moves the tangent of the curve to where the solution goes, until it stays: KV100 of a recipe worth trying. */
+  #followTangents(vi: ViLimits, within: { from: number; to: number }, values: Float64Array): number {
+    let { kv100 } = mixViscosity(vi, values);
+    if (!vi.min || within.to <= within.from * NARROW) return kv100;
+    const curve = viCurve(vi.index, vi.min.value);
+    for (let round = 0; round < MOST_TANGENTS; round++) {
+      const line = tangent(curve, Math.min(within.to, Math.max(within.from, kv100)));
+      this.#program.setViRows({
+        from: vi.index.toIndex(within.from),
+        to: vi.index.toIndex(within.to),
+        above: [line, line],
+        ...(vi.max ? { below: lowerLine(viCurve(vi.index, vi.max.value), within.from, within.to) } : {}),
+      });
+      const result = this.#program.solve();
+      if (result.status !== 'optimal') return kv100;
+      const next = mixViscosity(vi, result.values).kv100;
+      const moved = Math.abs(next / kv100 - 1);
+      kv100 = next;
+      if (!(moved > NEAR / 2)) {
+        this.#remember(result.duals);
+        return kv100;
+      }
+    }
+    return kv100;
+  }
+
+  #remember(duals: Float64Array): void {
+    this.#prices.unshift(this.#program.pricesOf(duals));
+    this.#prices.length = Math.min(this.#prices.length, MOST_PRICES);
   }
 
   /** Rows for a narrow interval around a KV100, within one piece, that only mixes on the right side of the curve keep. */
@@ -231,30 +308,19 @@ export class BranchAndBound {
     const piece = pieceOf(centre);
     const from = Math.max(within.from, knot(piece), centre * (1 - NEAR));
     const to = Math.max(from, Math.min(within.to, knot(piece + 1), centre * (1 + NEAR)));
-    const chord = (value: number) => {
-      const a = curveAt({ index: vi.index, vi: value }, piece, from);
-      const b = curveAt({ index: vi.index, vi: value }, piece, to);
-      const slope = b.u > a.u ? (b.g - a.g) / (b.u - a.u) : a.slope;
-      return { offset: a.g - slope * a.u, slope };
-    };
-    const tangent = (value: number) => {
-      const a = curveAt({ index: vi.index, vi: value }, piece, centre > to ? to : Math.max(from, centre));
-      return { offset: a.g - a.slope * a.u, slope: a.slope };
-    };
-    const line = vi.min && chord(vi.min.value);
+    const line = vi.min && chord(viCurve(vi.index, vi.min.value), from, to);
     this.#program.setViRows({
       from: vi.index.toIndex(from),
       to: vi.index.toIndex(to),
       ...(line ? { above: [line, line] as const } : {}),
-      ...(vi.max ? { below: tangent(vi.max.value) } : {}),
+      ...(vi.max ? { below: tangent(viCurve(vi.index, vi.max.value), Math.min(to, Math.max(from, centre))) } : {}),
     });
   }
 
-  #split(node: SearchNode, values: Float64Array): void {
+  #split(node: SearchNode, { lower, upper }: Box, values: Float64Array): void {
     const { model } = this;
     const missed = model.vi ? mixViscosity(model.vi, values) : undefined;
-    if (!this.#load(node)) return;
-    const choice = nextChoice(model, this.#rows, values, this.#program.lower, this.#program.upper);
+    const choice = nextChoice(model, this.#rows, values, lower, upper);
     const farOff = missed !== undefined && missed.missed > 1;
     if (choice && !(farOff && this.#splitKv100(node, missed.kv100))) {
       for (const alternative of choice.alternatives) {
@@ -300,8 +366,10 @@ export class BranchAndBound {
   #chooseAmongEquals(): void {
     const best = this.#best;
     const { model } = this;
-    if (!best || !this.#load({ bound: 0, depth: 0 })) return;
+    const box = this.#boxOf({ bound: 0, depth: 0 });
+    if (!best?.tied || !box) return;
     const program = this.#program;
+    this.#load(this.#root(), box);
     for (const bound of roundedBounds(model, this.#rows, best.values, program.lower, program.upper)) {
       program.setBounds(bound.column, bound.lower, bound.upper);
     }
@@ -320,7 +388,7 @@ export class BranchAndBound {
     const result = program.solveForTie(ranks, best.cost);
     if (result.status !== 'optimal' || !this.#isSettledBy(result.values) || !this.isRecipe(result.values)) return;
     const cost = this.#costOf(result.values);
-    if (cost <= best.cost + 1e-9 * Math.abs(best.cost)) this.#best = { values: Float64Array.from(result.values), cost };
+    if (cost <= best.cost + 1e-9 * Math.abs(best.cost)) this.#best = { ...best, values: Float64Array.from(result.values), cost };
   }
 
   #costOf(values: Float64Array): number {
@@ -330,7 +398,7 @@ export class BranchAndBound {
   #result(stopped: SearchResult['stopped']): SearchResult {
     return {
       stopped,
-      ...(this.#best ? { best: this.#best } : {}),
+      ...(this.#best ? { best: { values: this.#best.values, cost: this.#best.cost } } : {}),
       lowerBound: this.#lowerBound(),
       conflict: { rows: [...this.#conflictRows].map((row) => this.model.rows[row]), usesVi: this.#usesVi },
       nodes: this.#nodes,

@@ -14,6 +14,15 @@ export interface ViRows {
   below?: Line;
 }
 
+/**
+ * Prices of the static rows, and of the viscosity index: "KV40 index at most offset + slope · KV100 index" at a price,
+ * the interval of KV100 folded into the slope.
+ */
+export interface ShadowPrices {
+  multipliers: Float64Array;
+  line?: { price: number; slope: number };
+}
+
 const DYNAMIC_ROWS = 5;
 /** Columns of the three sums that carry viscosity, in this order: weights, KV100 indices, KV40 indices. */
 const SUMS = 3;
@@ -156,13 +165,46 @@ export class SearchProgram {
         sizes[sum] += Math.abs(pull);
       }
     }
+    return this.#spread(vi, sums, sizes);
+  }
+
+  /** Pulls on the three sums, spread over the stocks that make them up. */
+  #spread(vi: ViLimits, sums: readonly number[], sizes: readonly number[]): ExtraTerms {
     const pull = new Float64Array(this.#columns);
     const magnitude = new Float64Array(this.#columns);
-    vi.weights.forEach((weight, i) => {
-      pull[i] = weight * (sums[0] + sums[1] * vi.index100[i] + sums[2] * vi.index40[i]);
-      magnitude[i] = weight * (sizes[0] + sizes[1] * Math.abs(vi.index100[i]) + sizes[2] * Math.abs(vi.index40[i]));
-    });
+    for (let i = 0; i < vi.weights.length; i++) {
+      pull[i] = vi.weights[i] * (sums[0] + sums[1] * vi.index100[i] + sums[2] * vi.index40[i]);
+      magnitude[i] = vi.weights[i] * (sizes[0] + sizes[1] * Math.abs(vi.index100[i]) + sizes[2] * Math.abs(vi.index40[i]));
+    }
     return { pull, magnitude };
+  }
+
+  /** The prices a solve puts on the rows, and on the viscosity index as one line, to bound other parts without a solve. */
+  pricesOf(duals: Float64Array): ShadowPrices {
+    const scale = 1 / this.#costScale;
+    const multipliers = duals.slice(0, this.#staticRows).map((dual) => dual * scale);
+    const kept: readonly (-1 | 1)[] = [1, -1, -1, -1, 1];
+    let steepness = 0;
+    let price = 0;
+    for (let row = 0; row < DYNAMIC_ROWS; row++) {
+      const multiplier = duals[this.#staticRows + 1 + SUMS + row] * scale * this.#scale.sums;
+      if (!this.#active[row] || !(multiplier * kept[row] > 0)) continue;
+      steepness += multiplier * this.#coefficients[row * SUMS + 1];
+      price -= multiplier * this.#coefficients[row * SUMS + 2];
+    }
+    return price > 0 ? { multipliers, line: { price, slope: steepness / price } } : { multipliers };
+  }
+
+  /**
+   * Proven lower bound of the cost in a box, from prices found elsewhere: the viscosity index is held by the line of
+   * the prices' slope at the given offset, which must lie above the curve over the part in question.
+   */
+  shadowBound({ multipliers, line }: ShadowPrices, offset: number, lower: Float64Array, upper: Float64Array): number {
+    const { model } = this;
+    const program = { cost: model.cost, lower, upper, rows: model.rows };
+    if (!model.vi || !line) return safeBound(program, multipliers);
+    const sums = [line.price * offset, line.price * line.slope, -line.price];
+    return safeBound(program, multipliers, this.#spread(model.vi, sums, sums.map(Math.abs)));
   }
 
   /** Proven lower bound of the cost at the present bounds and lines, from the duals of a solve. */

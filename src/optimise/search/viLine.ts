@@ -1,5 +1,4 @@
-import type { CurvePoint, ViCurve } from './viCurve';
-import { curveAt, lowerPoints, upperPoints } from './viCurve';
+import { type CurvePart, type CurvePoint, lowerPoints, upperPoints, type ViCurve } from './viCurve';
 import { knot, pieceOf } from './viPieces';
 
 /** A line g = offset + slope·u in the plane of the blending index. */
@@ -8,7 +7,7 @@ export interface Line {
   slope: number;
 }
 
-/** Absorbs rounding in the index functions; a thousandth of this moves no cost anyone could see. */
+/** Absorbs rounding in the index functions; a thousand times this moves no cost anyone could see. */
 const ROUNDING = 4e-15;
 
 /** The lowest line of a slope that lies above all points. */
@@ -24,30 +23,31 @@ function lineBelow(points: readonly CurvePoint[], slope: number): Line {
   return { offset: offset - ROUNDING, slope };
 }
 
-/** Slope of the line through the first point that has all others below it. */
-function slopeFromFirst(points: readonly CurvePoint[], fallback: number): number {
+/** Slope of the line through the first point that has all others below it; -Infinity where there is but one. */
+function slopeFromFirst(points: readonly CurvePoint[]): number {
   const [first] = points;
   let slope = -Infinity;
   for (const { u, g } of points) if (u > first.u) slope = Math.max(slope, (g - first.g) / (u - first.u));
-  return Number.isFinite(slope) ? slope : fallback;
+  return slope;
 }
 
-/** Slope of the line through the last point that has all others below it. */
-function slopeToLast(points: readonly CurvePoint[], fallback: number): number {
+/** Slope of the line through the last point that has all others below it; Infinity where there is but one. */
+function slopeToLast(points: readonly CurvePoint[]): number {
   const last = points[points.length - 1];
   let slope = Infinity;
   for (const { u, g } of points) if (u < last.u) slope = Math.min(slope, (last.g - g) / (last.u - u));
-  return Number.isFinite(slope) ? slope : fallback;
+  return slope;
 }
 
-/** Slopes the curve has at the ends of an interval: no line may be steeper or flatter than the curve anywhere. */
-function slopeRange(curve: ViCurve, from: number, to: number): { min: number; max: number } {
-  const slopes: number[] = [];
-  for (let piece = pieceOf(from); knot(piece) < to || slopes.length === 0; piece++) {
-    slopes.push(curveAt(curve, piece, Math.max(from, knot(piece))).slope);
-    slopes.push(curveAt(curve, piece, Math.max(from, Math.min(to, knot(piece + 1)))).slope);
+/** No line may be steeper or flatter than the curve is anywhere: differences of close points are mostly rounding. */
+function withinSlopes(parts: readonly CurvePart[], slope: number): number {
+  let min = Infinity;
+  let max = -Infinity;
+  for (const { from, to } of parts) {
+    min = Math.min(min, from.slope, to.slope);
+    max = Math.max(max, from.slope, to.slope);
   }
-  return { min: Math.min(...slopes), max: Math.max(...slopes) };
+  return Math.min(max, Math.max(min, slope));
 }
 
 /**
@@ -55,21 +55,39 @@ function slopeRange(curve: ViCurve, from: number, to: number): { min: number; ma
  * with at least the viscosity index lies under both.
  */
 export function outerLines(curve: ViCurve, from: number, to: number): [Line, Line] {
-  const points = upperPoints(curve, from, to);
-  const range = slopeRange(curve, from, to);
-  const clamp = (slope: number) => Math.min(range.max, Math.max(range.min, slope));
-  const middle = (range.min + range.max) / 2;
+  const parts = curve.parts(from, to);
+  const points = upperPoints(parts);
   return [
-    lineAbove(points, clamp(slopeFromFirst(points, middle))),
-    lineAbove(points, clamp(slopeToLast(points, middle))),
+    lineAbove(points, withinSlopes(parts, slopeFromFirst(points))),
+    lineAbove(points, withinSlopes(parts, slopeToLast(points))),
   ];
+}
+
+/** Offset of the lowest line of a slope that lies above the curve over an interval. */
+export function offsetAbove(curve: ViCurve, from: number, to: number, slope: number): number {
+  return lineAbove(upperPoints(curve.parts(from, to)), slope).offset;
 }
 
 /** A line below the curve over an interval, its chord where the curve is concave: the outer line of "VI at most". */
 export function lowerLine(curve: ViCurve, from: number, to: number): Line {
-  const points = lowerPoints(curve, from, to);
+  const parts = curve.parts(from, to);
+  const points = lowerPoints(parts);
   const first = points[0];
   const last = points[points.length - 1];
-  const middle = curveAt(curve, pieceOf(from), from).slope;
-  return lineBelow(points, last.u > first.u ? (last.g - first.g) / (last.u - first.u) : middle);
+  return lineBelow(points, last.u > first.u ? (last.g - first.g) / (last.u - first.u) : parts[0].from.slope);
+}
+
+/** The chord of the curve inside the piece of `from`: under it a recipe surely has the index where G is concave. */
+export function chord(curve: ViCurve, from: number, to: number): Line {
+  const piece = pieceOf(from);
+  const a = curve.at(piece, from);
+  const b = curve.at(piece, Math.min(to, knot(piece + 1)));
+  const slope = b.u > a.u ? (b.g - a.g) / (b.u - a.u) : a.slope;
+  return { offset: a.g - slope * a.u, slope };
+}
+
+/** The tangent of the curve at a KV100 [mm²/s]: above it a recipe surely keeps "VI at most" where G is concave. */
+export function tangent(curve: ViCurve, kv100: number): Line {
+  const { u, g, slope } = curve.at(pieceOf(kv100), kv100);
+  return { offset: g - slope * u, slope };
 }
