@@ -1,7 +1,9 @@
 import type { WorkbookOrder } from '../../src';
+import { classNames } from '../parts/classNames';
 import { NumberField } from '../parts/NumberField';
 import { RangeFields } from '../parts/RangeFields';
 import { Select } from '../parts/Select';
+import styles from './rules.module.css';
 
 type Batch = WorkbookOrder['batchTonnes'];
 
@@ -18,7 +20,7 @@ export function BatchField({ batch, onChange }: { batch: Batch; onChange(batch: 
   }
 
   return (
-    <>
+    <div className={classNames(styles.batch, batch !== undefined && styles.wide)}>
       <Select
         label="Batch"
         value={kind}
@@ -51,6 +53,6 @@ export function BatchField({ batch, onChange }: { batch: Batch; onChange(batch: 
           onChange={({ min, max }) => onChange({ min: min ?? batch.min, max: max ?? batch.max })}
         />
       )}
-    </>
+    </div>
   );
 }

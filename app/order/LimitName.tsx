@@ -34,14 +34,14 @@ export function LimitName({
         aria-describedby={tipId}
         onClick={onToggle}
       >
-        {name}
         <Icon name="right" />
+        {name}
         <span id={tipId} className={styles.tip} aria-hidden="true">
           {definition.method}
         </span>
       </button>
       <div className={styles.status}>
-        <span>{unitOf(definition) ?? 'no unit'}</span>
+        {unitOf(definition) && <span>{unitOf(definition)}</span>}
         {check && (
           <span
             className={classNames(

@@ -69,6 +69,8 @@ export function LimitRow({ orderId, limit, index, answer, isNew }: LimitRowProps
   const problemId = problems.length ? `${id}-problem` : undefined;
   const ends = {
     context: name,
+    unit: unitOf(definition),
+    hideUnit: true,
     digits: definition.digits,
     step: definition.reportingUnit,
     sense: definition.sense,

@@ -8,21 +8,19 @@ export function OrderHeading({ order }: { order: WorkbookOrder }) {
   return (
     <div className={styles.heading}>
       <h2 className="visually-hidden">{`Order: ${order.name}`}</h2>
-      <div className={styles.top}>
-        <TextField
-          className={styles.name}
-          controlClassName={styles.nameControl}
-          label="Name of the order"
-          hideLabel
-          value={order.name}
-          check={(text) => (text.trim() ? undefined : 'An order needs a name.')}
-          onCommit={(name) =>
-            editOrder(order.id, 'rename the order', (draft) => {
-              draft.name = name.trim();
-            })
-          }
-        />
-      </div>
+      <TextField
+        controlClassName={styles.nameControl}
+        label="Name of the order"
+        hideLabel
+        wrap
+        value={order.name}
+        check={(text) => (text.trim() ? undefined : 'An order needs a name.')}
+        onCommit={(name) =>
+          editOrder(order.id, 'rename the order', (draft) => {
+            draft.name = name.trim();
+          })
+        }
+      />
       <TextField
         label="Note"
         hideLabel

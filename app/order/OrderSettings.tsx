@@ -19,7 +19,7 @@ export function OrderSettings({ order }: { order: WorkbookOrder }) {
         label="Work on"
         value={order.solveOn}
         options={[
-          { value: 'products', label: 'products, typical figures' },
+          { value: 'products', label: 'typical figures' },
           { value: 'lots', label: 'lots on hand' },
         ]}
         onChange={(solveOn) => edit('change what the order works on', (draft) => Object.assign(draft, { solveOn }))}
@@ -34,6 +34,7 @@ export function OrderSettings({ order }: { order: WorkbookOrder }) {
         onChange={(costBasis) => edit('change the cost basis', (draft) => Object.assign(draft, { costBasis }))}
       />
       <Select
+        className={styles.wide}
         label="Viscosity blends by"
         value={order.viscosityRule}
         options={VISCOSITY_RULES.map((rule) => ({ value: rule, label: VISCOSITY_RULE_TABLE[rule].label }))}
@@ -78,6 +79,7 @@ export function OrderSettings({ order }: { order: WorkbookOrder }) {
         }
       />
       <Checkbox
+        className={styles.whole}
         label="depressant used: pour points with depressant count"
         checked={order.depressant}
         onChange={(depressant) => edit('change the use of depressant', (draft) => Object.assign(draft, { depressant }))}

@@ -1,4 +1,5 @@
 import styles from './Checkbox.module.css';
+import { classNames } from './classNames';
 
 /** A yes or no with its words beside it. */
 export function Checkbox({
@@ -6,14 +7,16 @@ export function Checkbox({
   checked,
   onChange,
   disabled,
+  className,
 }: {
   label: string;
   checked: boolean;
   onChange(checked: boolean): void;
   disabled?: boolean;
+  className?: string;
 }) {
   return (
-    <label className={styles.checkbox}>
+    <label className={classNames(styles.checkbox, className)}>
       <input
         type="checkbox"
         checked={checked}

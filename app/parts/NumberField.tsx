@@ -6,6 +6,8 @@ import { type NumberDraftOptions, useNumberDraft } from './useNumberDraft';
 export interface NumberFieldProps extends NumberDraftOptions {
   label: string;
   unit?: string;
+  /** The unit is read aloud only; the page shows it elsewhere. */
+  hideUnit?: boolean;
   /** Read aloud before the label where the page shows it elsewhere: the row's name. */
   context?: string;
   /** The label is read aloud only. */
@@ -29,6 +31,7 @@ export interface NumberFieldProps extends NumberDraftOptions {
 export function NumberField({
   label,
   unit,
+  hideUnit,
   context,
   hideLabel,
   inline,
@@ -47,13 +50,13 @@ export function NumberField({
   return (
     <span className={classNames(styles.field, inline && styles.inline, className)}>
       <label htmlFor={id} className={hideLabel ? 'visually-hidden' : styles.label}>
-        {context && <span className="visually-hidden">{context}, </span>}
         {label}
         {unit && <span className="visually-hidden">, {unit}</span>}
       </label>
       <span className={styles.box}>
         <input
           id={id}
+          aria-label={context && [context, label, unit].filter(Boolean).join(', ')}
           className={classNames(styles.control, styles.number)}
           type="text"
           inputMode="decimal"
@@ -66,7 +69,7 @@ export function NumberField({
           data-dirty={draft.dirty || undefined}
           {...draft.inputProps}
         />
-        {unit && (
+        {unit && !hideUnit && (
           <span className={styles.unit} aria-hidden="true">
             {unit}
           </span>

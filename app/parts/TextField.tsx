@@ -12,6 +12,8 @@ export interface TextFieldProps {
   check?(text: string): string | undefined;
   /** Several lines; Enter then starts a new one. */
   rows?: number;
+  /** One line of text that may be shown on several; Enter commits. */
+  wrap?: boolean;
   className?: string;
   controlClassName?: string;
 }
@@ -25,6 +27,7 @@ export function TextField({
   placeholder,
   check,
   rows,
+  wrap,
   className,
   controlClassName,
 }: TextFieldProps) {
@@ -42,7 +45,10 @@ export function TextField({
   }
 
   function onKeyDown(event: KeyboardEvent) {
-    if (event.key === 'Enter' && !rows) commit();
+    if (event.key === 'Enter' && !rows) {
+      event.preventDefault();
+      commit();
+    }
     if (event.key === 'Escape' && draft !== undefined) {
       event.stopPropagation();
       setDraft(undefined);
@@ -56,8 +62,9 @@ export function TextField({
     placeholder,
     onKeyDown,
     onBlur: commit,
-    onChange: (event: { target: { value: string } }) => setDraft(event.target.value),
-    className: classNames(styles.control, styles.text, controlClassName),
+    onChange: (event: { target: { value: string } }) =>
+      setDraft(wrap ? event.target.value.replace(/\s*\n\s*/g, ' ') : event.target.value),
+    className: classNames(styles.control, styles.text, (rows !== undefined || wrap) && styles.grows, controlClassName),
     'aria-invalid': problem ? true : undefined,
     'aria-describedby': problem ? `${id}-problem` : undefined,
     'data-dirty': draft !== undefined || undefined,
@@ -68,7 +75,7 @@ export function TextField({
       <label htmlFor={id} className={hideLabel ? 'visually-hidden' : styles.label}>
         {label}
       </label>
-      {rows ? <textarea rows={rows} {...shared} /> : <input type="text" autoComplete="off" {...shared} />}
+      {rows || wrap ? <textarea rows={rows ?? 1} {...shared} /> : <input type="text" autoComplete="off" {...shared} />}
       {problem && (
         <span id={`${id}-problem`} className={styles.problem} role="status">
           {problem}

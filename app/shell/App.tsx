@@ -1,7 +1,7 @@
 import { AnswerPanel } from '../answer/AnswerPanel';
 import { OrderEditor } from '../order/OrderEditor';
 import { useCommandKeys } from '../parts/useCommandKeys';
-import { PLAIN_COMMANDS } from '../state/commands';
+import { keyedCommands } from '../state/commands';
 import { useView } from '../state/viewStore';
 import { StocksTable } from '../stocks/StocksTable';
 import { Announcer } from './Announcer';
@@ -16,7 +16,7 @@ import { PageNav } from './PageNav';
 /** The sheet: orders, the order, its answer, and the stocks below. */
 export function App() {
   const orderId = useView((view) => view.orderId);
-  useCommandKeys(PLAIN_COMMANDS);
+  useCommandKeys(keyedCommands);
   return (
     <div className={styles.page}>
       <Header />

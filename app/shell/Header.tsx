@@ -1,7 +1,8 @@
 import { useState } from 'react';
 import { IconButton } from '../parts/IconButton';
 import { TextField } from '../parts/TextField';
-import { type Imported, useCommands } from '../state/commands';
+import { useCommands } from '../state/commands';
+import type { Imported } from '../state/workbookFile';
 import { editWorkbook, useWorkbook } from '../state/workbookStore';
 import styles from './Header.module.css';
 import { ImportNotice } from './ImportNotice';

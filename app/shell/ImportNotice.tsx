@@ -1,6 +1,6 @@
 import { IconButton } from '../parts/IconButton';
 import { Notice } from '../parts/Notice';
-import type { Imported } from '../state/commands';
+import type { Imported } from '../state/workbookFile';
 import styles from './Header.module.css';
 
 /** How an import went: refused with the reason, or what had to be put right on the way. */

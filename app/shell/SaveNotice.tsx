@@ -10,7 +10,7 @@ export function SaveNotice() {
   const { exportWorkbook, exportSetAside } = useCommands();
   return (
     <>
-      {message && (
+      {message && message !== setAside?.message && (
         <Notice tone={state === 'saved' || state === 'saving' ? 'info' : 'bad'} live className={styles.notice}>
           <span>{message}</span>
           {state !== 'saved' && <Button onClick={() => exportWorkbook.run()}>{exportWorkbook.label}</Button>}

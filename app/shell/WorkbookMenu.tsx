@@ -1,7 +1,8 @@
 import { type ChangeEvent, useRef } from 'react';
 import { keysInWords } from '../parts/keysInWords';
 import { Menu, MenuItem } from '../parts/Menu';
-import { type Command, type Imported, useCommands } from '../state/commands';
+import { type Command, useCommands } from '../state/commands';
+import type { Imported } from '../state/workbookFile';
 
 /** What is done with the workbook as a whole. Nothing here is final: opening another one can be undone. */
 export function WorkbookMenu({ onImported }: { onImported(result: Imported & { fileName: string }): void }) {

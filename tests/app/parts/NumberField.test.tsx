@@ -7,38 +7,37 @@ import { NumberField, type NumberFieldProps } from '../../../app/parts/NumberFie
 type Options = Partial<NumberFieldProps> & { start?: number };
 
 /** A field that keeps what it is told, as the page does. */
-function setUp({ start, ...options }: Options = {}) {
+function Keeper({ start, onDraft, onCommit, ...options }: Options) {
+  const [value, setValue] = useState(start);
+  return (
+    <NumberField
+      label="least"
+      unit="mm²/s"
+      digits={2}
+      {...options}
+      value={value}
+      onCommit={(next) => {
+        onCommit?.(next);
+        setValue(next);
+      }}
+      onDraft={
+        onDraft &&
+        ((next) => {
+          onDraft(next);
+          setValue(next);
+        })
+      }
+    />
+  );
+}
+
+function setUp({ live, ...options }: Options & { live?: boolean } = {}) {
   const onCommit = vi.fn<(value: number | undefined) => void>();
   const onDraft = vi.fn<(value: number) => void>();
-  function Keeper() {
-    const [value, setValue] = useState(start);
-    return (
-      <NumberField
-        label="least"
-        unit="mm²/s"
-        digits={2}
-        {...options}
-        value={value}
-        onCommit={(next) => {
-          onCommit(next);
-          setValue(next);
-        }}
-        onDraft={
-          options.onDraft &&
-          ((next) => {
-            onDraft(next);
-            setValue(next);
-          })
-        }
-      />
-    );
-  }
-  render(<Keeper />);
+  render(<Keeper {...options} onCommit={onCommit} onDraft={live ? onDraft : undefined} />);
   const field = screen.getByRole('textbox', { name: /least, mm²\/s/ });
   return { field, onCommit, onDraft, user: userEvent.setup() };
 }
-
-const live = () => undefined;
 
 describe('NumberField', () => {
   it.each(['12,5', '12.5'])('takes %s and shows it in the user’s own decimal sign', async (text) => {
@@ -105,7 +104,7 @@ describe('NumberField', () => {
   });
 
   it('goes back on Escape to the number it had on entering, though drafts were live', async () => {
-    const { field, onCommit, onDraft, user } = setUp({ start: 44.6, onDraft: live });
+    const { field, onCommit, onDraft, user } = setUp({ start: 44.6, live: true });
     await user.clear(field);
     await user.type(field, '50');
     expect(onDraft.mock.calls).toEqual([[5], [50]]);
@@ -115,7 +114,7 @@ describe('NumberField', () => {
   });
 
   it('steps by the reporting unit, ten of them with Shift, and commits once on leaving', async () => {
-    const { field, onCommit, onDraft, user } = setUp({ start: 44.6, step: 0.1, onDraft: live });
+    const { field, onCommit, onDraft, user } = setUp({ start: 44.6, step: 0.1, live: true });
     await user.click(field);
     await user.keyboard('{ArrowUp}{ArrowUp}{ArrowDown}{Shift>}{ArrowUp}{/Shift}');
     expect(onDraft.mock.calls).toEqual([[44.7], [44.8], [44.7], [45.7]]);
