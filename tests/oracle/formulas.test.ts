@@ -1,8 +1,8 @@
 import { describe, expect, test } from 'vitest';
 import { INDEX_RULES, viscosityTerm } from './indices';
 import { Draw } from './mulberry32';
-import { breakpoints, kv40OfVi, viOf } from './viscosityIndex';
 import { lines, startingSlices } from './viSlices';
+import { breakpoints, kv40OfVi, viOf } from './viscosityIndex';
 import { invert, kvOfWalther, tau, waltherOf } from './walther';
 
 // The second way must itself stand on published figures, or agreement with it means nothing.
@@ -29,7 +29,8 @@ describe('the formulas of the checks', () => {
   });
 
   test('W and its inverse agree', () => {
-    for (const kv of [0.5, 1, 2, 6, 46, 1000, 20000]) expect(Math.abs(kvOfWalther(waltherOf(kv)) / kv - 1)).toBeLessThan(1e-10);
+    for (const kv of [0.5, 1, 2, 6, 46, 1000, 20000])
+      expect(Math.abs(kvOfWalther(waltherOf(kv)) / kv - 1)).toBeLessThan(1e-10);
   });
 
   test('published: half PAO 4 and half PAO 100 by mass have KV100 17.7 (Wright), 13.2 (Walther), 13.8, 19.9, 30.1', () => {

@@ -36,7 +36,11 @@ export class LinearModel {
     const { stocks, rows, choices, lower, upper, least, cost, volumes } = order;
     this.count = stocks.length;
     const n = this.count;
-    const chooses = choices.most !== undefined || choices.counts.length > 0 || choices.excludes.length > 0 || least.some((l) => l > 0);
+    const chooses =
+      choices.most !== undefined ||
+      choices.counts.length > 0 ||
+      choices.excludes.length > 0 ||
+      least.some((l) => l > 0);
     this.hasChoices = chooses;
     const columns = chooses ? 2 * n : n;
     const all: { values: [number, number][]; lower: number; upper: number }[] = [];
@@ -54,18 +58,35 @@ export class LinearModel {
     if (chooses) {
       if (volumes) throw new Error('The oracle takes costs per m³ with choices by enumeration only.');
       for (let i = 0; i < n; i++) {
-        all.push({ values: [[i, 1], [n + i, -upper[i]]], lower: -Infinity, upper: 0 });
-        if (least[i] > 0) all.push({ values: [[i, 1], [n + i, -least[i]]], lower: 0, upper: Infinity });
+        all.push({
+          values: [
+            [i, 1],
+            [n + i, -upper[i]],
+          ],
+          lower: -Infinity,
+          upper: 0,
+        });
+        if (least[i] > 0)
+          all.push({
+            values: [
+              [i, 1],
+              [n + i, -least[i]],
+            ],
+            lower: 0,
+            upper: Infinity,
+          });
       }
       const sum = (places: number[]): [number, number][] => places.map((i) => [n + i, 1]);
-      if (choices.most !== undefined) all.push({ values: sum(stocks.map((_, i) => i)), lower: -Infinity, upper: choices.most });
+      if (choices.most !== undefined)
+        all.push({ values: sum(stocks.map((_, i) => i)), lower: -Infinity, upper: choices.most });
       for (const { members, max } of choices.counts) all.push({ values: sum(members), lower: -Infinity, upper: max });
       for (const { from, members } of choices.excludes) {
         for (const other of members) all.push({ values: sum([from, other]), lower: -Infinity, upper: 1 });
       }
     }
     this.firstMoving = all.length;
-    for (let k = 0; k < moving; k++) all.push({ values: dense(stocks.map(() => 1)), lower: -Infinity, upper: Infinity });
+    for (let k = 0; k < moving; k++)
+      all.push({ values: dense(stocks.map(() => 1)), lower: -Infinity, upper: Infinity });
     const starts = new Int32Array(all.length + 1);
     all.forEach((row, place) => {
       starts[place + 1] = starts[place] + row.values.length;
@@ -123,7 +144,8 @@ export class LinearModel {
     for (let i = 0; i < this.count; i++) {
       const used = support?.[i];
       this.model.changeColBounds(i, used ? Math.max(lower[i], least[i]) : lower[i], used === false ? 0 : upper[i]);
-      if (this.hasChoices) this.model.changeColBounds(this.count + i, used ? 1 : lower[i] > 0 ? 1 : 0, used === false ? 0 : 1);
+      if (this.hasChoices)
+        this.model.changeColBounds(this.count + i, used ? 1 : lower[i] > 0 ? 1 : 0, used === false ? 0 : 1);
     }
   }
 

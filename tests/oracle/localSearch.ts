@@ -17,13 +17,17 @@ function simpleRules(order: Order): Simple {
   return { lower: rows.lower, upper: rows.upper, rows: rows.rows.filter(isShare) };
 }
 
-function missOfRules({ rows }: Simple, x: readonly number[]): number {
-  let miss = 0;
+function missOfRules({ rows, lower: lowest, upper: highest }: Simple, x: readonly number[]): number {
+  let miss = x.reduce((most, share, i) => Math.max(most, lowest[i] - share, share - highest[i]), 0);
   for (const { values, lower, upper } of rows) {
     const sum = values.reduce((total, v, i) => total + v * x[i], 0);
     miss = Math.max(miss, lower - sum, sum - upper);
   }
   return miss;
+}
+
+function keepsBounds({ lower, upper }: Simple, x: readonly number[]): boolean {
+  return x.every((share, i) => share >= lower[i] && share <= upper[i]);
 }
 
 /** One random step that keeps Σ x = 1 and the bounds, or undefined. */
@@ -37,19 +41,26 @@ function stepFrom(draw: Draw, x: readonly number[], { lower, upper }: Simple, si
     rest += next[place] - x[place];
   }
   next[places[0]] -= rest;
-  return next[places[0]] < lower[places[0]] || next[places[0]] > upper[places[0]] ? undefined : next;
+  return next[places[0]] < 0 || next[places[0]] > 1 ? undefined : next;
 }
 
 /**
  * Cheapest feasible cost that random local search reaches from many starts, judged by `predictBlend` alone. Knows
  * nothing of rows, bounds of cost or the search: it can only ever attack a claim, not support one.
  */
-export function attack(order: Order, recipe: Recipe, seed: number, starts: number, steps: number): { cost: number; x: number[] } {
+export function attack(
+  order: Order,
+  recipe: Recipe,
+  seed: number,
+  starts: number,
+  steps: number,
+): { cost: number; x: number[] } {
   const draw = new Draw(seed);
   const rules = simpleRules(order);
   const scale = Math.max(1, ...order.stocks.map((stock) => Math.abs(stock.pricePerTonne)));
   const miss = (x: readonly number[]) => Math.max(predictedViolation(order, x), 1e6 * missOfRules(rules, x));
-  const given = order.stocks.map((stock) => recipe.find((line) => line.stockId === stock.id)?.massFraction ?? 0);
+  const even = recipe.length > 0 ? 0 : 1 / order.stocks.length;
+  const given = order.stocks.map((stock) => recipe.find((line) => line.stockId === stock.id)?.massFraction ?? even);
   let best = { cost: Infinity, x: given };
   for (let start = 0; start < starts; start++) {
     let x = [...given];
@@ -62,7 +73,8 @@ export function attack(order: Order, recipe: Recipe, seed: number, starts: numbe
       const next = stepFrom(draw, x, rules, size);
       if (!next) continue;
       const state = { miss: Math.max(0, miss(next)), cost: costOf(order, next) };
-      if (state.miss <= 1e-9 && state.cost < best.cost) best = { cost: state.cost, x: next };
+      if (state.miss <= 1e-9 && keepsBounds(rules, next) && state.cost < best.cost)
+        best = { cost: state.cost, x: next };
       if (worth(state, price) < worth(current, price)) {
         x = next;
         current = state;

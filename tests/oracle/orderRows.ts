@@ -25,7 +25,11 @@ export interface OrderRows {
   vi?: { min?: number; max?: number };
   /** KV100 window [mm²/s]. */
   window: { low: number; high: number };
-  choices: { most?: number; counts: { members: number[]; max: number }[]; excludes: { from: number; members: number[] }[] };
+  choices: {
+    most?: number;
+    counts: { members: number[]; max: number }[];
+    excludes: { from: number; members: number[] }[];
+  };
   /** Specific volumes [L/kg], for costs per m³. */
   volumes?: number[];
 }
@@ -113,8 +117,17 @@ function meanRow(name: string, weights: number[], indices: number[], end: number
 function limitRows(limit: Limit, order: Order, built: OrderRows): Row[] {
   const { min, max } = endsOf(limit);
   const rows: Row[] = [];
-  const add = (weights: number[], indices: number[], toIndex: (v: number) => number, sense: 1 | -1, scale: (i: number) => number) => {
-    for (const [end, upper] of [[min, false], [max, true]] as const) {
+  const add = (
+    weights: number[],
+    indices: number[],
+    toIndex: (v: number) => number,
+    sense: 1 | -1,
+    scale: (i: number) => number,
+  ) => {
+    for (const [end, upper] of [
+      [min, false],
+      [max, true],
+    ] as const) {
       if (end === undefined) continue;
       const index = toIndex(end);
       const name = `${limit.property}@${limit.celsius ?? ''} ${upper ? 'max' : 'min'} ${end}`;
@@ -128,12 +141,20 @@ function limitRows(limit: Limit, order: Order, built: OrderRows): Row[] {
     const indices = terms.map((t) =>
       celsius === 40 ? t.index40 : celsius === 100 ? t.index100 : indexOnLine(t.index40, t.index100, celsius),
     );
-    add(terms.map((t) => t.weight), indices, index, 1, (i) => Math.max(0.1, Math.abs(i)));
+    add(
+      terms.map((t) => t.weight),
+      indices,
+      index,
+      1,
+      (i) => Math.max(0.1, Math.abs(i)),
+    );
     return rows;
   }
   const rule = INDEX_RULES[limit.property];
   const found = built.stocks.map((stock) =>
-    limit.property === 'pourPoint' ? pour(stock, order.depressant ?? false) : seen(stock, limit.property, limit.celsius),
+    limit.property === 'pourPoint'
+      ? pour(stock, order.depressant ?? false)
+      : seen(stock, limit.property, limit.celsius),
   );
   const weights = built.stocks.map((stock, i) =>
     typeof found[i] !== 'object' ? 0 : rule.basis === 'volume' ? volumeOf(stock) : 1,

@@ -17,8 +17,11 @@ export interface Planted {
   x: number[];
   /** Where x* sits in the KV100 window. */
   place: 'inside' | 'low end' | 'high end';
-  width: Width;
+  width: PlantedWidth;
 }
+
+/** Also 'piece': a window within one piece of Table 1, where the curve is concave and any x* can be planted inside. */
+export type PlantedWidth = Width | 'piece';
 
 interface Line {
   slope: number;
@@ -31,13 +34,13 @@ interface Plane {
   index: (kv: number) => number;
 }
 
-/** Points of the curve G over a window, 40 a piece of D2270, both values at 70. */
+/** Points of the curve G over a window, 16 a piece of D2270, both values at 70. */
 function curve({ vi, index }: Plane, low: number, high: number): { u: number; g: number }[] {
   const cuts = breakpoints(low, high);
   const points: { u: number; g: number }[] = [];
   for (let k = 1; k < cuts.length; k++) {
-    for (let i = 0; i <= 40; i++) {
-      const y = i === 40 ? cuts[k] : cuts[k - 1] + ((cuts[k] - cuts[k - 1]) * i) / 40;
+    for (let i = 0; i <= 16; i++) {
+      const y = i === 16 ? cuts[k] : cuts[k - 1] + ((cuts[k] - cuts[k - 1]) * i) / 16;
       points.push({ u: index(y), g: index(kv40OfVi(vi, y, cuts[k - 1] >= 70)) });
     }
   }
@@ -67,12 +70,36 @@ function boundingLine(plane: Plane, y: number, low: number, high: number, draw: 
   return out <= 1e-11 ? { slope, offset } : undefined;
 }
 
-function windowAround(draw: Draw, y: number, width: number): { low: number; high: number; place: Planted['place'] } {
-  const kind = draw.pick(['inside', 'low end', 'high end'] as const);
-  if (kind === 'low end') return { low: y, high: y * (1 + 2 * width), place: kind };
-  if (kind === 'high end') return { low: Math.max(2, y * (1 - 2 * width)), high: y, place: kind };
-  const part = draw.between(0.2, 0.8);
-  return { low: Math.max(2, y * (1 - 2 * width * part)), high: y * (1 + 2 * width * (1 - part)), place: kind };
+interface Window {
+  low: number;
+  high: number;
+  place: Planted['place'];
+}
+
+/** A window with x*'s KV100 = y where it is asked for; `reach` are the thinnest and the thickest stock. */
+function windowAround(draw: Draw, y: number, width: PlantedWidth, place: Planted['place'], reach: number[]): Window {
+  if (width === 'piece') {
+    const cuts = breakpoints(2, 200);
+    const above = cuts.findIndex((cut) => cut > y);
+    const inside = (end: number) => y + (end - y) * draw.between(0.2, 0.95);
+    return { low: inside(cuts[above - 1]), high: inside(cuts[above]), place: 'inside' };
+  }
+  const part = place === 'low end' ? 0 : place === 'high end' ? 1 : draw.between(0.2, 0.8);
+  const low = width === 'none' ? reach[0] : y * (1 - 2 * width * part);
+  const high = width === 'none' ? reach[1] : y * (1 + 2 * width * (1 - part));
+  return { low: Math.max(2, place === 'low end' ? y : low), high: place === 'high end' ? y : high, place };
+}
+
+/** The limit on KV100 that makes the window; an end that only the stocks set is left open. */
+function windowLimit({ low, high, place }: Window, width: PlantedWidth): Limit | undefined {
+  const open = width === 'none';
+  if (open && place === 'inside') return undefined;
+  return {
+    property: 'kv',
+    celsius: 100,
+    ...(open && place === 'high end' ? {} : { min: low }),
+    ...(open && place === 'low end' ? {} : { max: high }),
+  };
 }
 
 /** Rows scaled so that their largest coefficient is 1, with their multipliers. */
@@ -95,13 +122,22 @@ class Prices {
   }
 
   at(base: number, x: readonly number[]): number[] {
-    return this.pull.map((pull, i) => base - pull + (x[i] > 0 || this.draw.chance(0.15) ? 0 : this.draw.between(0, 250)));
+    return this.pull.map(
+      (pull, i) => base - pull + (x[i] > 0 || this.draw.chance(0.15) ? 0 : this.draw.between(0, 250)),
+    );
   }
 }
 
 /** Limits on averages, laid through x* or with room, and their rows. */
 function addMeans(draw: Draw, order: Order, x: readonly number[], prices: Prices): void {
-  const laid: [string, 'min' | 'max', number][] = [['noack', 'max', 0.6], ['pourPoint', 'max', 0.4], ['flashPoint', 'min', 0.3], ['sulphur', 'max', 0.2], ['density', 'max', 0.2], ['density', 'min', 0.15]];
+  const laid: [string, 'min' | 'max', number][] = [
+    ['noack', 'max', 0.6],
+    ['pourPoint', 'max', 0.4],
+    ['flashPoint', 'min', 0.3],
+    ['sulphur', 'max', 0.2],
+    ['density', 'max', 0.2],
+    ['density', 'min', 0.15],
+  ];
   for (const [property, end, chance] of laid) {
     if (!draw.chance(chance)) continue;
     const { basis, toIndex, fromIndex, sense } = INDEX_RULES[property];
@@ -119,11 +155,12 @@ function addMeans(draw: Draw, order: Order, x: readonly number[], prices: Prices
 function addRules(draw: Draw, order: Order, x: readonly number[], cost: number[]): void {
   const used = x.flatMap((share, i) => (share > 0 ? [i] : []));
   const [some] = draw.shuffled(used);
-  if (draw.chance(0.3)) {
+  const kind = draw.whole(0, 9);
+  if (kind < 3) {
     // A cap at x*: its multiplier makes the capped stock cheaper still.
     order.stocks[some].greatestDose = x[some];
     cost[some] -= draw.between(0, 200);
-  } else if (draw.chance(0.3)) {
+  } else if (kind < 6) {
     // An exact dose: the price of such a stock is free.
     order.doses = [{ stockId: order.stocks[some].id, exactly: x[some] }];
     cost[some] = draw.between(500, 4000);
@@ -144,7 +181,7 @@ function termsOf(order: Order, rule: ViscosityRule): ViscosityTerm[] {
   );
 }
 
-function attempt(draw: Draw): Planted | undefined {
+function attempt(draw: Draw, width: PlantedWidth, place: Planted['place']): Planted | undefined {
   const stocks = Array.from({ length: draw.whole(5, 16) }, (_, place) => randomStock(draw, place));
   const order: Order = { stocks, limits: [] };
   if (draw.chance(0.15)) stocks[0].blendWeight = draw.between(0.7, 1.4);
@@ -160,24 +197,22 @@ function attempt(draw: Draw): Planted | undefined {
   if (!(y >= 2.1 && y < 90)) return undefined;
   const vi = viOf(invert(index, g0), y);
   if (!(vi > 60 && vi < 200)) return undefined;
-  const width = draw.pick<Width>([0.05, 0.25, 'none']);
-  const thickest = Math.max(...stocks.map((stock) => figureOf(stock, 'kv', 100)));
-  const thinnest = Math.min(...stocks.map((stock) => figureOf(stock, 'kv', 100)));
-  const open = { low: Math.max(2, thinnest), high: thickest, place: 'inside' as const };
-  const window = width === 'none' ? open : windowAround(draw, y, width);
+  const thin = stocks.map((stock) => figureOf(stock, 'kv', 100));
+  const window = windowAround(draw, y, width, place, [Math.min(...thin), Math.max(...thin)]);
   const side = window.place !== 'inside' && draw.chance(0.12) ? 'max' : 'min';
   const line = boundingLine({ vi, side, index }, y, window.low, window.high, draw);
   if (!line) return undefined;
   const prices = new Prices(draw, stocks.length);
   const sign = side === 'min' ? 1 : -1;
   order.limits.push({ property: 'vi', [side]: vi });
-  prices.add(terms.map((t) => sign * t.weight * (t.index40 - g0 - line.slope * (t.index100 - u0))), 0.2);
-  if (width !== 'none') {
-    const kv: Limit = { property: 'kv', celsius: 100, min: window.low, max: window.high };
-    order.limits.push(kv);
-    if (window.place === 'low end') prices.add(terms.map((t) => -t.weight * (t.index100 - u0)));
-    if (window.place === 'high end') prices.add(terms.map((t) => t.weight * (t.index100 - u0)));
-  }
+  prices.add(
+    terms.map((t) => sign * t.weight * (t.index40 - g0 - line.slope * (t.index100 - u0))),
+    0.2,
+  );
+  const kv = windowLimit(window, width);
+  if (kv) order.limits.push(kv);
+  if (window.place === 'low end') prices.add(terms.map((t) => -t.weight * (t.index100 - u0)));
+  if (window.place === 'high end') prices.add(terms.map((t) => t.weight * (t.index100 - u0)));
   addMeans(draw, order, x, prices);
   const cost = prices.at(draw.between(1200, 2500), x);
   addRules(draw, order, x, cost);
@@ -190,8 +225,12 @@ function attempt(draw: Draw): Planted | undefined {
 /** A planted order; seeds whose first mixes cannot be planted draw on from the same stream. */
 export function plantedOrder(seed: number): Planted {
   const draw = new Draw(seed);
-  for (let tries = 0; tries < 2000; tries++) {
-    const planted = attempt(draw);
+  const width = draw.pick<PlantedWidth>([0.05, 0.25, 'none', 'piece']);
+  const wish = draw.pick(['inside', 'low end', 'high end'] as const);
+  for (let tries = 0; tries < 400; tries++) {
+    // Over a wide window few mixes lie where one line bounds the curve: then the end of the window takes its place.
+    const place = wish === 'inside' && tries >= 40 ? 'low end' : wish;
+    const planted = attempt(draw, width, place);
     if (planted) return planted;
   }
   throw new Error(`Seed ${seed} plants nothing.`);

@@ -4,7 +4,8 @@ import { endsOf, unitOf } from './orderRows';
 export type Predict = typeof predictBlend;
 
 function lookUp(predicted: PredictedProperties, property: string, celsius?: number): number | undefined {
-  return predicted.properties.find((p) => p.property === property && (celsius === undefined || p.celsius === celsius))?.value;
+  return predicted.properties.find((p) => p.property === property && (celsius === undefined || p.celsius === celsius))
+    ?.value;
 }
 
 /** The worst miss of the limits in reporting units, as `predictBlend` alone sees it; Infinity where unknown. */

@@ -17,7 +17,14 @@ interface Kind {
 const KINDS: Kind[] = [
   { family: 'Group I', kv100: [3.5, 33], vi: [88, 104], density: [862, 905], price: [820, 1250], pour: [-15, -6] },
   { family: 'Group II', kv100: [2.1, 13], vi: [95, 118], density: [840, 875], price: [880, 1100], pour: [-21, -12] },
-  { family: 'Group III', kv100: [2.4, 8.5], vi: [115, 138], density: [822, 848], price: [1050, 1450], pour: [-24, -12] },
+  {
+    family: 'Group III',
+    kv100: [2.4, 8.5],
+    vi: [115, 138],
+    density: [822, 848],
+    price: [1050, 1450],
+    pour: [-24, -12],
+  },
   { family: 'PAO', kv100: [1.7, 10], vi: [110, 142], density: [795, 835], price: [1900, 2600], pour: [-70, -48] },
   { family: 'PAO', kv100: [38, 110], vi: [145, 172], density: [845, 858], price: [3000, 4200], pour: [-36, -27] },
   { family: 'ester', kv100: [2.6, 20], vi: [95, 165], density: [900, 1000], price: [2400, 3600], pour: [-60, -30] },
@@ -45,7 +52,8 @@ export function randomStock(draw: Draw, place: number): Stock {
   const vi = draw.between(...kind.vi);
   const kv40 = kv40OfVi(vi, Math.max(2, kv100)) * (kv100 < 2 ? (kv100 / 2) ** 1.35 : 1);
   const quality = (vi - kind.vi[0]) / (kind.vi[1] - kind.vi[0]);
-  const price = (kind.price[0] + (kind.price[1] - kind.price[0]) * (0.6 * quality + 0.4 * draw.next())) * draw.between(0.97, 1.03);
+  const price =
+    (kind.price[0] + (kind.price[1] - kind.price[0]) * (0.6 * quality + 0.4 * draw.next())) * draw.between(0.97, 1.03);
   const noack = Math.min(60, (62 / kv100 ** 1.15) * draw.between(0.7, 1.2));
   const round = (value: number, digits: number) => Number(value.toFixed(digits));
   const figure = (property: string, value: number, celsius?: number): Figure => ({
@@ -68,15 +76,19 @@ export function randomStock(draw: Draw, place: number): Stock {
       figure('noack', round(noack, 1)),
       figure('pourPoint', neat),
       ...(waxy ? [figure('pourPointDepressed', neat - Math.round(draw.between(9, 24)))] : []),
-      figure('flashPoint', Math.round(180 + 35 * Math.log(kv100) * draw.between(0.8, 1.2))),
-      figure('sulphur', kind.family === 'Group I' ? Math.round(draw.between(500, 7000)) : Math.round(draw.between(0, 300))),
+      figure('flashPoint', Math.min(320, Math.round(180 + 35 * Math.log(kv100) * draw.between(0.8, 1.2)))),
+      figure(
+        'sulphur',
+        kind.family === 'Group I' ? Math.round(draw.between(500, 7000)) : Math.round(draw.between(0, 300)),
+      ),
     ],
   };
 }
 
 /** The value of a figure that is there. */
 export const figureOf = (stock: Stock, property: string, celsius?: number): number =>
-  stock.figures.find((f) => f.property === property && (celsius === undefined || f.celsius === celsius))?.value ?? Number.NaN;
+  stock.figures.find((f) => f.property === property && (celsius === undefined || f.celsius === celsius))?.value ??
+  Number.NaN;
 
 /** KV40 and KV100 of a mix by the Wright method, for setting limits that are near what can be made. */
 export function mixViscosities(stocks: readonly Stock[], x: readonly number[]): { kv40: number; kv100: number } {
@@ -110,7 +122,10 @@ export function randomMix(draw: Draw, stocks: readonly Stock[]): number[] {
 
 function viscosityWindow(draw: Draw, width: Width, kv40: number, kv100: number): Limit[] {
   const centre = kv100 * draw.between(0.98, 1.02);
-  if (width === 'none') return draw.chance(0.5) ? [{ property: 'kv', celsius: 40, min: kv40 * draw.between(0.8, 0.97), max: kv40 * draw.between(1.03, 1.3) }] : [];
+  if (width === 'none')
+    return draw.chance(0.5)
+      ? [{ property: 'kv', celsius: 40, min: kv40 * draw.between(0.8, 0.97), max: kv40 * draw.between(1.03, 1.3) }]
+      : [];
   return [{ property: 'kv', celsius: 100, min: centre * (1 - width), max: centre * (1 + width) }];
 }
 
@@ -121,15 +136,24 @@ function addRules(draw: Draw, order: Order, mix: readonly number[]): void {
   if (draw.chance(0.3)) {
     const place = draw.whole(0, stocks.length - 1);
     const dose = draw.between(0.005, 0.12);
-    doses.push(draw.chance(0.5) ? { stockId: stocks[place].id, exactly: dose } : { stockId: stocks[place].id, min: dose, max: dose * 2 });
+    doses.push(
+      draw.chance(0.5)
+        ? { stockId: stocks[place].id, exactly: dose }
+        : { stockId: stocks[place].id, min: dose, max: dose * 2 },
+    );
   }
   if (draw.chance(0.3)) {
     const place = draw.whole(0, stocks.length - 1);
-    stocks[place].greatestDose = Math.max(0.3, mix[place] * draw.between(0.7, 1.2));
+    stocks[place].greatestDose = Math.min(1, Math.max(0.3, mix[place] * draw.between(0.7, 1.2)));
   }
   if (draw.chance(0.25)) {
     const family = draw.pick(stocks).family;
-    shares.push({ kind: 'share', set: { families: [family] }, max: draw.between(0.15, 0.6), ...(draw.chance(0.3) ? { of: 'base oil' as const } : {}) });
+    shares.push({
+      kind: 'share',
+      set: { families: [family] },
+      max: draw.between(0.15, 0.6),
+      ...(draw.chance(0.3) ? { of: 'base oil' as const } : {}),
+    });
   }
   if (draw.chance(0.15)) {
     order.batchTonnes = draw.whole(5, 40);
@@ -175,11 +199,17 @@ export function randomOrder(seed: number, shape: OrderShape = CONTINUOUS): Order
   const order: Order = { stocks, limits };
   if (draw.chance(0.4)) {
     order.depressant = draw.chance(0.5);
-    limits.push({ property: 'pourPoint', max: Math.round(mean('pourPoint')) + draw.whole(-3, 9) - (order.depressant ? 12 : 0) });
+    limits.push({
+      property: 'pourPoint',
+      max: Math.round(mean('pourPoint')) + draw.whole(-3, 9) - (order.depressant ? 12 : 0),
+    });
   }
-  if (draw.chance(0.2)) limits.push({ property: 'flashPoint', min: Math.round(mean('flashPoint')) - draw.whole(0, 30) });
-  if (draw.chance(0.15)) limits.push({ property: 'density', celsius: 15, max: mean('density') * draw.between(0.995, 1.02) });
-  if (draw.chance(0.15)) limits.push({ property: 'sulphur', max: Math.max(50, mean('sulphur') * draw.between(0.6, 1.5)) });
+  if (draw.chance(0.2))
+    limits.push({ property: 'flashPoint', min: Math.round(mean('flashPoint')) - draw.whole(0, 30) });
+  if (draw.chance(0.15))
+    limits.push({ property: 'density', celsius: 15, max: mean('density') * draw.between(0.995, 1.02) });
+  if (draw.chance(0.15))
+    limits.push({ property: 'sulphur', max: Math.max(50, mean('sulphur') * draw.between(0.6, 1.5)) });
   if (shape.rules) addRules(draw, order, mix);
   if (shape.choices) addChoices(draw, order);
   return order;

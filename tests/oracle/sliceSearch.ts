@@ -1,9 +1,9 @@
 import type { Order, Recipe } from '../../src/index';
 import { type Answer, LinearModel } from './linearModel';
 import { type OrderRows, orderRows } from './orderRows';
-import { invert } from './walther';
 import { movingRowCount, type Slice, sliceRows, startingSlices } from './viSlices';
 import { viOf } from './viscosityIndex';
+import { invert } from './walther';
 
 export interface OracleAnswer {
   status: 'solved' | 'impossible' | 'refused' | 'undecided';
@@ -101,7 +101,8 @@ class Search {
     for (let nodes = 0; nodes < MOST_NODES; nodes++) {
       open.sort((a, b) => b.bound - a.bound);
       const node = open[open.length - 1];
-      if (!node || node.bound >= target() - GAP * Math.abs(target())) return { lower: Math.min(this.best, node?.bound ?? Infinity), reach };
+      if (!node || node.bound >= target() - GAP * Math.abs(target()))
+        return { lower: Math.min(this.best, node?.bound ?? Infinity), reach };
       open.pop();
       if (!node.whole) {
         open.push(...this.node(node, true));
@@ -113,7 +114,10 @@ class Search {
         this.doubtful = true;
         continue;
       }
-      open.push(...this.node({ low: node.low, high: middle }, true), ...this.node({ low: middle, high: node.high }, true));
+      open.push(
+        ...this.node({ low: node.low, high: middle }, true),
+        ...this.node({ low: middle, high: node.high }, true),
+      );
     }
     this.doubtful = true;
     return { lower: Math.min(...open.map((node) => node.bound)), reach };
@@ -148,7 +152,9 @@ function viActive(order: OrderRows, x: readonly number[]): boolean {
 
 /** The thickest stock [mm²/s at 100 °C]: no mix is thicker. */
 function thickest({ stocks }: OrderRows): number {
-  const values = stocks.flatMap((s) => s.figures.filter((f) => f.property === 'kv' && f.celsius === 100).map((f) => f.value ?? 0));
+  const values = stocks.flatMap((s) =>
+    s.figures.filter((f) => f.property === 'kv' && f.celsius === 100).map((f) => f.value ?? 0),
+  );
   return Math.max(0, ...values);
 }
 

@@ -34,7 +34,9 @@ export function mixValue(order: Order, parts: readonly Part[], limit: Limit): nu
   let sum = 0;
   for (const { stock, x } of parts) {
     const figure =
-      limit.property === 'pourPoint' ? pour(stock, order.depressant ?? false) : seen(stock, limit.property, limit.celsius);
+      limit.property === 'pourPoint'
+        ? pour(stock, order.depressant ?? false)
+        : seen(stock, limit.property, limit.celsius);
     if (figure === 'as the rest') continue;
     const density = seen(stock, 'density');
     const share = basis === 'mass' ? x : typeof density === 'object' ? x / density.value : Number.NaN;

@@ -21,7 +21,9 @@ export function basicValues(y: number, above = y > 70): BasicValues {
     return { L: 0.8353 * y * y + 14.67 * y - 216, H: 0.1684 * y * y + 11.85 * y - 97 };
   }
   let place = 0;
-  while (place < TABLE_1.length - 2 && TABLE_1[place + 1].y <= y) place++;
+  for (let stride = 256; stride >= 1; stride /= 2) {
+    if (place + stride <= TABLE_1.length - 2 && TABLE_1[place + stride].y <= y) place += stride;
+  }
   const a = TABLE_1[place];
   const b = TABLE_1[place + 1];
   const share = (y - a.y) / (b.y - a.y);

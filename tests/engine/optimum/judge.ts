@@ -29,17 +29,26 @@ function relative(value: number, expected: number): string {
 export function differences({ order, expected }: Case, outcome: BlendOutcome): string[] {
   const { proof, recipe, costPerTonne } = outcome;
   if (expected.status === 'impossible') {
-    const says = outcome.leftOut.some((entry) => entry.reason === 'unknown figure') ? 'impossible with known figures' : 'impossible';
-    return proof.kind === says && !recipe ? [] : [`expected ${says}, got ${proof.kind} (${outcome.stopped}), cost ${costPerTonne}`];
+    const says = outcome.leftOut.some((entry) => entry.reason === 'unknown figure')
+      ? 'impossible with known figures'
+      : 'impossible';
+    return proof.kind === says && !recipe
+      ? []
+      : [`expected ${says}, got ${proof.kind} (${outcome.stopped}), cost ${costPerTonne}`];
   }
   const found: string[] = [];
-  if (!recipe || costPerTonne === undefined) return [`no recipe: ${outcome.stopped}, ${proof.kind}; expected cost ${expected.cost}`];
+  if (!recipe || costPerTonne === undefined)
+    return [`no recipe: ${outcome.stopped}, ${proof.kind}; expected cost ${expected.cost}`];
   const tolerance = COST_TOLERANCE * Math.abs(expected.cost);
-  if (outcome.stopped !== 'finished' || proof.kind !== 'least cost') found.push(`not proven: ${outcome.stopped}, ${proof.kind}`);
-  if (!(Math.abs(costPerTonne - expected.cost) <= tolerance)) found.push(`cost ${relative(costPerTonne, expected.cost)}`);
+  if (outcome.stopped !== 'finished' || proof.kind !== 'least cost')
+    found.push(`not proven: ${outcome.stopped}, ${proof.kind}`);
+  if (!(Math.abs(costPerTonne - expected.cost) <= tolerance))
+    found.push(`cost ${relative(costPerTonne, expected.cost)}`);
   const bound = proof.lowerBound ?? Number.NaN;
-  if (!(bound <= costPerTonne + 1e-9 * Math.abs(costPerTonne))) found.push(`bound above cost: ${relative(bound, costPerTonne)}`);
-  if (!(bound <= expected.cost + 1e-6 * Math.abs(expected.cost))) found.push(`bound too high: ${relative(bound, expected.cost)}`);
+  if (!(bound <= costPerTonne + 1e-9 * Math.abs(costPerTonne)))
+    found.push(`bound above cost: ${relative(bound, costPerTonne)}`);
+  if (!(bound <= expected.cost + 1e-6 * Math.abs(expected.cost)))
+    found.push(`bound too high: ${relative(bound, expected.cost)}`);
   const miss = worstViolation(order, recipe);
   if (!(miss.units <= UNIT_TOLERANCE)) {
     found.push(`misses ${JSON.stringify(miss.limit)} by ${miss.units.toExponential(2)} reporting units: ${miss.value}`);

@@ -13,7 +13,9 @@ test('200 planted orders: the planted cost is found and proven', async () => {
     kinds.set(`${width} ${place}`, (kinds.get(`${width} ${place}`) ?? 0) + 1);
     const recipe = order.stocks.map((stock, i) => ({ stockId: stock.id, massFraction: x[i] }));
     expect(worstViolation(order, recipe).units, `seed ${seed}`).toBeLessThan(1e-6);
-    found.push(...(await disagreements(solveBlend, [{ name: `seed ${seed}`, order, expected: { status: 'solved', cost } }])));
+    found.push(
+      ...(await disagreements(solveBlend, [{ name: `seed ${seed}`, order, expected: { status: 'solved', cost } }])),
+    );
   }
   console.info(`Planted orders by window and place of x*: ${JSON.stringify(Object.fromEntries(kinds))}.`);
   expect(found).toEqual([]);

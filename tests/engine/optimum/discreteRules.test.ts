@@ -1,0 +1,34 @@
+import { expect, test } from 'vitest';
+import { solveBlend } from '../../../src/index';
+import { DISCRETE, randomOrder } from '../../oracle/randomOrder';
+import { sliceSearch } from '../../oracle/sliceSearch';
+import { enumerateSupports } from '../../oracle/supports';
+import { caseOf, disagreements, seeds } from './judge';
+
+test('discrete rules: status and cost as by HiGHS mixed-integer slices', async () => {
+  const found: string[] = [];
+  let solved = 0;
+  for (const seed of seeds(20)) {
+    const order = randomOrder(seed, DISCRETE);
+    const answer = sliceSearch(order);
+    if (answer.status === 'solved') solved++;
+    const entry = caseOf(`seed ${seed}`, order, answer);
+    if (entry) found.push(...(await disagreements(solveBlend, [entry])));
+  }
+  expect(found).toEqual([]);
+  expect(solved).toBeGreaterThan(8);
+});
+
+test('discrete rules: status and cost as by trying every set of stocks', async () => {
+  const found: string[] = [];
+  let solved = 0;
+  for (const seed of seeds(16, 1001)) {
+    const order = randomOrder(seed, { ...DISCRETE, stocks: [4, 6] });
+    const answer = enumerateSupports(order);
+    if (answer.status === 'solved') solved++;
+    const entry = caseOf(`seed ${seed}`, order, answer);
+    if (entry) found.push(...(await disagreements(solveBlend, [entry])));
+  }
+  expect(found).toEqual([]);
+  expect(solved).toBeGreaterThan(5);
+});
