@@ -5,6 +5,14 @@ import { useAnswer } from '../state/answerStore';
 import { shareProblems } from './problemsAt';
 import styles from './rules.module.css';
 import { ShareRuleRow } from './ShareRuleRow';
+import {
+  addUnfinished,
+  changeUnfinished,
+  removeUnfinished,
+  type UnfinishedRule,
+  useUnfinishedRules,
+  whatIsMissing,
+} from './unfinishedRules';
 import { editOrder, useProducts } from './useOrder';
 
 const NEW_RULES: Record<ShareRule['kind'], { label: string; rule: ShareRule }> = {
@@ -15,13 +23,18 @@ const NEW_RULES: Record<ShareRule['kind'], { label: string; rule: ShareRule }> =
   flag: { label: 'flag that every stock carries', rule: { kind: 'flag', flag: '' } },
 };
 
+const NONE: readonly UnfinishedRule[] = [];
+
 /** Rules of the mix beyond its properties. */
 export function ShareRuleList({ order }: { order: WorkbookOrder }) {
   const products = useProducts();
   const answer = useAnswer(order.id);
+  const unfinished = useUnfinishedRules(({ byOrder }) => byOrder[order.id] ?? NONE);
   return (
     <Section title="Shares and other rules" level={3}>
-      {order.shares.length === 0 && <p className={styles.empty}>No rules: any stocks in any shares.</p>}
+      {order.shares.length + unfinished.length === 0 && (
+        <p className={styles.empty}>No rules: any stocks in any shares.</p>
+      )}
       <ul className={styles.list}>
         {order.shares.map((rule, index) => (
           <ShareRuleRow
@@ -30,12 +43,18 @@ export function ShareRuleList({ order }: { order: WorkbookOrder }) {
             rule={rule}
             products={products}
             problems={shareProblems(answer, index, rule.kind)}
-            onChange={(next) =>
-              editOrder(order.id, 'change a rule', ({ shares }) => {
-                shares[index] = next;
-              })
-            }
-            onRemove={() => editOrder(order.id, 'remove a rule', ({ shares }) => shares.splice(index, 1))}
+            onChange={(next) => changeRule(order.id, index, next)}
+            onRemove={() => takeOut(order.id, index)}
+          />
+        ))}
+        {unfinished.map(({ key, rule }) => (
+          <ShareRuleRow
+            key={`unfinished ${key}`}
+            rule={rule}
+            products={products}
+            problems={[whatIsMissing(rule) ?? '']}
+            onChange={(next) => changeWaiting(order.id, key, next)}
+            onRemove={() => removeUnfinished(order.id, key)}
           />
         ))}
       </ul>
@@ -45,12 +64,37 @@ export function ShareRuleList({ order }: { order: WorkbookOrder }) {
           hideLabel
           value=""
           placeholder="Add a rule on …"
+          // The keys of the table above are the kinds of rule.
           options={Object.entries(NEW_RULES).map(([kind, { label }]) => ({ value: kind as ShareRule['kind'], label }))}
-          onChange={(kind) =>
-            editOrder(order.id, 'add a rule', ({ shares }) => shares.push(structuredClone(NEW_RULES[kind].rule)))
-          }
+          onChange={(kind) => addUnfinished(order.id, NEW_RULES[kind].rule)}
         />
       </div>
     </Section>
   );
+}
+
+function takeOut(orderId: string, index: number): void {
+  editOrder(orderId, 'remove a rule', ({ shares }) => shares.splice(index, 1));
+}
+
+/** Changes a rule of the order; one that no longer says enough waits outside it. */
+function changeRule(orderId: string, index: number, next: ShareRule): void {
+  if (whatIsMissing(next)) {
+    takeOut(orderId, index);
+    addUnfinished(orderId, next);
+    return;
+  }
+  editOrder(orderId, 'change a rule', ({ shares }) => {
+    shares[index] = next;
+  });
+}
+
+/** Changes a waiting rule; a whole one enters the order. */
+function changeWaiting(orderId: string, key: number, next: ShareRule): void {
+  if (whatIsMissing(next)) {
+    changeUnfinished(orderId, key, next);
+    return;
+  }
+  removeUnfinished(orderId, key);
+  editOrder(orderId, 'add a rule', ({ shares }) => shares.push(next));
 }

@@ -1,7 +1,6 @@
 import type { Product, ShareRule } from '../../src';
 import { RuleRow } from './RuleRow';
 import { CountRule, ExcludesRule, FlagRule, RatioRule, ShareOfSetRule } from './ruleFields';
-import { isEmptySet } from './StockSetField';
 
 export interface RuleFieldsProps<Kind extends ShareRule['kind']> {
   rule: Extract<ShareRule, { kind: Kind }>;
@@ -23,9 +22,8 @@ export function ShareRuleRow({
   onChange(rule: ShareRule): void;
   onRemove(): void;
 }) {
-  const unfinished = whatIsMissing(rule);
   return (
-    <RuleRow problems={unfinished ? [unfinished] : problems} removeLabel="Remove this rule" onRemove={onRemove}>
+    <RuleRow problems={problems} removeLabel="Remove this rule" onRemove={onRemove}>
       {fieldsOf(rule, products, onChange)}
     </RuleRow>
   );
@@ -45,16 +43,4 @@ function fieldsOf(rule: ShareRule, products: readonly Product[], onChange: (rule
     case 'flag':
       return <FlagRule rule={rule} {...shared} />;
   }
-}
-
-function whatIsMissing(rule: ShareRule): string | undefined {
-  if (rule.kind === 'flag') return rule.flag ? undefined : 'Choose the flag; until then the rule asks for nothing.';
-  if (rule.kind === 'excludes' && !rule.stockId) return 'Choose the stock; until then the rule asks for nothing.';
-  if (isEmptySet(rule.set) || (rule.kind === 'ratio' && isEmptySet(rule.to))) {
-    return 'Choose the stocks; until then the rule asks for nothing.';
-  }
-  if (rule.kind !== 'excludes' && rule.min === undefined && rule.max === undefined) {
-    return 'Give a least or a most; until then the rule asks for nothing.';
-  }
-  return undefined;
 }
