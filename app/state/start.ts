@@ -1,6 +1,6 @@
 import type { Workbook } from '../../src';
 import { demoWorkbook } from '../demo/demoWorkbook';
-import { createSaver, type Saver } from '../storage/saver';
+import { createSaver } from '../storage/saver';
 import { loadView, saveView } from '../storage/viewStorage';
 import { openWorkbookStorage, type WorkbookStorage } from '../storage/workbookStorage';
 import { unguarded, webLock } from '../storage/writerLock';
@@ -51,37 +51,72 @@ function keepOrderInSight(): void {
   if (!orders.some(({ id }) => id === orderId)) selectOrder(orders[0]?.id);
 }
 
-function keepSaved(storage: WorkbookStorage): Saver {
+/** Saves every change from now on. Returns the function that ends it. */
+function keepSaved(storage: WorkbookStorage): () => void {
   const { locks, onLeaving } = environment();
-  const saver = createSaver({ storage, lock: locks ? webLock(locks) : unguarded(), report: setSave });
-  useWorkbook.subscribe(({ workbook }, before) => {
+  const lock = locks ? webLock(locks) : unguarded();
+  const saver = createSaver({ storage, lock, report: setSave });
+  const end = useWorkbook.subscribe(({ workbook }, before) => {
     if (workbook !== before.workbook) saver.schedule(workbook);
   });
   onLeaving(() => void saver.flush());
-  return saver;
+  saver.schedule(useWorkbook.getState().workbook);
+  return () => {
+    end();
+    void saver.flush().finally(() => {
+      lock.release();
+      storage.close();
+    });
+  };
 }
 
-function solveInWorkers(): SolverClient {
-  return createSolverClient({ createWorker });
+function sayNotSaved(): () => void {
+  setSave({ state: 'unavailable', message: NO_STORAGE });
+  return () => {};
 }
 
-/** Opens storage, puts the last workbook (or the demo) on the page, and wires saving and solving. */
-export async function startApp(createSolver: () => SolverClient = solveInWorkers): Promise<void> {
-  const { localStorage, afterFirstPaint } = environment();
+/** Solves once something is on screen. Returns the function that ends it. */
+function keepSolved(createSolver: () => SolverClient): () => void {
+  let end = () => {};
+  let ended = false;
+  environment().afterFirstPaint(() => {
+    if (!ended) end = startSolving(createSolver());
+  });
+  return () => {
+    ended = true;
+    end();
+  };
+}
+
+const solveInWorkers = (): SolverClient => createSolverClient({ createWorker });
+
+/** The last workbook; the demo, with a word, where storage opens but does not answer. */
+async function workbookToOpen(storage: WorkbookStorage | undefined): Promise<Workbook> {
+  try {
+    return await lastWorkbook(storage);
+  } catch {
+    announce('The workbook kept in this browser could not be reached; the demo is open. Reload the page to try again.');
+    return freshDemo();
+  }
+}
+
+/**
+ * Opens storage, puts the last workbook (or the demo) on the page, and keeps it saved and solved from then on.
+ * Resolves to the function that ends all of it.
+ */
+export async function startApp(createSolver: () => SolverClient = solveInWorkers): Promise<() => void> {
+  const { localStorage } = environment();
   useView.setState(loadView(localStorage));
   const storage = await openStorage();
-  let workbook: Workbook;
-  try {
-    workbook = await lastWorkbook(storage);
-  } catch {
-    workbook = freshDemo();
-    announce('The workbook kept in this browser could not be reached; the demo is open. Reload the page to try again.');
-  }
-  openWorkbook(workbook);
+  openWorkbook(await workbookToOpen(storage));
   keepOrderInSight();
-  useWorkbook.subscribe(keepOrderInSight);
-  useView.subscribe((view) => saveView(localStorage, view));
-  if (storage) keepSaved(storage).schedule(workbook);
-  else setSave({ state: 'unavailable', message: NO_STORAGE });
-  afterFirstPaint(() => void startSolving(createSolver()));
+  const ends = [
+    useWorkbook.subscribe(keepOrderInSight),
+    useView.subscribe((view) => saveView(localStorage, view)),
+    storage ? keepSaved(storage) : sayNotSaved(),
+    keepSolved(createSolver),
+  ];
+  return () => {
+    for (const end of ends) end();
+  };
 }

@@ -1,0 +1,150 @@
+import { IDBFactory } from 'fake-indexeddb';
+import { afterEach, beforeEach, describe, expect, test, vi } from 'vitest';
+import { demoWorkbook } from '../../../app/demo/demoWorkbook';
+import { answerOf } from '../../../app/state/answerStore';
+import { COMMANDS } from '../../../app/state/commands';
+import type { Environment } from '../../../app/state/environment';
+import { useSave } from '../../../app/state/saveStore';
+import { NO_STORAGE, startApp } from '../../../app/state/start';
+import { selectOrder, setTheme, useView } from '../../../app/state/viewStore';
+import { editWorkbook, undo, useWorkbook } from '../../../app/state/workbookStore';
+import { openDatabase } from '../../../app/storage/database';
+import { createSolverClient } from '../../../app/worker/solverClient';
+import { emptyWorkbook, serialiseWorkbook } from '../../../src';
+import { FakeWorkers } from '../worker/fakeWorker';
+import { resetStores, testEnvironment } from './testEnvironment';
+
+let factory: IDBFactory;
+let workers: FakeWorkers;
+let end: () => void = () => {};
+
+const workbook = () => useWorkbook.getState().workbook;
+const saved = () => vi.waitFor(() => expect(useSave.getState().state).toBe('saved'));
+
+/** Opens the page anew in the same browser. */
+async function open(surroundings: Partial<Environment> = {}) {
+  end();
+  resetStores();
+  workers = new FakeWorkers();
+  const made = testEnvironment({ indexedDB: factory, localStorage, ...surroundings });
+  end = await startApp(() => createSolverClient({ createWorker: workers.create }));
+  return made;
+}
+
+beforeEach(() => {
+  factory = new IDBFactory();
+  localStorage.clear();
+});
+
+afterEach(() => {
+  end();
+  end = () => {};
+});
+
+describe('the first start', () => {
+  test('opens the demo with its first order on screen, solves and saves it', async () => {
+    await open();
+    expect(workbook()).toEqual(demoWorkbook('id-1'));
+    expect(useView.getState().orderId).toBe('vg-46-hydraulic');
+    expect(workers.last.asked).toHaveLength(1);
+    workers.last.answer(913);
+    expect(answerOf('vg-46-hydraulic').phase).toBe('answered');
+    await saved();
+  });
+
+  test('asks for no worker before something is on screen', async () => {
+    let paint = () => {};
+    await open({
+      afterFirstPaint: (callback) => {
+        paint = callback;
+      },
+    });
+    expect(workers.made).toHaveLength(0);
+    paint();
+    expect(workers.made).toHaveLength(1);
+  });
+});
+
+describe('the next start', () => {
+  test('brings back the workbook, the order on screen and the theme', async () => {
+    const first = await open();
+    editWorkbook('name', (draft) => {
+      draft.name = 'My plant';
+    });
+    selectOrder('multigrade-base');
+    setTheme('dark');
+    first.leave();
+    await saved();
+    await open();
+    expect(workbook().name).toBe('My plant');
+    expect(useView.getState()).toMatchObject({ orderId: 'multigrade-base', theme: 'dark' });
+    expect(useWorkbook.getState().canUndo).toBe(false);
+  });
+
+  test('an order that is no longer there gives way to the first', async () => {
+    localStorage.setItem('basewright.view', '{"orderId": "gone"}');
+    await open();
+    expect(useView.getState().orderId).toBe('vg-46-hydraulic');
+  });
+
+  test('brings back an empty workbook too, not the demo', async () => {
+    const first = await open();
+    COMMANDS.newEmptyWorkbook.run();
+    first.leave();
+    await saved();
+    await open();
+    expect(workbook()).toMatchObject({ name: 'New workbook', products: [], orders: [] });
+    expect(useView.getState().orderId).toBeUndefined();
+  });
+});
+
+test('undoing a new order puts another on screen', async () => {
+  await open();
+  COMMANDS.newOrder.run();
+  undo();
+  expect(useView.getState().orderId).toBe('vg-46-hydraulic');
+});
+
+describe('trouble with storage', () => {
+  test('a kept workbook that cannot be read is set aside, the demo opens, and both are said', async () => {
+    const database = await openDatabase(factory);
+    const text = serialiseWorkbook(emptyWorkbook('w', 'W')).replace('"EUR"', '7');
+    await database.put('workbooks', { id: 'w', name: 'W', text, savedAt: '2026-03-01' });
+    await database.put('meta', 'w', 'current');
+    database.close();
+    const surroundings = await open();
+    expect(workbook().invented).toBe(true);
+    await saved();
+    expect(useSave.getState().message).toMatch(
+      /could not be read\. It is set aside .* settings\.currency must be a text; it is 7\./,
+    );
+    COMMANDS.exportSetAside.run();
+    expect(surroundings.downloads[0]?.text).toBe(text);
+    // At the next start it is no news any more, but still to be had.
+    await open();
+    await saved();
+    expect(useSave.getState().message).toBeUndefined();
+    expect(COMMANDS.exportSetAside.enabled()).toBe(true);
+  });
+
+  test.each([
+    ['not there', undefined],
+    [
+      'refused',
+      {
+        open: () => {
+          throw new DOMException('refused', 'SecurityError');
+        },
+      } as unknown as IDBFactory,
+    ],
+  ])('storage %s: the demo opens, and nothing is said to be saved', async (_name, indexedDB) => {
+    await open({ indexedDB });
+    expect(workbook().invented).toBe(true);
+    expect(useSave.getState()).toMatchObject({ state: 'unavailable', message: NO_STORAGE });
+    editWorkbook('name', (draft) => {
+      draft.name = 'New';
+    });
+    expect(useSave.getState().state).toBe('unavailable');
+    expect(workers.last.asked.length).toBeGreaterThan(0);
+  });
+});

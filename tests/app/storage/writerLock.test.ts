@@ -1,0 +1,35 @@
+import { expect, test } from 'vitest';
+import { unguarded, webLock } from '../../../app/storage/writerLock';
+import { fakeLocks } from './fakeLocks';
+
+test('one page writes a workbook, the other may not, until the first lets go', async () => {
+  const locks = fakeLocks();
+  const [first, second] = [webLock(locks), webLock(locks)];
+  expect(await first.hold('a')).toBe(true);
+  expect(first.held()).toBe('a');
+  expect(await second.hold('a')).toBe(false);
+  expect(second.held()).toBeUndefined();
+  first.release();
+  await Promise.resolve();
+  await Promise.resolve();
+  expect(await second.hold('a')).toBe(true);
+});
+
+test('another workbook is another lock; going over to it frees the former', async () => {
+  const locks = fakeLocks();
+  const [first, second] = [webLock(locks), webLock(locks)];
+  await first.hold('a');
+  expect(await second.hold('b')).toBe(true);
+  expect(await first.hold('c')).toBe(true);
+  expect(await second.hold('a')).toBe(true);
+  expect(await first.hold('a')).toBe(false);
+});
+
+test('holding twice is holding once', async () => {
+  const lock = webLock(fakeLocks());
+  expect([await lock.hold('a'), await lock.hold('a')]).toEqual([true, true]);
+});
+
+test('without Web Locks every page writes', async () => {
+  expect(await unguarded().hold('a')).toBe(true);
+});
