@@ -6,7 +6,7 @@ import { CONTINUOUS, DISCRETE, randomOrder, randomStock } from '../../oracle/ran
 
 /** Twice the relative gap at which a search may stop, and a little for limits met to a millionth of a unit. */
 const GAP = 4e-6;
-const RUNS = Math.round(24 * Number(process.env.BASEWRIGHT_SEEDS ?? 1));
+const RUNS = Math.round(60 * Number(process.env.BASEWRIGHT_SEEDS ?? 1));
 
 const orders = fc
   .record({ seed: fc.integer({ min: 1, max: 1_000_000 }), choices: fc.boolean() })
