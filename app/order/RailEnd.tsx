@@ -66,7 +66,7 @@ export function RailEnd({
       aria-orientation="horizontal"
       {...handlers}
     >
-      <rect className={styles.target} x={end === 'min' ? at - 22 : at - 4} y={4} width={26} height={40} />
+      <rect className={styles.target} x={end === 'min' ? at - 30 : at - 6} y={4} width={36} height={44} />
       <line className={styles.edge} x1={at} x2={at} y1={RAIL.trackTop - 1} y2={RAIL.trackBottom + 1} />
       <rect
         className={styles.grip}

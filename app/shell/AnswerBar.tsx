@@ -12,7 +12,8 @@ export function AnswerBar({ orderId }: { orderId: string | undefined }) {
   if (!order) return null;
   const short = answerInWords(answer, order, currency);
   return (
-    <a href="#answer" className={classNames(styles.bar, short.stale && styles.stale)} aria-label="To the answer">
+    <a href="#answer" className={classNames(styles.bar, short.stale && styles.stale)}>
+      <span className="visually-hidden">To the answer:</span>
       <span className={classNames(styles.text, styles[short.tone])}>{short.text}</span>
       <span className={styles.remark}>{short.stale ? 'being worked out again' : short.remark}</span>
     </a>
