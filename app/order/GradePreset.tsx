@@ -1,5 +1,5 @@
 import { useState } from 'react';
-import { GRADES, type Grade, type Limit, propertyDefinition, type WorkbookOrder } from '../../src';
+import { GRADES, type Grade, propertyDefinition, type WorkbookOrder } from '../../src';
 import { IconButton } from '../parts/IconButton';
 import { Notice } from '../parts/Notice';
 import { Select } from '../parts/Select';
@@ -16,7 +16,7 @@ export function GradePreset({ order }: { order: WorkbookOrder }) {
   function setFrom(id: string) {
     const grade = GRADES.find((candidate) => candidate.id === id);
     if (!grade) return;
-    editOrder(order.id, `set limits from ${gradeName(grade)}`, ({ limits }) => applyGrade(limits, grade));
+    editOrder(order.id, `set limits from ${grade.id}`, (draft) => applyGrade(draft, grade));
     const words = gradeInWords(grade);
     setSaid(words);
     announce(words);
@@ -42,33 +42,30 @@ export function GradePreset({ order }: { order: WorkbookOrder }) {
   );
 }
 
-/** Puts the grade's limits in place of those on the same property, or after the others. */
-export function applyGrade(limits: Limit[], grade: Grade): void {
+/** Puts the grade's limits in place of those on the same property, or after the others; lists what only tests show. */
+export function applyGrade(order: WorkbookOrder, grade: Grade): void {
   for (const limit of grade.limits) {
-    const place = limits.findIndex((existing) => isSameProperty(existing, limit));
-    if (place >= 0) limits[place] = { ...limit };
-    else limits.push({ ...limit });
+    const place = order.limits.findIndex((existing) => isSameProperty(existing, limit));
+    if (place >= 0) order.limits[place] = { ...limit };
+    else order.limits.push({ ...limit });
   }
+  order.laboratoryOnly.push(...grade.laboratoryOnly.filter((test) => !order.laboratoryOnly.includes(test)));
 }
 
-/** "ISO VG 46 set: Kinematic viscosity at 40 °C, 41.4 to 50.6 mm²/s." */
-function gradeInWords(grade: Grade): string {
-  const limits = grade.limits.flatMap((limit) => {
+/** "ISO VG 46 set: Kinematic viscosity at 40 °C 41.40 to 50.60 mm²/s. ISO 3448; check the current edition." */
+function gradeInWords({ id, limits, laboratoryOnly, note }: Grade): string {
+  const set = limits.flatMap((limit) => {
     const definition = propertyDefinition(limit.property);
     return definition ? [`${limitName(limit)} ${rangeInWords(limit, definition)}`] : [];
   });
-  const note = grade.note ? ` ${grade.note}` : '';
-  return `${gradeName(grade)} set: ${limits.join('; ')}.${note}`;
-}
-
-function gradeName({ system, name }: Grade): string {
-  return name.startsWith(system) ? name : `${system} ${name}`;
+  const tests = laboratoryOnly.length ? ` For the laboratory: ${laboratoryOnly.join('; ')}.` : '';
+  return `${id} set: ${set.join('; ')}.${tests} ${note}`;
 }
 
 function gradeGroups() {
   const systems = [...new Set(GRADES.map(({ system }) => system))];
   return systems.map((system) => ({
     label: system,
-    options: GRADES.filter((grade) => grade.system === system).map(({ id, name }) => ({ value: id, label: name })),
+    options: GRADES.filter((grade) => grade.system === system).map(({ id }) => ({ value: id, label: id })),
   }));
 }

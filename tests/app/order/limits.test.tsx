@@ -182,4 +182,15 @@ describe('limits from a grade', () => {
     ]);
     expect(screen.getByText(/Kinematic viscosity at 40 °C 41.40 to 50.60 mm²\/s/)).toBeVisible();
   });
+
+  it('keeps a strict end strict, and lists what only the laboratory can show', async () => {
+    const user = setUp([{ property: 'kv', celsius: 100, min: 1 }]);
+    await user.selectOptions(screen.getByRole('combobox', { name: 'Set limits from a grade' }), 'SAE J306 90');
+    // SAE J306: grade 90 is 13.5 to below 18.5 mm²/s at 100 °C, and stays in grade after the 20 h shear test.
+    expect(orderOnPage().limits).toEqual([{ property: 'kv', celsius: 100, min: 13.5, below: 18.5 }]);
+    expect(orderOnPage().laboratoryOnly.join()).toMatch(/L-45/);
+    act(undo);
+    expect(orderOnPage().limits).toEqual([{ property: 'kv', celsius: 100, min: 1 }]);
+    expect(orderOnPage().laboratoryOnly).toEqual([]);
+  });
 });
