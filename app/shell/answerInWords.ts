@@ -24,7 +24,7 @@ export function answerInWords(answer: Answer, order: WorkbookOrder, currency: st
     if (phase === 'failed') return say('needs attention', 'no answer', 'bad');
     return phase === 'solving' ? say('working …', '', 'plain') : say('not worked out yet', '', 'plain');
   }
-  if (outcome.stopped === 'refused') return say('needs attention', 'see the order', 'warn');
+  if (outcome.stopped === 'refused') return say('needs attention', 'cannot be worked out', 'warn');
   if (outcome.stopped === 'engine failed') return say('needs attention', 'the search failed', 'bad');
   const { kind } = outcome.proof;
   if (kind === 'impossible') return say('impossible', 'proven', 'bad');
