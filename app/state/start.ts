@@ -60,7 +60,10 @@ function keepSaved(storage: WorkbookStorage): () => void {
     if (workbook !== before.workbook) saver.schedule(workbook);
   });
   onLeaving(() => void saver.flush());
-  saver.schedule(useWorkbook.getState().workbook);
+  const { workbook } = useWorkbook.getState();
+  saver.schedule(workbook);
+  // Asked for early: a save that must wait for the lock may come too late on a page that is being left.
+  void lock.hold(workbook.id).catch(() => {});
   return () => {
     end();
     void saver.flush().finally(() => {

@@ -1,5 +1,6 @@
 import type { Workbook } from '../../src';
 import type { SaveState } from '../state/saveStore';
+import { saveProblem } from './storageTrouble';
 import type { WorkbookStorage } from './workbookStorage';
 import type { WriterLock } from './writerLock';
 
@@ -19,48 +20,40 @@ export interface Saver {
 }
 
 const DELAY_MS = 400;
-const EXPORT = 'Export the workbook to a file to keep it.';
 
 export const OTHER_TAB =
   'This workbook is open in another tab, which saves it. Changes here are not saved: go on in that tab, or close it and ' +
   'reload this one. Export the workbook to keep what you changed here.';
 
-/** What a failed save means for the user. */
-export function saveProblem(error: unknown): string {
-  const name = error instanceof Error || error instanceof DOMException ? error.name : '';
-  if (name === 'QuotaExceededError') return `The browser's storage is full, so the last change is not saved. ${EXPORT}`;
-  const reason = error instanceof Error && error.message ? ` (${error.message})` : '';
-  return `The last change could not be saved${reason}. ${EXPORT}`;
-}
-
-/** Saves the workbook after each change, one save at a time, and says how that goes. */
+/**
+ * Saves the workbook after each change, and says how that goes. Saves keep their order: the database takes them one
+ * after another, and none waits for anything of ours where the lock is held.
+ */
 export function createSaver({ storage, lock, report, delayMs = DELAY_MS }: SaverOptions): Saver {
   let waiting: Workbook | undefined;
   let timer: ReturnType<typeof setTimeout> | undefined;
-  let writing = false;
+  let writing = 0;
 
-  async function write(workbook: Workbook): Promise<void> {
+  async function write(workbook: Workbook): Promise<SaveState> {
     try {
-      // Where the lock is held there is no wait before the write: a page being left gets no second turn.
       const mayWrite = lock.held() === workbook.id || (await lock.hold(workbook.id));
-      if (!mayWrite) return report({ state: 'unavailable', message: OTHER_TAB });
+      if (!mayWrite) return { state: 'unavailable', message: OTHER_TAB };
       await storage.save(workbook);
-      if (!waiting) report({ state: 'saved' });
+      return { state: 'saved' };
     } catch (error) {
-      report({ state: 'failed', message: saveProblem(error) });
+      return { state: 'failed', message: saveProblem(error) };
     }
   }
 
   async function flush(): Promise<void> {
     clearTimeout(timer);
-    if (writing || !waiting) return;
-    writing = true;
-    while (waiting) {
-      const workbook: Workbook = waiting;
-      waiting = undefined;
-      await write(workbook);
-    }
-    writing = false;
+    if (!waiting) return;
+    const workbook = waiting;
+    waiting = undefined;
+    writing += 1;
+    const result = await write(workbook);
+    writing -= 1;
+    if (result.state !== 'saved' || (!waiting && writing === 0)) report(result);
   }
 
   return {

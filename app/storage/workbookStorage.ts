@@ -1,5 +1,6 @@
 import { type Restored, restoreWorkbook, serialiseWorkbook, type Workbook } from '../../src';
-import { type Database, openDatabase, type SetAside, type StoredVersion } from './database';
+import { type Database, openDatabase, type SetAside, type StoredVersion, type StoredWorkbook } from './database';
+import { isFull } from './storageTrouble';
 import { placeInHistory } from './versions';
 
 /** What was found in storage at the start. */
@@ -29,13 +30,26 @@ function readableText(workbook: Workbook): string {
   return text;
 }
 
+/** Put and committed without waiting for anything: a page that is being left gets no second turn. */
+async function putCurrent(database: Database, stored: StoredWorkbook): Promise<void> {
+  const transaction = database.transaction(['workbooks', 'meta'], 'readwrite');
+  const puts = [
+    transaction.objectStore('workbooks').put(stored),
+    transaction.objectStore('meta').put(stored.id, CURRENT),
+  ];
+  transaction.commit();
+  await Promise.all([...puts, transaction.done]);
+}
+
 async function putVersion(database: Database, version: StoredVersion): Promise<void> {
   const transaction = database.transaction('versions', 'readwrite');
   const kept = await transaction.store.index('workbookId').getAll(version.workbookId);
   const { remove, add } = placeInHistory(kept, version);
-  for (const key of remove) await transaction.store.delete(key);
-  if (add) await transaction.store.add(version);
-  await transaction.done;
+  await Promise.all([
+    ...remove.map((key) => transaction.store.delete(key)),
+    ...(add ? [transaction.store.add(version)] : []),
+    transaction.done,
+  ]);
 }
 
 async function setAsideCurrent(
@@ -68,17 +82,18 @@ export async function openWorkbookStorage(factory: IDBFactory, now: () => string
       return { kind: 'set aside', setAside: await setAsideCurrent(database, stored.id, text, restored.message, now()) };
     },
     async save(workbook) {
-      const text = readableText(workbook);
-      const savedAt = now();
-      const { id, name } = workbook;
-      const transaction = database.transaction(['workbooks', 'meta'], 'readwrite');
-      // Put without waiting for anything first: a page that is being left gets no second turn.
-      await Promise.all([
-        transaction.objectStore('workbooks').put({ id, name, text, savedAt }),
-        transaction.objectStore('meta').put(id, CURRENT),
-        transaction.done,
-      ]);
-      await putVersion(database, { workbookId: id, text, savedAt });
+      const stored = { id: workbook.id, name: workbook.name, text: readableText(workbook), savedAt: now() };
+      try {
+        await putCurrent(database, stored);
+      } catch (error) {
+        if (!isFull(error)) throw error;
+        // Earlier states give way to the present one.
+        await database.clear('versions');
+        await putCurrent(database, stored);
+      }
+      const { text, savedAt } = stored;
+      // The workbook itself is safe by now; an earlier state that finds no room is no reason to say otherwise.
+      await putVersion(database, { workbookId: stored.id, text, savedAt }).catch(() => {});
     },
     async versions(workbookId) {
       const kept = await database.getAllFromIndex('versions', 'workbookId', workbookId);

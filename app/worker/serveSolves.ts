@@ -14,7 +14,12 @@ export interface WorkerSurroundings {
   pause(): Promise<void>;
 }
 
-const inWords = (error: unknown) => (error instanceof Error ? error.message : String(error));
+/** An error in a few words. What the wasm loader adds for its own developers means nothing here. */
+function inWords(error: unknown): string {
+  const message = error instanceof Error ? error.message : String(error);
+  const own = /^Aborted\((.*)\)\. Build with .*$/.exec(message)?.[1] ?? message;
+  return own.replace(/\.$/, '');
+}
 
 /**
  * The worker's side of the conversation: one solve at a time, a newer request supersedes the one that runs, a cancel

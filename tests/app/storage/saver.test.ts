@@ -60,27 +60,34 @@ describe('saving', () => {
     expect(started).toBe(true);
   });
 
-  test('goes one at a time; what changed meanwhile is saved after it', async () => {
-    let release = () => {};
-    const { saver, saved, reports } = setUp(
-      () =>
-        new Promise((resolve) => {
-          release = resolve;
-        }),
-    );
+  test('is said to be done only when the last change is in', async () => {
+    const releases: (() => void)[] = [];
+    const { saver, saved, reports } = setUp(() => new Promise((resolve) => void releases.push(resolve)));
     saver.schedule(named('a'));
     await vi.advanceTimersByTimeAsync(400);
     saver.schedule(named('b'));
+    releases[0]?.();
+    await vi.advanceTimersByTimeAsync(0);
+    expect([saved, reports.at(-1)]).toEqual([['a'], 'saving']);
     await vi.advanceTimersByTimeAsync(400);
-    expect(saved).toEqual([]);
-    release();
+    releases[1]?.();
     await vi.advanceTimersByTimeAsync(0);
-    expect(saved).toEqual(['a']);
-    expect(reports.at(-1)).toBe('saving');
-    release();
-    await vi.advanceTimersByTimeAsync(0);
-    expect(saved).toEqual(['a', 'b']);
-    expect(reports.at(-1)).toBe('saved');
+    expect([saved, reports.at(-1)]).toEqual([['a', 'b'], 'saved']);
+  });
+
+  test('of a page being left does not wait for a save that is still under way', async () => {
+    const lock = unguarded();
+    await lock.hold('w');
+    let started = 0;
+    const { saver } = setUp(() => {
+      started += 1;
+      return new Promise(() => {});
+    }, lock);
+    saver.schedule(named('a'));
+    await vi.advanceTimersByTimeAsync(400);
+    saver.schedule(named('b'));
+    void saver.flush();
+    expect(started).toBe(2);
   });
 });
 
@@ -92,7 +99,7 @@ describe('trouble', () => {
     ],
     [
       new Error('The database connection is closing.'),
-      'failed: The last change could not be saved (The database connection is closing.). Export the workbook to a file to keep it.',
+      'failed: The last change could not be saved (The database connection is closing). Export the workbook to a file to keep it.',
     ],
     ['odd', 'failed: The last change could not be saved. Export the workbook to a file to keep it.'],
   ])('%s is said, with the way out', async (error, report) => {
@@ -121,7 +128,9 @@ describe('trouble', () => {
     await webLock(locks).hold('w');
     const { saver, saved, reports } = setUp(async () => {}, webLock(locks));
     saver.schedule(named('a'));
-    await vi.advanceTimersByTimeAsync(400);
+    // The browser's own clock counts the patience for the lock.
+    vi.useRealTimers();
+    await saver.flush();
     expect(saved).toEqual([]);
     expect(reports.at(-1)).toBe(`unavailable: ${OTHER_TAB}`);
     expect(OTHER_TAB).toMatch(/Export the workbook/);

@@ -1,5 +1,5 @@
 import { IDBFactory } from 'fake-indexeddb';
-import { beforeEach, describe, expect, test } from 'vitest';
+import { afterEach, beforeEach, describe, expect, test, vi } from 'vitest';
 import { demoWorkbook } from '../../../app/demo/demoWorkbook';
 import { openDatabase } from '../../../app/storage/database';
 import { openWorkbookStorage } from '../../../app/storage/workbookStorage';
@@ -89,6 +89,43 @@ describe('a kept workbook that cannot be read', () => {
       expect(await storage.setAside()).toHaveLength(1);
     },
   );
+});
+
+describe('a full browser', () => {
+  const full = () => new DOMException('no room', 'QuotaExceededError');
+  afterEach(() => vi.restoreAllMocks());
+
+  test('makes room: earlier states give way to the present one', async () => {
+    const storage = await open();
+    await storage.save(emptyWorkbook('a', 'one'));
+    await storage.save(emptyWorkbook('a', 'two'));
+    vi.spyOn(IDBObjectStore.prototype, 'put').mockImplementationOnce(() => {
+      throw full();
+    });
+    await storage.save(emptyWorkbook('a', 'three'));
+    expect(await storage.loadCurrent()).toMatchObject({ workbook: { name: 'three' } });
+    expect(await storage.versions('a')).toHaveLength(1);
+  });
+
+  test('that stays full fails the save, and what was kept before stays', async () => {
+    const storage = await open();
+    await storage.save(emptyWorkbook('a', 'one'));
+    const put = vi.spyOn(IDBObjectStore.prototype, 'put').mockImplementation(() => {
+      throw full();
+    });
+    await expect(storage.save(emptyWorkbook('a', 'two'))).rejects.toThrow('no room');
+    put.mockRestore();
+    expect(await storage.loadCurrent()).toMatchObject({ workbook: { name: 'one' } });
+  });
+
+  test('with room for the workbook but not for an earlier state keeps the workbook', async () => {
+    const storage = await open();
+    vi.spyOn(IDBObjectStore.prototype, 'add').mockImplementation(() => {
+      throw full();
+    });
+    await storage.save(emptyWorkbook('a', 'one'));
+    expect(await storage.loadCurrent()).toMatchObject({ workbook: { name: 'one' } });
+  });
 });
 
 describe('a browser that refuses', () => {

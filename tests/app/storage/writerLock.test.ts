@@ -10,8 +10,6 @@ test('one page writes a workbook, the other may not, until the first lets go', a
   expect(await second.hold('a')).toBe(false);
   expect(second.held()).toBeUndefined();
   first.release();
-  await Promise.resolve();
-  await Promise.resolve();
   expect(await second.hold('a')).toBe(true);
 });
 
@@ -23,6 +21,20 @@ test('another workbook is another lock; going over to it frees the former', asyn
   expect(await first.hold('c')).toBe(true);
   expect(await second.hold('a')).toBe(true);
   expect(await first.hold('a')).toBe(false);
+});
+
+test('a page that asks while the former is still letting go gets the lock', async () => {
+  const locks = fakeLocks();
+  const [leaving, reloaded] = [webLock(locks), webLock(locks)];
+  await leaving.hold('a');
+  const answer = reloaded.hold('a');
+  leaving.release();
+  expect(await answer).toBe(true);
+});
+
+test('asking twice at once is asking once', async () => {
+  const lock = webLock(fakeLocks());
+  expect(await Promise.all([lock.hold('a'), lock.hold('a')])).toEqual([true, true]);
 });
 
 test('holding twice is holding once', async () => {
