@@ -1,3 +1,4 @@
+import { useState } from 'react';
 import {
   type Limit,
   type OwnProperty,
@@ -7,14 +8,18 @@ import {
   type WorkbookOrder,
 } from '../../src';
 import { Select, type SelectOption } from '../parts/Select';
-import { useWorkbook } from '../state/workbookStore';
+import { editWorkbook, useWorkbook } from '../state/workbookStore';
 import styles from './LimitList.module.css';
 import { isSameProperty } from './limitEnds';
 import { limitName, shortLimitName } from './limitWords';
+import { OwnPropertyDialog } from './OwnPropertyDialog';
 import { editOrder } from './useOrder';
 
 /** Where a viscosity at a temperature of one's own starts; it is then changed in the row. */
 const ANOTHER_TEMPERATURE = 20;
+
+/** The choice that asks for a property first. */
+const OF_ONES_OWN = 'a property of one’s own';
 
 /** Adds an empty limit on a property; its ends are then typed. */
 export function AddLimit({ order, onAdded }: { order: WorkbookOrder; onAdded(limit: Limit): void }) {
@@ -26,18 +31,31 @@ export function AddLimit({ order, onAdded }: { order: WorkbookOrder; onAdded(lim
     value: keyOf(limit),
     label: limitName(limit, ownProperties),
   });
+  const [asking, setAsking] = useState(false);
   const groups = ['Viscosity', 'Other properties', 'Own properties'].map((label) => ({
     label,
     options: choices.filter(({ group }) => group === label).map(option),
   }));
 
   function add(key: string) {
+    if (key === OF_ONES_OWN) return setAsking(true);
     const choice = choices.find(({ limit }) => keyOf(limit) === key);
     if (!choice) return;
     const { limit } = choice;
     editOrder(order.id, `add a limit on ${shortLimitName(limit, ownProperties)}`, ({ limits }) => {
       limits.push({ ...limit });
     });
+    onAdded(limit);
+  }
+
+  function addOwn(property: Omit<OwnProperty, 'id'>) {
+    const id = freshId(property.label, ownProperties);
+    const limit = { property: id };
+    editWorkbook(`add the property ${property.label}`, (workbook) => {
+      workbook.ownProperties.push({ ...property, id });
+      workbook.orders.find((other) => other.id === order.id)?.limits.push({ ...limit });
+    });
+    setAsking(false);
     onAdded(limit);
   }
 
@@ -48,8 +66,17 @@ export function AddLimit({ order, onAdded }: { order: WorkbookOrder; onAdded(lim
         hideLabel
         value=""
         placeholder="Add a limit on …"
-        options={groups.filter(({ options }) => options.length > 0)}
+        options={[
+          ...groups.filter(({ options }) => options.length > 0),
+          { value: OF_ONES_OWN, label: 'a property of your own …' },
+        ]}
         onChange={add}
+      />
+      <OwnPropertyDialog
+        open={asking}
+        takenLabels={[...PROPERTY_TABLE, VI_DEFINITION, ...ownProperties].map(({ label }) => label)}
+        onClose={() => setAsking(false)}
+        onMake={addOwn}
       />
     </div>
   );
@@ -81,4 +108,18 @@ function groupOf({ index, unit }: PropertyDefinition): string {
 
 function keyOf({ property, celsius }: Limit): string {
   return `${property}@${celsius ?? ''}`;
+}
+
+/** An id that no property has: from the name, as far as it has plain letters. */
+function freshId(label: string, ownProperties: readonly OwnProperty[]): string {
+  const plain = label
+    .toLowerCase()
+    .normalize('NFKD')
+    .replace(/[^a-z0-9]+/g, '-')
+    .replace(/^-|-$/g, '');
+  const base = `own-${plain || 'property'}`;
+  const taken = new Set(ownProperties.map(({ id }) => id));
+  let id = base;
+  for (let count = 2; taken.has(id); count += 1) id = `${base}-${count}`;
+  return id;
 }

@@ -1,4 +1,4 @@
-import { type ReactNode, useEffect, useId, useRef } from 'react';
+import { type ReactNode, useId, useLayoutEffect, useRef } from 'react';
 import styles from './Dialog.module.css';
 import { IconButton } from './IconButton';
 
@@ -16,9 +16,13 @@ export function Dialog({ title, open, onClose, children, actions }: DialogProps)
   const ref = useRef<HTMLDialogElement>(null);
   const headingId = useId();
 
-  useEffect(() => {
+  // Before other effects: closing gives the focus back, and they may then place it elsewhere.
+  useLayoutEffect(() => {
     const dialog = ref.current;
-    if (dialog && open && !dialog.open) dialog.showModal();
+    if (dialog && open && !dialog.open) {
+      dialog.showModal();
+      dialog.querySelector<HTMLElement>('input, select, textarea')?.focus();
+    }
     if (dialog && !open && dialog.open) dialog.close();
   }, [open]);
 

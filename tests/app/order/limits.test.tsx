@@ -21,8 +21,14 @@ const field = (name: RegExp) => screen.getByRole('textbox', { name });
 const most = () => screen.getByRole('slider', { name: 'Kinematic viscosity at 40 °C, most' });
 
 beforeEach(() => {
-  // jsdom knows no pointer capture.
+  // jsdom knows no pointer capture and no modal dialogs.
   Element.prototype.setPointerCapture = vi.fn();
+  HTMLDialogElement.prototype.showModal = function show() {
+    this.open = true;
+  };
+  HTMLDialogElement.prototype.close = function close() {
+    this.open = false;
+  };
 });
 
 describe('typing a limit', () => {
@@ -147,6 +153,23 @@ describe('the list of limits', () => {
     const choices = within(screen.getByRole('combobox', { name: 'Add a limit' }));
     expect(choices.queryByRole('option', { name: 'Kinematic viscosity at 40 °C' })).toBeNull();
     expect(choices.getByRole('option', { name: 'Kinematic viscosity at 100 °C' })).toBeInTheDocument();
+  });
+
+  it('adds a property of one’s own with its limit, as one step', async () => {
+    const user = setUp([]);
+    await user.selectOptions(screen.getByRole('combobox', { name: 'Add a limit' }), 'a property of your own …');
+    const dialog = within(screen.getByRole('dialog', { name: 'A property of your own' }));
+    await user.click(dialog.getByRole('button', { name: 'Add it' }));
+    expect(dialog.getByRole('alert')).toHaveTextContent('Give the property a name.');
+    await user.type(dialog.getByRole('textbox', { name: 'Name' }), 'Bio-based carbon');
+    await user.selectOptions(dialog.getByRole('combobox', { name: 'How it blends' }), 'linear by volume');
+    await user.click(dialog.getByRole('button', { name: 'Add it' }));
+    expect(useWorkbook.getState().workbook.ownProperties).toEqual([
+      { id: 'own-bio-based-carbon', label: 'Bio-based carbon', unit: '% m/m', rule: 'linear by volume', digits: 1 },
+    ]);
+    expect(orderOnPage().limits).toEqual([{ property: 'own-bio-based-carbon' }]);
+    expect(field(/Bio-based carbon, least, % m\/m/)).toHaveFocus();
+    expect(useWorkbook.getState().past).toHaveLength(1);
   });
 
   it('removes a limit', async () => {
