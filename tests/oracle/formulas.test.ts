@@ -1,7 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import { INDEX_RULES, viscosityTerm } from './indices';
 import { Draw } from './mulberry32';
-import { lines, startingSlices } from './viSlices';
+import { lines } from './viSlices';
 import { breakpoints, kv40OfVi, viOf } from './viscosityIndex';
 import { invert, kvOfWalther, tau, waltherOf } from './walther';
 
@@ -70,7 +70,8 @@ test('the lines of the slices lie above and below the curve everywhere', () => {
     const draw = new Draw(seed);
     const vi = draw.between(60, 190);
     const low = draw.ratio(2, 100);
-    const slices = startingSlices({ low, high: low * draw.ratio(1.0001, 1.6) }, 200);
+    const cuts = breakpoints(low, low * draw.ratio(1.0001, 1.6));
+    const slices = cuts.slice(1).map((cut, k) => ({ low: cuts[k], high: cut }));
     const { slope, above, below } = lines(vi, slices, waltherOf);
     let least = Infinity;
     let most = -Infinity;

@@ -32,7 +32,7 @@ function cheapestOnLine(order: Order, from: number[], to: number[], points: numb
   let good = best;
   let bad = Math.min(1, Math.max(0, best + towards / points));
   if (missAt(bad) <= SLACK) good = bad;
-  for (let step = 0; step < 34 && good !== bad; step++) {
+  for (let step = 0; step < 30 && good !== bad; step++) {
     const middle = (good + bad) / 2;
     if (missAt(middle) <= SLACK) good = middle;
     else bad = middle;
@@ -44,7 +44,7 @@ function cheapestOnLine(order: Order, from: number[], to: number[], points: numb
 /** Where a dip of a function is lowest, or the first point that is low enough. */
 function lowest(f: (t: number) => number, low: number, high: number, start: number): number {
   let [a, b, best] = [low, high, start];
-  for (let step = 0; step < 24; step++) {
+  for (let step = 0; step < 14; step++) {
     const left = a + 0.382 * (b - a);
     const right = a + 0.618 * (b - a);
     const [missLeft, missRight] = [f(left), f(right)];
@@ -69,7 +69,7 @@ export function gridSearch(order: Order, points: number): GridAnswer | undefined
     return true;
   };
   for (let k = 0; k <= points; k++) offer(k / points);
-  for (let step = 0.5 / points; step > 1e-8 && best; step /= 2.5) {
+  for (let step = 0.5 / points; step > 1e-7 && best; step /= 3) {
     while (offer(best.x[2] + step) || offer(best.x[2] - step)) {
       // Walk at this step for as long as it gains something.
     }

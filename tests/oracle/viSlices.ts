@@ -42,9 +42,19 @@ function sample(vi: number, slice: Slice, index: (kv: number) => number): Sample
   return { u, g, stray: bend / 4 + 1e-15 };
 }
 
+/** Samples already taken, by limit and slice: runs of slices are halved over the same ones. */
+const taken = new WeakMap<Slice, Map<number, Sampled>>();
+
+function sampleOnce(vi: number, slice: Slice, index: (kv: number) => number): Sampled {
+  const known = taken.get(slice) ?? new Map<number, Sampled>();
+  const found = known.get(vi) ?? sample(vi, slice, index);
+  taken.set(slice, known.set(vi, found));
+  return found;
+}
+
 /** Lines a + b·u above and below G over slices that adjoin; one slice a piece of D2270. */
 export function lines(vi: number, slices: readonly Slice[], index: (kv: number) => number) {
-  const parts = slices.map((slice) => sample(vi, slice, index));
+  const parts = slices.map((slice) => sampleOnce(vi, slice, index));
   const first = parts[0];
   const last = parts[parts.length - 1];
   const rise = last.g[SAMPLES] - first.g[0];
@@ -61,10 +71,16 @@ export function lines(vi: number, slices: readonly Slice[], index: (kv: number) 
   return { slope, above, below };
 }
 
-/** The whole window cut at every change of formula of D2270; viscosity index is not defined below KV100 = 2. */
-export function startingSlices({ low, high }: OrderRows['window'], thickest: number): Slice[] {
-  const from = Math.max(2, low);
-  const to = Math.min(high, thickest);
+/** The thickest stock [mm²/s at 100 °C]: no mix is thicker. */
+function thickest({ stocks }: OrderRows): number {
+  const figures = stocks.flatMap((stock) => stock.figures.filter((f) => f.property === 'kv' && f.celsius === 100));
+  return Math.max(0, ...figures.map((figure) => figure.value ?? 0));
+}
+
+/** The window cut at every change of formula of D2270; viscosity index is not defined below KV100 = 2. */
+export function startingSlices(order: OrderRows): Slice[] {
+  const from = Math.max(2, order.window.low);
+  const to = Math.min(order.window.high, thickest(order));
   if (!(from <= to)) return [];
   const cuts = breakpoints(from, to);
   return cuts.slice(1).map((cut, k) => ({ low: cuts[k], high: cut }));
