@@ -33,11 +33,16 @@ export function createSaver({ storage, lock, report, delayMs = DELAY_MS }: Saver
   let waiting: Workbook | undefined;
   let timer: ReturnType<typeof setTimeout> | undefined;
   let writing = 0;
+  /** Workbooks that another tab wrote while they were open here: what is here is older, and stays unsaved. */
+  const elsewhere = new Set<string>();
 
   async function write(workbook: Workbook): Promise<SaveState> {
     try {
       const mayWrite = lock.held() === workbook.id || (await lock.hold(workbook.id));
-      if (!mayWrite) return { state: 'unavailable', message: OTHER_TAB };
+      if (!mayWrite) {
+        elsewhere.add(workbook.id);
+        return { state: 'unavailable', message: OTHER_TAB };
+      }
       await storage.save(workbook);
       return { state: 'saved' };
     } catch (error) {
@@ -58,9 +63,14 @@ export function createSaver({ storage, lock, report, delayMs = DELAY_MS }: Saver
 
   return {
     schedule(workbook) {
+      clearTimeout(timer);
+      if (elsewhere.has(workbook.id)) {
+        waiting = undefined;
+        report({ state: 'unavailable', message: OTHER_TAB });
+        return;
+      }
       waiting = workbook;
       report({ state: 'saving' });
-      clearTimeout(timer);
       timer = setTimeout(() => void flush(), delayMs);
     },
     flush,

@@ -9,8 +9,10 @@ import { NO_STORAGE, startApp } from '../../../app/state/start';
 import { selectOrder, setTheme, useView } from '../../../app/state/viewStore';
 import { editWorkbook, undo, useWorkbook } from '../../../app/state/workbookStore';
 import { openDatabase } from '../../../app/storage/database';
+import { OTHER_TAB } from '../../../app/storage/saver';
 import { createSolverClient } from '../../../app/worker/solverClient';
 import { emptyWorkbook, serialiseWorkbook } from '../../../src';
+import { fakeLocks } from '../storage/fakeLocks';
 import { FakeWorkers } from '../worker/fakeWorker';
 import { resetStores, testEnvironment } from './testEnvironment';
 
@@ -103,6 +105,20 @@ test('undoing a new order puts another on screen', async () => {
   COMMANDS.newOrder.run();
   undo();
   expect(useView.getState().orderId).toBe('vg-46-hydraulic');
+});
+
+test('a second tab of the same workbook says that it does not save', async () => {
+  const locks = fakeLocks();
+  const first = await open({ locks });
+  first.leave();
+  await saved();
+  const { id } = workbook();
+  const stillOpen = end;
+  end = () => {};
+  await open({ locks });
+  expect(workbook().id).toBe(id);
+  await vi.waitFor(() => expect(useSave.getState()).toMatchObject({ state: 'unavailable', message: OTHER_TAB }), 3000);
+  stillOpen();
 });
 
 describe('trouble with storage', () => {

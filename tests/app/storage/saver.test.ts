@@ -135,4 +135,23 @@ describe('trouble', () => {
     expect(reports.at(-1)).toBe(`unavailable: ${OTHER_TAB}`);
     expect(OTHER_TAB).toMatch(/Export the workbook/);
   });
+
+  test('nor later, when the other tab is closed: what it saved is newer', async () => {
+    vi.useRealTimers();
+    const locks = fakeLocks();
+    const other = webLock(locks);
+    await other.hold('w');
+    const { saver, saved, reports } = setUp(async () => {}, webLock(locks));
+    saver.schedule(named('a'));
+    await saver.flush();
+    other.release();
+    saver.schedule(named('b'));
+    await saver.flush();
+    expect(saved).toEqual([]);
+    expect(reports.at(-1)).toBe(`unavailable: ${OTHER_TAB}`);
+    // Another workbook in this tab is saved as ever.
+    saver.schedule(emptyWorkbook('x', 'c'));
+    await saver.flush();
+    expect(saved).toEqual(['c']);
+  });
 });
