@@ -6,6 +6,7 @@ import { openWorkbookStorage, type WorkbookStorage } from '../storage/workbookSt
 import { unguarded, webLock } from '../storage/writerLock';
 import { createWorker } from '../worker/createWorker';
 import { createSolverClient, type SolverClient } from '../worker/solverClient';
+import { setEarlierStates } from './earlierStates';
 import { environment } from './environment';
 import { setSave, setSetAside } from './saveStore';
 import { startSolving } from './solving';
@@ -111,6 +112,7 @@ export async function startApp(createSolver: () => SolverClient = solveInWorkers
   const { localStorage } = environment();
   useView.setState(loadView(localStorage));
   const storage = await openStorage();
+  setEarlierStates(storage);
   openWorkbook(await workbookToOpen(storage));
   keepOrderInSight();
   const ends = [

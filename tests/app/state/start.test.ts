@@ -3,6 +3,7 @@ import { afterEach, beforeEach, describe, expect, test, vi } from 'vitest';
 import { demoWorkbook } from '../../../app/demo/demoWorkbook';
 import { answerOf } from '../../../app/state/answerStore';
 import { COMMANDS } from '../../../app/state/commands';
+import { bringBack, earlierStates } from '../../../app/state/earlierStates';
 import type { Environment } from '../../../app/state/environment';
 import { useSave } from '../../../app/state/saveStore';
 import { NO_STORAGE, startApp } from '../../../app/state/start';
@@ -105,6 +106,30 @@ test('undoing a new order puts another on screen', async () => {
   COMMANDS.newOrder.run();
   undo();
   expect(useView.getState().orderId).toBe('vg-46-hydraulic');
+});
+
+test('an earlier state can be brought back, and that undone', async () => {
+  const first = await open();
+  first.leave();
+  await saved();
+  editWorkbook('name', (draft) => {
+    draft.name = 'My plant';
+  });
+  first.leave();
+  await saved();
+  const states = await vi.waitFor(async () => {
+    const found = await earlierStates();
+    expect(found).toHaveLength(2);
+    return found;
+  });
+  const oldest = states.find(({ text }) => !text.includes('My plant'));
+  if (!oldest) throw new Error('The first state was not kept.');
+  expect(bringBack(oldest)).toBeUndefined();
+  expect(workbook()).toEqual(demoWorkbook('id-1'));
+  undo();
+  expect(workbook().name).toBe('My plant');
+  expect(bringBack({ savedAt: '2026-03-01', text: '{' })).toMatch(/not JSON/);
+  expect(workbook().name).toBe('My plant');
 });
 
 test('a second tab of the same workbook says that it does not save', async () => {
