@@ -15,9 +15,7 @@ export function LimitList({ order }: { order: WorkbookOrder }) {
   return (
     <Section title="Limits" level={3} actions={<GradePreset order={order} />}>
       {order.limits.length === 0 && (
-        <p className={styles.empty}>
-          No limits yet: the cheapest stock alone is the answer. Add a limit, or set them from a grade.
-        </p>
+        <p className={styles.empty}>No limits yet: cost alone decides. Add a limit, or set them from a grade.</p>
       )}
       <ul className={styles.list}>
         {order.limits.map((limit, index) => (

@@ -15,7 +15,12 @@ export function AnswerBar({ orderId }: { orderId: string | undefined }) {
     <a href="#answer" className={classNames(styles.bar, short.stale && styles.stale)}>
       <span className="visually-hidden">To the answer:</span>
       <span className={classNames(styles.text, styles[short.tone])}>{short.text}</span>
-      <span className={styles.remark}>{short.stale ? 'being worked out again' : short.remark}</span>
+      <span className={styles.remarks}>
+        <span className={styles.remark} aria-hidden={short.stale}>
+          {short.remark}
+        </span>
+        {short.stale && <span className={styles.again}>being worked out again</span>}
+      </span>
     </a>
   );
 }
