@@ -7,7 +7,7 @@ export type ApiGroup = 'I' | 'II' | 'III' | 'IV' | 'V';
 
 /**
  * The limits of API 1509, Annex E (base oil interchangeability guidelines), which class base stocks, not mixes. Check
- * the current edition. Source: API 1509, Annex E, table E-1; read against suppliers' printed copies of it.
+ * the current edition. Source: API 1509, Annex E; read against printed copies of it and of its table.
  */
 export const API_GROUP_LIMITS = {
   /** Least saturates of Groups II and III [% m/m]; Group I has less, or too much sulphur. */

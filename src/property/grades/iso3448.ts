@@ -3,8 +3,7 @@ import type { Grade } from './grade';
 /**
  * ISO 3448:1992, viscosity classification of industrial liquid lubricants: number of the grade, midpoint, least and
  * greatest KV40, all three in mm²/s; the limits are the midpoint ±10 %. Check the current edition.
- * Source: ISO 3448, table 1; read against two manufacturers' printed tables, which agree up to VG 1000; the rest follows
- * from ±10 %.
+ * Source: ISO 3448, table 1; read against printed copies, which agree up to 1500; 2200 and 3200 follow from ±10 %.
  */
 export const ISO_3448_TABLE: readonly (readonly [number: number, midpoint: number, min: number, max: number])[] = [
   [2, 2.2, 1.98, 2.42],
