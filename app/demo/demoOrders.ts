@@ -16,7 +16,7 @@ function order(id: string, name: string, fields: Partial<WorkbookOrder>): Workbo
 const DEPRESSANT_DOSE = { stockId: 'depressant', exactly: 0.002 };
 const GEAR_PACKAGE_DOSE = { stockId: 'gear-package', exactly: 0.018 };
 
-const hydraulicOil = order('vg-46-hydraulic', 'VG 46 hydraulic oil, Quillmere Presses', {
+const hydraulicOil = order('vg-46-hydraulic', 'VG 46 hydraulic oil, Kvornhaag Presses', {
   note: 'Raise VI to 105 to see the price of ten points: the mix moves into Group II and III.',
   excludedProductIds: without('hydraulic-package', 'depressant'),
   limits: [
