@@ -1,8 +1,10 @@
-import type { Limit, Order, ViscosityRule } from '../../src/index';
+import type { Order, ViscosityRule } from '../../src/index';
+import { boundingLine } from './boundingLine';
 import { INDEX_RULES, VISCOSITY_INDEX, type ViscosityTerm, viscosityTerm } from './indices';
 import { Draw } from './mulberry32';
-import { figureOf, randomMix, randomStock, type Width } from './randomOrder';
-import { breakpoints, kv40OfVi, viOf } from './viscosityIndex';
+import { type Place, type PlantedWidth, windowAround, windowLimit } from './plantedWindow';
+import { figureOf, randomMix, randomStock } from './randomStock';
+import { viOf } from './viscosityIndex';
 import { invert } from './walther';
 
 /**
@@ -16,90 +18,8 @@ export interface Planted {
   cost: number;
   x: number[];
   /** Where x* sits in the KV100 window. */
-  place: 'inside' | 'low end' | 'high end';
+  place: Place;
   width: PlantedWidth;
-}
-
-/** Also 'piece': a window within one piece of Table 1, where the curve is concave and any x* can be planted inside. */
-export type PlantedWidth = Width | 'piece';
-
-interface Line {
-  slope: number;
-  offset: number;
-}
-
-interface Plane {
-  vi: number;
-  side: 'min' | 'max';
-  index: (kv: number) => number;
-}
-
-/** Points of the curve G over a window, 16 a piece of D2270, both values at 70. */
-function curve({ vi, index }: Plane, low: number, high: number): { u: number; g: number }[] {
-  const cuts = breakpoints(low, high);
-  const points: { u: number; g: number }[] = [];
-  for (let k = 1; k < cuts.length; k++) {
-    for (let i = 0; i <= 16; i++) {
-      const y = i === 16 ? cuts[k] : cuts[k - 1] + ((cuts[k] - cuts[k - 1]) * i) / 16;
-      points.push({ u: index(y), g: index(kv40OfVi(vi, y, cuts[k - 1] >= 70)) });
-    }
-  }
-  return points;
-}
-
-/** Line through the curve at y that bounds it over the window, or undefined where there is none. */
-function boundingLine(plane: Plane, y: number, low: number, high: number, draw: Draw): Line | undefined {
-  const { vi, index, side } = plane;
-  const u0 = index(y);
-  const g0 = index(kv40OfVi(vi, y));
-  const points = curve(plane, low, high);
-  const sign = side === 'min' ? 1 : -1;
-  let slope: number;
-  if (y === low || y === high) {
-    const far = points.filter(({ u }) => Math.abs(u - u0) > 1e-9).map(({ u, g }) => (g - g0) / (u - u0));
-    const steep = (y === low) === (side === 'min');
-    slope = (steep ? Math.max(...far) : Math.min(...far)) + (steep ? 1 : -1) * draw.between(0.002, 0.05);
-  } else {
-    const h = 1e-5 * y;
-    const rise = index(kv40OfVi(vi, y + h)) - index(kv40OfVi(vi, y - h));
-    slope = rise / (index(y + h) - index(y - h));
-  }
-  const offset = g0 - slope * u0;
-  // A millionth of a millionth of W is far below what a cost of 5e-6 can feel.
-  const out = Math.max(...points.map(({ u, g }) => sign * (g - offset - slope * u)));
-  return out <= 1e-11 ? { slope, offset } : undefined;
-}
-
-interface Window {
-  low: number;
-  high: number;
-  place: Planted['place'];
-}
-
-/** A window with x*'s KV100 = y where it is asked for; `reach` are the thinnest and the thickest stock. */
-function windowAround(draw: Draw, y: number, width: PlantedWidth, place: Planted['place'], reach: number[]): Window {
-  if (width === 'piece') {
-    const cuts = breakpoints(2, 200);
-    const above = cuts.findIndex((cut) => cut > y);
-    const inside = (end: number) => y + (end - y) * draw.between(0.2, 0.95);
-    return { low: inside(cuts[above - 1]), high: inside(cuts[above]), place: 'inside' };
-  }
-  const part = place === 'low end' ? 0 : place === 'high end' ? 1 : draw.between(0.2, 0.8);
-  const low = width === 'none' ? reach[0] : y * (1 - 2 * width * part);
-  const high = width === 'none' ? reach[1] : y * (1 + 2 * width * (1 - part));
-  return { low: Math.max(2, place === 'low end' ? y : low), high: place === 'high end' ? y : high, place };
-}
-
-/** The limit on KV100 that makes the window; an end that only the stocks set is left open. */
-function windowLimit({ low, high, place }: Window, width: PlantedWidth): Limit | undefined {
-  const open = width === 'none';
-  if (open && place === 'inside') return undefined;
-  return {
-    property: 'kv',
-    celsius: 100,
-    ...(open && place === 'high end' ? {} : { min: low }),
-    ...(open && place === 'low end' ? {} : { max: high }),
-  };
 }
 
 /** Rows scaled so that their largest coefficient is 1, with their multipliers. */
@@ -181,7 +101,7 @@ function termsOf(order: Order, rule: ViscosityRule): ViscosityTerm[] {
   );
 }
 
-function attempt(draw: Draw, width: PlantedWidth, place: Planted['place']): Planted | undefined {
+function attempt(draw: Draw, width: PlantedWidth, place: Place): Planted | undefined {
   const stocks = Array.from({ length: draw.whole(5, 16) }, (_, place) => randomStock(draw, place));
   const order: Order = { stocks, limits: [] };
   if (draw.chance(0.15)) stocks[0].blendWeight = draw.between(0.7, 1.4);

@@ -1,5 +1,5 @@
 import { type Order, type PredictedProperties, predictBlend } from '../../src/index';
-import { endsOf, unitOf } from './orderRows';
+import { endsOf, unitOf } from './figures';
 
 export type Predict = typeof predictBlend;
 

@@ -1,6 +1,6 @@
 import type { Limit, Order, Recipe, Stock } from '../../src/index';
+import { endsOf, pour, seen, unitOf } from './figures';
 import { INDEX_RULES, indexOnLine, VISCOSITY_INDEX, viscosityTerm } from './indices';
-import { endsOf, pour, seen, unitOf } from './orderRows';
 import { viOf } from './viscosityIndex';
 import { invert } from './walther';
 

@@ -8,7 +8,7 @@ import { caseOf, disagreements, seeds } from './judge';
 test('discrete rules: status and cost as by HiGHS mixed-integer slices', async () => {
   const found: string[] = [];
   let solved = 0;
-  for (const seed of seeds(20)) {
+  for (const seed of seeds(12)) {
     const order = randomOrder(seed, DISCRETE);
     const answer = sliceSearch(order);
     if (answer.status === 'solved') solved++;
@@ -16,7 +16,7 @@ test('discrete rules: status and cost as by HiGHS mixed-integer slices', async (
     if (entry) found.push(...(await disagreements(solveBlend, [entry])));
   }
   expect(found).toEqual([]);
-  expect(solved).toBeGreaterThan(8);
+  expect(solved).toBeGreaterThan(5);
 });
 
 test('discrete rules: status and cost as by trying every set of stocks', async () => {

@@ -1,0 +1,66 @@
+import type { Order, Stock, StockSet } from '../../src/index';
+import type { OrderRows, Row } from './orderRows';
+
+function inSet(stock: Stock, set: StockSet): boolean {
+  return (
+    (set.stockIds ?? []).includes(stock.id) ||
+    (set.families ?? []).includes(stock.family) ||
+    (set.flag !== undefined && (stock.flags ?? []).includes(set.flag))
+  );
+}
+
+const NOT_BASE = ['thickener', 'package', 'depressant'];
+const isBase = (stock: Stock) => !NOT_BASE.includes(stock.family);
+
+/** share ≥ or ≤ a part of the mix or of the base oil, as homogeneous rows over Σ x. */
+function shareRows(name: string, member: boolean[], whole: boolean[], min?: number, max?: number): Row[] {
+  const part = (end: number) => member.map((m, i) => (m ? 1 : 0) - (whole[i] ? end : 0));
+  if (min !== undefined && min === max) return [{ name, values: part(min), lower: 0, upper: 0 }];
+  const rows: Row[] = [];
+  if (min !== undefined) rows.push({ name: `${name} min`, values: part(min), lower: 0, upper: Infinity });
+  if (max !== undefined) rows.push({ name: `${name} max`, values: part(max), lower: -Infinity, upper: 0 });
+  return rows;
+}
+
+/** Doses as bounds, or as rows where they are of the base oil. */
+export function applyDoses(order: Order, built: OrderRows): void {
+  for (const dose of order.doses ?? []) {
+    const place = built.stocks.findIndex((stock) => stock.id === dose.stockId);
+    const min = dose.exactly ?? dose.min;
+    const max = dose.exactly ?? dose.max;
+    if (place < 0) continue;
+    if (dose.of === 'base oil') {
+      const member = built.stocks.map((_, i) => i === place);
+      built.rows.push(...shareRows(`dose ${dose.stockId}`, member, built.stocks.map(isBase), min, max));
+      continue;
+    }
+    if (max !== undefined) built.upper[place] = Math.min(built.upper[place], max);
+    if (min === undefined || min <= 0) continue;
+    if (dose.required === false) built.least[place] = Math.max(built.least[place], min);
+    else built.lower[place] = Math.max(built.lower[place], min);
+  }
+}
+
+/** Share rules as rows and choices. */
+export function applyShares(order: Order, built: OrderRows): void {
+  const { stocks } = built;
+  for (const [place, rule] of (order.shares ?? []).entries()) {
+    const name = `share rule ${place}`;
+    if (rule.kind === 'flag') continue;
+    const members = stocks.map((stock) => inSet(stock, rule.set));
+    const places = members.flatMap((member, i) => (member ? [i] : []));
+    if (rule.kind === 'share') {
+      const whole = stocks.map((stock) => rule.of !== 'base oil' || isBase(stock));
+      built.rows.push(...shareRows(name, members, whole, rule.min, rule.max));
+    } else if (rule.kind === 'ratio') {
+      const to = stocks.map((stock) => inSet(stock, rule.to));
+      built.rows.push(...shareRows(name, members, to, rule.min, rule.max));
+    } else if (rule.kind === 'count') {
+      if (rule.min !== undefined) throw new Error('The oracle does not read "at least so many of a set".');
+      if (rule.max !== undefined) built.choices.counts.push({ members: places, max: rule.max });
+    } else {
+      const from = stocks.findIndex((stock) => stock.id === rule.stockId);
+      if (from >= 0) built.choices.excludes.push({ from, members: places.filter((i) => i !== from) });
+    }
+  }
+}
