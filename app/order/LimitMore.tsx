@@ -41,9 +41,9 @@ export function LimitMore({
         {margin !== undefined && (
           <Button
             onClick={() => onEdit('set a margin from the method', (draft) => assign(draft, 'insideBy', margin))}
-            title="One result, 95 %, one-sided: 0.59 R (ISO 4259-2)"
+            title="One result, 95 %, one-sided: 0.59 of the reproducibility R (ISO 4259-2)"
           >
-            0.59 R = {formatNumber(margin, digits)}
+            by the method: {formatNumber(margin, digits)}
           </Button>
         )}
         <Checkbox

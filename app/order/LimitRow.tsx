@@ -28,6 +28,7 @@ export function LimitRow({ orderId, limit, index, answer, isNew }: LimitRowProps
   const id = useId();
   const row = useRef<HTMLLIElement>(null);
   const [open, setOpen] = useState(false);
+  const [untaken, setUntaken] = useState<Partial<Record<End, string>>>({});
   const ownProperties = useWorkbook(({ workbook }) => workbook.ownProperties);
   const definition = propertyDefinition(limit.property, ownProperties);
   const name = limitName(limit, ownProperties);
@@ -64,7 +65,8 @@ export function LimitRow({ orderId, limit, index, answer, isNew }: LimitRowProps
   };
   const upper = upperEnd(limit);
   const wrong = contradiction(limit, definition);
-  const problems = wrong ? [wrong] : problemsAt(answer, 'limits', index);
+  const unread = [untaken.min, untaken.max].filter((message) => message !== undefined);
+  const problems = [...unread, ...(wrong ? [wrong] : problemsAt(answer, 'limits', index))];
   const check = checkOf(answer, index, limit);
   const problemId = problems.length ? `${id}-problem` : undefined;
   const ends = {
@@ -74,8 +76,9 @@ export function LimitRow({ orderId, limit, index, answer, isNew }: LimitRowProps
     digits: definition.digits,
     step: definition.reportingUnit,
     sense: definition.sense,
-    problemId,
   };
+  // What cannot be read belongs to one field; all else to the limit as a whole.
+  const problemOf = (end: End) => (unread.length === 0 || untaken[end] ? problemId : undefined);
 
   return (
     <li className={styles.row} ref={row}>
@@ -93,6 +96,8 @@ export function LimitRow({ orderId, limit, index, answer, isNew }: LimitRowProps
           {...ends}
           className={styles.min}
           label="least"
+          problemId={problemOf('min')}
+          onProblem={(message) => setUntaken((before) => ({ ...before, min: message }))}
           value={limit.min}
           onDraft={(value) => moveEnd('min', value)}
           onCommit={(value) => commitEnd('min', value)}
@@ -113,6 +118,8 @@ export function LimitRow({ orderId, limit, index, answer, isNew }: LimitRowProps
           {...ends}
           className={styles.max}
           label={upper.strict ? 'below' : 'most'}
+          problemId={problemOf('max')}
+          onProblem={(message) => setUntaken((before) => ({ ...before, max: message }))}
           value={upper.value}
           onDraft={(value) => moveEnd('max', value)}
           onCommit={(value) => commitEnd('max', value)}

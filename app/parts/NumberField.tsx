@@ -1,4 +1,4 @@
-import { useId } from 'react';
+import { useEffect, useId } from 'react';
 import { classNames } from './classNames';
 import styles from './field.module.css';
 import { type NumberDraftOptions, useNumberDraft } from './useNumberDraft';
@@ -20,6 +20,11 @@ export interface NumberFieldProps extends NumberDraftOptions {
   problem?: string;
   /** Id of a message elsewhere that says what is wrong with the value. */
   problemId?: string;
+  /**
+   * Told what is wrong with the typed text, for a caller that shows it where there is room (and names the place in
+   * `problemId`); the field then shows no message of its own.
+   */
+  onProblem?(message: string | undefined): void;
   hint?: string;
   className?: string;
 }
@@ -39,13 +44,18 @@ export function NumberField({
   disabled,
   problem,
   problemId,
+  onProblem,
   hint,
   className,
   ...draftOptions
 }: NumberFieldProps) {
   const id = useId();
   const draft = useNumberDraft(draftOptions);
-  const message = draft.problem ?? (draft.dirty ? undefined : problem);
+  const message = onProblem ? undefined : (draft.problem ?? (draft.dirty ? undefined : problem));
+
+  // biome-ignore lint/correctness/useExhaustiveDependencies: the caller is told once for each message
+  useEffect(() => onProblem?.(draft.problem), [draft.problem]);
+
   const describedBy = [message && `${id}-problem`, problemId, hint && `${id}-hint`].filter(Boolean).join(' ');
   return (
     <span className={classNames(styles.field, inline && styles.inline, className)}>
@@ -64,7 +74,7 @@ export function NumberField({
           spellCheck={false}
           placeholder={placeholder}
           disabled={disabled}
-          aria-invalid={message || problemId ? true : undefined}
+          aria-invalid={message || problemId || draft.problem ? true : undefined}
           aria-describedby={describedBy || undefined}
           data-dirty={draft.dirty || undefined}
           {...draft.inputProps}

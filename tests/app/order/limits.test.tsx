@@ -52,6 +52,19 @@ describe('typing a limit', () => {
     expect(orderOnPage().limits[0]).toEqual({ ...KV40, min: 60 });
   });
 
+  it('says below the row what it cannot read, and keeps the limit as it was', async () => {
+    const user = setUp();
+    await user.clear(field(/40 °C, least/));
+    await user.type(field(/40 °C, least/), '4O{Enter}');
+    expect(field(/40 °C, least/)).toHaveValue('4O');
+    expect(field(/40 °C, least/)).toHaveAccessibleDescription(/“4O” is not a number/);
+    expect(field(/40 °C, most/)).toBeValid();
+    await user.clear(field(/40 °C, least/));
+    await user.type(field(/40 °C, least/), '40{Enter}');
+    expect(screen.queryByText(/is not a number/)).toBeNull();
+    expect(orderOnPage().limits[0]).toEqual({ ...KV40, min: 40 });
+  });
+
   it('takes an end away where its field is emptied', async () => {
     const user = setUp();
     await user.clear(field(/40 °C, most/));
