@@ -2,9 +2,10 @@
  * The public face of the engine. Everything else in src/ is private. Inputs and outputs are plain JSON data;
  * quantities are in the units of the property table, shares are mass fractions 0..1, prices per tonne.
  */
+
+export { type PredictOptions, predictBlend } from './blend/predictBlend';
 export type { PredictedProperties, PredictedProperty, RuleSpread } from './blend/predictedProperties';
 export type { PredictionOptions, PropertyAt } from './blend/predictionOptions';
-export { type PredictOptions, predictBlend } from './blend/predictBlend';
 export { createHighsEngine, type HighsLoading } from './optimise/linear/highsEngine';
 export { createJavascriptEngine } from './optimise/linear/javascriptEngine';
 export type { LinearEngine } from './optimise/linear/linearEngine';
@@ -21,7 +22,19 @@ export type {
 } from './optimise/outcome';
 export { solveBlend } from './optimise/solveBlend';
 export type { SolveOptions } from './optimise/solveOptions';
-export { kinematicViscosityAt, kvFromWalther, logTemperature, type ViscosityPoint, waltherIndex } from './property/kinematicViscosity';
+export {
+  apiGroupOf,
+  GRADES,
+  type Grade,
+  gradesOfViscosity,
+} from './property/grades';
+export {
+  kinematicViscosityAt,
+  kvFromWalther,
+  logTemperature,
+  type ViscosityPoint,
+  waltherIndex,
+} from './property/kinematicViscosity';
 export { OWN_RULES, type OwnProperty, type OwnRule } from './property/ownProperty';
 export type { PropertyDefinition, Reproducibility } from './property/propertyDefinition';
 export { PROPERTY_TABLE, propertyDefinition, VI_DEFINITION } from './property/propertyTable';
@@ -40,9 +53,9 @@ export { type EngineOrder, toOrder } from './workbook/toOrder';
 export {
   type Lot,
   type Product,
+  WORKBOOK_FORMAT,
+  WORKBOOK_VERSION,
   type Workbook,
   type WorkbookOrder,
   type WorkbookSettings,
-  WORKBOOK_FORMAT,
-  WORKBOOK_VERSION,
 } from './workbook/workbook';

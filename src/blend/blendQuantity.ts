@@ -97,7 +97,11 @@ function tableTerm(
 }
 
 /** The property of any mix of the stocks, as a weighted mean. Throws RangeError for an unknown property. */
-export function blendQuantity(stocks: readonly Stock[], at: PropertyAt, options: PredictionOptions = {}): BlendQuantity {
+export function blendQuantity(
+  stocks: readonly Stock[],
+  at: PropertyAt,
+  options: PredictionOptions = {},
+): BlendQuantity {
   const definition = propertyDefinition(at.property, options.ownProperties);
   if (!definition || definition.id === 'vi') throw new RangeError(`"${at.property}" is not a property that blends.`);
   const celsius = at.celsius ?? definition.temperatures?.[0];

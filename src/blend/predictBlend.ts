@@ -1,4 +1,4 @@
-import { propertyDefinition, PROPERTY_TABLE } from '../property/propertyTable';
+import { PROPERTY_TABLE, propertyDefinition } from '../property/propertyTable';
 import { LEAST_KV100_FOR_VI, viscosityIndex } from '../property/viscosityIndex';
 import { VISCOSITY_RULES } from '../property/viscosityRule';
 import { isBaseOil } from '../stock/family';
@@ -40,7 +40,8 @@ function partsOf(stocks: readonly Stock[], recipe: Recipe): Part[] {
     sum += massFraction;
     if (massFraction > 0) parts.push({ stock, massFraction });
   }
-  if (!(Math.abs(sum - 1) <= 1e-6)) throw new RangeError(`The shares of a recipe must add up to 1; they add up to ${sum}.`);
+  if (!(Math.abs(sum - 1) <= 1e-6))
+    throw new RangeError(`The shares of a recipe must add up to 1; they add up to ${sum}.`);
   return parts;
 }
 
@@ -78,7 +79,10 @@ function viscosityIndexOf(kv40: PredictedProperty, kv100: PredictedProperty): Pr
     estimatedFrom: union('estimatedFrom'),
   };
   const defined =
-    kv40.value !== undefined && kv100.value !== undefined && kv100.value >= LEAST_KV100_FOR_VI && kv40.value > kv100.value;
+    kv40.value !== undefined &&
+    kv100.value !== undefined &&
+    kv100.value >= LEAST_KV100_FOR_VI &&
+    kv40.value > kv100.value;
   return defined && kv40.value !== undefined && kv100.value !== undefined
     ? { ...result, value: viscosityIndex(kv40.value, kv100.value) }
     : result;
@@ -154,7 +158,11 @@ function volumeFractions(parts: readonly Part[], recipe: Recipe, options: Predic
  * A property is left without a value where a stock in the mix has no figure for it; `unknownFrom` names the stocks.
  * Throws RangeError for a recipe that is none, or a wanted property that does not exist.
  */
-export function predictBlend(stocks: readonly Stock[], recipe: Recipe, options: PredictOptions = {}): PredictedProperties {
+export function predictBlend(
+  stocks: readonly Stock[],
+  recipe: Recipe,
+  options: PredictOptions = {},
+): PredictedProperties {
   const parts = partsOf(stocks, recipe);
   const properties = propertiesToPredict(parts, options).map((at) => predictOne(parts, at, options));
   const spread = [{ property: 'kv', celsius: 40 }, { property: 'kv', celsius: 100 }, { property: 'vi' }].map((at) =>

@@ -20,7 +20,11 @@ export function propertyInWords({ property, celsius }: PropertyAt, options: Pred
 
 function unknown(stock: Stock, missing: PropertyAt, options: PredictionOptions): StockValue {
   const what = propertyInWords(missing, options);
-  return { state: 'unknown', missing, message: `${stock.name}: ${what} is unknown. Enter the figure to use the stock.` };
+  return {
+    state: 'unknown',
+    missing,
+    message: `${stock.name}: ${what} is unknown. Enter the figure to use the stock.`,
+  };
 }
 
 function known(figure: Figure): StockValue | undefined {
@@ -62,7 +66,11 @@ function viscosityValue(stock: Stock, celsius: number, options: PredictionOption
     const { points, estimated } = viscosityLine(stock);
     if (points.length < 2) {
       const missing = points.some((point) => point.celsius === 100) ? 40 : 100;
-      return unknown(stock, { property: 'kv', celsius: celsius === 40 || celsius === 100 ? celsius : missing }, options);
+      return unknown(
+        stock,
+        { property: 'kv', celsius: celsius === 40 || celsius === 100 ? celsius : missing },
+        options,
+      );
     }
     return { state: 'known', value: kinematicViscosityAt(celsius, points), estimated };
   } catch (error) {

@@ -52,7 +52,9 @@ function asTheRest(predicted: PredictedProperties, used: readonly Stock[], order
     const taking = used.filter((stock) => property.asTheRest.includes(stock.id));
     if (!limited || taking.length === 0) return [];
     const label = limitInWords(property, order);
-    return [{ kind: 'as the rest' as const, message: `${label}: ${names(taking)} counted as taking the value of the rest.` }];
+    return [
+      { kind: 'as the rest' as const, message: `${label}: ${names(taking)} counted as taking the value of the rest.` },
+    ];
   });
 }
 
@@ -60,7 +62,12 @@ function estimated(predicted: PredictedProperties, used: readonly Stock[], order
   return predicted.properties.flatMap((property) => {
     const from = used.filter((stock) => property.estimatedFrom.includes(stock.id));
     if (from.length === 0) return [];
-    return [{ kind: 'estimate' as const, message: `${limitInWords(property, order)} rests on estimated figures of ${names(from)}.` }];
+    return [
+      {
+        kind: 'estimate' as const,
+        message: `${limitInWords(property, order)} rests on estimated figures of ${names(from)}.`,
+      },
+    ];
   });
 }
 
@@ -84,7 +91,10 @@ function model(order: Order, recipe: Recipe, used: readonly Stock[]): Caution[] 
       return share >= 0.1 ? (findFigure(stock, 'kv', 100)?.value ?? []) : [];
     });
     if (heavy.length > 1 && Math.max(...heavy) > 4 * Math.min(...heavy)) {
-      cautions.push({ kind: 'model', message: 'Noack volatility: the linear rule reads low for a thin and a heavy stock together.' });
+      cautions.push({
+        kind: 'model',
+        message: 'Noack volatility: the linear rule reads low for a thin and a heavy stock together.',
+      });
     }
   }
   const thickeners = used.filter((stock) => stock.family === 'thickener');

@@ -25,7 +25,9 @@ function ruleInWords(row: ModelRow, order: Order, model: SearchModel): string | 
 export function impossibleBounds(model: SearchModel): string[] {
   return model.stocks.flatMap((stock, i) =>
     model.lower[i] > model.upper[i]
-      ? [`${stock.name} must be at least ${percent(model.lower[i])} of the mix, but may be at most ${percent(model.upper[i])}`]
+      ? [
+          `${stock.name} must be at least ${percent(model.lower[i])} of the mix, but may be at most ${percent(model.upper[i])}`,
+        ]
       : [],
   );
 }

@@ -46,7 +46,9 @@ function valueOfShares(candidates: Candidates, shares: Float64Array) {
       const kv100 = viscosity(100);
       return kv100 >= LEAST_KV100_FOR_VI && kv40 > kv100 ? viscosityIndex(kv40, kv100) : undefined;
     }
-    const quantity = candidates.quantities.get(quantityKey(celsius === undefined ? { property } : { property, celsius }));
+    const quantity = candidates.quantities.get(
+      quantityKey(celsius === undefined ? { property } : { property, celsius }),
+    );
     return quantity && blendValue(quantity, shares);
   };
 }

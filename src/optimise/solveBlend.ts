@@ -93,7 +93,10 @@ function outcomeOf(
     };
   }
   const recipe = recipeOf(model, found.best.values);
-  const properties = predictBlend(order.stocks, recipe, { ...predictionOptions(order), wanted: neededProperties(order) });
+  const properties = predictBlend(order.stocks, recipe, {
+    ...predictionOptions(order),
+    wanted: neededProperties(order),
+  });
   const checks = checkLimits(order, valueOfPrediction(properties));
   return {
     ...base,

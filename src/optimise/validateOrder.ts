@@ -35,7 +35,10 @@ class Problems {
 function checkStock(stock: Stock, problems: Problems): void {
   const at = (key: string): Path => ['stocks', stock.id, key];
   if (typeof stock.pricePerTonne !== 'number' || !Number.isFinite(stock.pricePerTonne)) {
-    problems.add(at('pricePerTonne'), `${stock.name} has no price that is a number. Enter one, or leave the stock out.`);
+    problems.add(
+      at('pricePerTonne'),
+      `${stock.name} has no price that is a number. Enter one, or leave the stock out.`,
+    );
   }
   problems.number(at('leastDoseIfUsed'), stock.leastDoseIfUsed, `Least dose of ${stock.name}`, 0, 1);
   problems.number(at('greatestDose'), stock.greatestDose, `Greatest dose of ${stock.name}`, 0, 1);
@@ -66,7 +69,10 @@ function checkLimit(limit: Limit, place: number, order: Order, problems: Problem
   const path: Path = ['limits', place];
   const definition = limitDefinition(limit, order);
   if (!definition) {
-    problems.add([...path, 'property'], `"${limit.property}" is not a known property. Pick one of the list, or add it.`);
+    problems.add(
+      [...path, 'property'],
+      `"${limit.property}" is not a known property. Pick one of the list, or add it.`,
+    );
     return;
   }
   const { label, sense } = definition;

@@ -1,4 +1,11 @@
-import { GREATEST_KV, kvFromWalther, LEAST_KV, waltherCurvature, waltherIndex, waltherSlope } from './kinematicViscosity';
+import {
+  GREATEST_KV,
+  kvFromWalther,
+  LEAST_KV,
+  waltherCurvature,
+  waltherIndex,
+  waltherSlope,
+} from './kinematicViscosity';
 
 /**
  * A blending index: a strictly monotone function of a property that is averaged, by mass or by volume, where the

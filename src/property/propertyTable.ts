@@ -1,4 +1,4 @@
-import { ownPropertyDefinition, type OwnProperty } from './ownProperty';
+import { type OwnProperty, ownPropertyDefinition } from './ownProperty';
 import type { PropertyDefinition } from './propertyDefinition';
 
 /**

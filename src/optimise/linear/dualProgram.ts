@@ -28,7 +28,10 @@ function sidesOf({ rows, lower, upper }: LinearProgram): Side[] {
 
 /** Rows Aᵀ y + d = cost, one a column. */
 function balanceRows(program: LinearProgram, sides: readonly Side[], cost: ArrayLike<number>): LinearRow[] {
-  const entries: { columns: number[]; values: number[] }[] = [...program.cost.keys()].map(() => ({ columns: [], values: [] }));
+  const entries: { columns: number[]; values: number[] }[] = [...program.cost.keys()].map(() => ({
+    columns: [],
+    values: [],
+  }));
   sides.forEach(({ row, column, sign }, place) => {
     if (column !== undefined) {
       entries[column].columns.push(place);
@@ -43,7 +46,11 @@ function balanceRows(program: LinearProgram, sides: readonly Side[], cost: Array
   return entries.map(({ columns, values }, column) => ({ lower: cost[column], upper: cost[column], columns, values }));
 }
 
-function fromSides(program: LinearProgram, cost: ArrayLike<number>, extra: (count: number) => LinearRow[]): MultiplierProgram {
+function fromSides(
+  program: LinearProgram,
+  cost: ArrayLike<number>,
+  extra: (count: number) => LinearRow[],
+): MultiplierProgram {
   const sides = sidesOf(program);
   const count = sides.length;
   return {
@@ -71,6 +78,11 @@ export function dualProgram(program: LinearProgram): MultiplierProgram {
 /** Multipliers that prove a program to have no solution, if any do: the dual without a cost, of total size 1. */
 export function rayProgram(program: LinearProgram): MultiplierProgram {
   return fromSides(program, new Float64Array(program.cost.length), (count) => [
-    { lower: 0, upper: 1, columns: Array.from({ length: count }, (_, k) => k), values: new Array<number>(count).fill(1) },
+    {
+      lower: 0,
+      upper: 1,
+      columns: Array.from({ length: count }, (_, k) => k),
+      values: new Array<number>(count).fill(1),
+    },
   ]);
 }

@@ -50,7 +50,11 @@ function openSession(highs: Highs, program: LinearProgram): LinearSession {
     const status = model.getModelStatus();
     if (status === modelStatus.optimal) {
       const solution = model.getSolution();
-      return { status: 'optimal', values: Float64Array.from(solution.colValue), duals: Float64Array.from(solution.rowDual) };
+      return {
+        status: 'optimal',
+        values: Float64Array.from(solution.colValue),
+        duals: Float64Array.from(solution.rowDual),
+      };
     }
     if (status === modelStatus.infeasible) {
       const ray = model.getDualRay();

@@ -96,7 +96,9 @@ function solveProgram(full: LinearProgram): LinearResult {
   }
   const dual = dualProgram(program);
   const solution = minimise(dual.program, DUAL_PRECISION);
-  return solution ? { status: 'optimal', values: restore(values), duals: dual.multipliers(solution) } : { status: 'unknown' };
+  return solution
+    ? { status: 'optimal', values: restore(values), duals: dual.multipliers(solution) }
+    : { status: 'unknown' };
 }
 
 /** Keeps a program of its own to edit; every solve is cold. */

@@ -53,12 +53,18 @@ export function neededProperties(order: Order): PropertyAt[] {
 /** A stock the order cannot do without: a dose that is compulsory. */
 export function isCompulsory(order: Order, stockId: string): boolean {
   return (order.doses ?? []).some(
-    (dose) => dose.stockId === stockId && dose.required !== false && (dose.required || (dose.exactly ?? dose.min ?? 0) > 0),
+    (dose) =>
+      dose.stockId === stockId && dose.required !== false && (dose.required || (dose.exactly ?? dose.min ?? 0) > 0),
   );
 }
 
 /** Why a stock cannot serve for one property, if it cannot. */
-function obstacle(stock: Stock, quantity: BlendQuantity, place: number, options: PredictionOptions): LeftOut | undefined {
+function obstacle(
+  stock: Stock,
+  quantity: BlendQuantity,
+  place: number,
+  options: PredictionOptions,
+): LeftOut | undefined {
   const term = quantity.terms[place];
   const where = quantity.celsius === undefined ? {} : { celsius: quantity.celsius };
   if (term.state === 'unknown') {
@@ -70,11 +76,23 @@ function obstacle(stock: Stock, quantity: BlendQuantity, place: number, options:
   if (term.value >= sense.min && term.value <= sense.max && Number.isFinite(term.index)) return undefined;
   const what = propertyInWords(quantity, options);
   const message = `${stock.name}: ${what} of ${term.value} ${quantity.definition.unit} cannot be right. Check the figure.`;
-  return { stockId: stock.id, name: stock.name, reason: 'figure out of range', property: quantity.property, ...where, message };
+  return {
+    stockId: stock.id,
+    name: stock.name,
+    reason: 'figure out of range',
+    property: quantity.property,
+    ...where,
+    message,
+  };
 }
 
 /** Viscosity must fall as temperature rises, whatever the blending rule. */
-function risingViscosity(stock: Stock, kv40: BlendQuantity | undefined, kv100: BlendQuantity | undefined, place: number) {
+function risingViscosity(
+  stock: Stock,
+  kv40: BlendQuantity | undefined,
+  kv100: BlendQuantity | undefined,
+  place: number,
+) {
   const cold = kv40?.terms[place];
   const hot = kv100?.terms[place];
   if (cold?.state !== 'term' || hot?.state !== 'term' || cold.value > hot.value) return undefined;
@@ -115,7 +133,10 @@ function whyLeftOut(
 }
 
 function requiredButLeftOut(entry: LeftOut): OrderProblem {
-  const key = entry.property === undefined ? 'flags' : quantityKey({ property: entry.property, ...(entry.celsius === undefined ? {} : { celsius: entry.celsius }) });
+  const key =
+    entry.property === undefined
+      ? 'flags'
+      : quantityKey({ property: entry.property, ...(entry.celsius === undefined ? {} : { celsius: entry.celsius }) });
   return { path: ['stocks', entry.stockId, key], message: `The order requires this stock, but: ${entry.message}` };
 }
 

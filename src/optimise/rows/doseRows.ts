@@ -59,6 +59,7 @@ export function addDoses(builder: ModelBuilder, order: Order): void {
     const compulsory = isCompulsory(order, dose.stockId);
     if (dose.of === 'base oil') addDoseOfBase(builder, place, dose, index);
     else addDoseOfMix(builder, place, dose, compulsory);
-    if (compulsory && dose.required) builder.raiseLower(place, builder.stocks[place].leastDoseIfUsed || LEAST_SHARE_THAT_COUNTS);
+    if (compulsory && dose.required)
+      builder.raiseLower(place, builder.stocks[place].leastDoseIfUsed || LEAST_SHARE_THAT_COUNTS);
   });
 }

@@ -17,7 +17,12 @@ export class ModelBuilder {
   constructor(readonly stocks: Stock[]) {
     this.#place = new Map(stocks.map((stock, place) => [stock.id, place]));
     for (const stock of stocks) this.addColumn(stock.pricePerTonne, 0, 1);
-    this.addRow({ kind: 'sum' }, 1, 1, stocks.map((_, place) => [place, 1]));
+    this.addRow(
+      { kind: 'sum' },
+      1,
+      1,
+      stocks.map((_, place) => [place, 1]),
+    );
   }
 
   placeOf(stockId: string): number | undefined {
@@ -33,7 +38,13 @@ export class ModelBuilder {
 
   addRow(source: RowSource, lower: number, upper: number, entries: readonly (readonly [number, number])[]): void {
     const used = entries.filter(([, value]) => value !== 0);
-    this.rows.push({ source, lower, upper, columns: used.map(([column]) => column), values: used.map(([, value]) => value) });
+    this.rows.push({
+      source,
+      lower,
+      upper,
+      columns: used.map(([column]) => column),
+      values: used.map(([, value]) => value),
+    });
   }
 
   lower(column: number): number {
@@ -56,7 +67,11 @@ export class ModelBuilder {
   presenceOf(stock: number): Presence {
     const found = this.presences.find((presence) => presence.stock === stock);
     if (found) return found;
-    const presence: Presence = { stock, column: this.addColumn(0, 0, 1), least: this.stocks[stock].leastDoseIfUsed ?? 0 };
+    const presence: Presence = {
+      stock,
+      column: this.addColumn(0, 0, 1),
+      least: this.stocks[stock].leastDoseIfUsed ?? 0,
+    };
     this.presences.push(presence);
     return presence;
   }

@@ -252,7 +252,8 @@ export class BranchAndBound {
    */
   #isWorthTrying(node: SearchNode): boolean {
     if (!this.#best || isNarrow(node)) return true;
-    if (this.model.presences.length > 0 || this.model.wholeLots.length > 0) return this.#nodes <= 20 || this.#nodes % 4 === 0;
+    if (this.model.presences.length > 0 || this.model.wholeLots.length > 0)
+      return this.#nodes <= 20 || this.#nodes % 4 === 0;
     return Number.isInteger(Math.log2(this.#nodes) / 2);
   }
 
@@ -381,14 +382,16 @@ export class BranchAndBound {
     if (!idle.includes(true)) return;
     idle.forEach((isIdle, column) => {
       if (isIdle) return;
-      if (again.values[column] <= program.lower[column] + 1e-9) program.setBounds(column, program.lower[column], program.lower[column]);
+      if (again.values[column] <= program.lower[column] + 1e-9)
+        program.setBounds(column, program.lower[column], program.lower[column]);
     });
     const { length } = model.stocks;
     const ranks = Float64Array.from(model.cost, (_, column) => (column < length ? 1 + column / length : 0));
     const result = program.solveForTie(ranks, best.cost);
     if (result.status !== 'optimal' || !this.#isSettledBy(result.values) || !this.isRecipe(result.values)) return;
     const cost = this.#costOf(result.values);
-    if (cost <= best.cost + 1e-9 * Math.abs(best.cost)) this.#best = { ...best, values: Float64Array.from(result.values), cost };
+    if (cost <= best.cost + 1e-9 * Math.abs(best.cost))
+      this.#best = { ...best, values: Float64Array.from(result.values), cost };
   }
 
   #costOf(values: Float64Array): number {

@@ -13,7 +13,9 @@ export interface Choice {
 /** Rows over presences: counts, exclusions, most stocks. */
 export function presenceRows(model: SearchModel): ModelRow[] {
   const columns = new Set(model.presences.map((presence) => presence.column));
-  return model.rows.filter((row) => row.source.kind !== 'presence' && row.columns.some((column) => columns.has(column)));
+  return model.rows.filter(
+    (row) => row.source.kind !== 'presence' && row.columns.some((column) => columns.has(column)),
+  );
 }
 
 /** Which presences the shares mean: column of the presence → 0 or 1. */
@@ -31,7 +33,10 @@ export function keepsPresences(model: SearchModel, rows: readonly ModelRow[], va
   const doses = model.presences.every(
     ({ stock, least }) => !(values[stock] > NO_SHARE) || values[stock] >= least - NO_SHARE,
   );
-  return doses && rows.every((row) => activity(row, presences) >= row.lower - 1e-9 && activity(row, presences) <= row.upper + 1e-9);
+  return (
+    doses &&
+    rows.every((row) => activity(row, presences) >= row.lower - 1e-9 && activity(row, presences) <= row.upper + 1e-9)
+  );
 }
 
 function drums(values: ArrayLike<number>, stock: number, share: number): number {
@@ -46,14 +51,20 @@ export function keepsWholeLots(model: SearchModel, values: ArrayLike<number>): b
   });
 }
 
-function presenceChoice(model: SearchModel, values: ArrayLike<number>, lower: Float64Array, upper: Float64Array): Choice | undefined {
+function presenceChoice(
+  model: SearchModel,
+  values: ArrayLike<number>,
+  lower: Float64Array,
+  upper: Float64Array,
+): Choice | undefined {
   let best: { stock: number; column: number; least: number } | undefined;
   let bestScore = -1;
   for (const presence of model.presences) {
     const { stock, column, least } = presence;
     if (lower[column] === upper[column]) continue;
     // Prefer an undecided presence; among equals the greatest share, which moves the cost most.
-    const score = Math.min(values[column], 1 - values[column]) + (values[stock] > NO_SHARE ? 1 + 1e-3 * values[stock] : 0);
+    const score =
+      Math.min(values[column], 1 - values[column]) + (values[stock] > NO_SHARE ? 1 + 1e-3 * values[stock] : 0);
     const breaksDose = values[stock] > NO_SHARE && values[stock] < least - NO_SHARE;
     if (score + (breaksDose ? 1 : 0) > bestScore) {
       best = { stock, column, least };
@@ -64,13 +75,24 @@ function presenceChoice(model: SearchModel, values: ArrayLike<number>, lower: Fl
   const { stock, column, least } = best;
   return {
     alternatives: [
-      [{ column, lower: 1, upper: 1 }, { column: stock, lower: Math.max(lower[stock], least), upper: upper[stock] }],
-      [{ column, lower: 0, upper: 0 }, { column: stock, lower: lower[stock], upper: 0 }],
+      [
+        { column, lower: 1, upper: 1 },
+        { column: stock, lower: Math.max(lower[stock], least), upper: upper[stock] },
+      ],
+      [
+        { column, lower: 0, upper: 0 },
+        { column: stock, lower: lower[stock], upper: 0 },
+      ],
     ],
   };
 }
 
-function drumChoice(model: SearchModel, values: ArrayLike<number>, lower: Float64Array, upper: Float64Array): Choice | undefined {
+function drumChoice(
+  model: SearchModel,
+  values: ArrayLike<number>,
+  lower: Float64Array,
+  upper: Float64Array,
+): Choice | undefined {
   let best: Choice | undefined;
   let worst = WHOLE;
   for (const { stock, share } of model.wholeLots) {

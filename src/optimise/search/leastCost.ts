@@ -41,7 +41,8 @@ export async function leastCostPerCubicMetre(
   const start = options.now();
   let found = await leastCostPerTonne(engine, model, options, isRecipe);
   let best = found.best;
-  if (!best || found.stopped !== 'finished') return withoutBound(found, best && best.cost / volumeOf(specificVolumes, best.values));
+  if (!best || found.stopped !== 'finished')
+    return withoutBound(found, best && best.cost / volumeOf(specificVolumes, best.values));
   let price = best.cost / volumeOf(specificVolumes, best.values);
   let lowerBound = -Infinity;
   let nodes = found.nodes;

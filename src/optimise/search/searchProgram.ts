@@ -79,7 +79,11 @@ export class SearchProgram {
   }
 
   #sumRows(vi: ViLimits): LinearRow[] {
-    const parts = [vi.weights, vi.weights.map((w, i) => w * vi.index100[i]), vi.weights.map((w, i) => w * vi.index40[i])];
+    const parts = [
+      vi.weights,
+      vi.weights.map((w, i) => w * vi.index100[i]),
+      vi.weights.map((w, i) => w * vi.index40[i]),
+    ];
     return parts.map((part, place) => {
       const used = [...part.keys()].filter((i) => part[i] !== 0);
       return {
@@ -94,7 +98,12 @@ export class SearchProgram {
   #dynamicRows(): LinearRow[] {
     const columns = [this.#columns, this.#columns + 1, this.#columns + 2];
     // Any non-zero pattern: the coefficients are set before the first solve.
-    return Array.from({ length: DYNAMIC_ROWS }, () => ({ lower: -Infinity, upper: Infinity, columns, values: [1, 1, 1] }));
+    return Array.from({ length: DYNAMIC_ROWS }, () => ({
+      lower: -Infinity,
+      upper: Infinity,
+      columns,
+      values: [1, 1, 1],
+    }));
   }
 
   setBounds(column: number, lower: number, upper: number): void {
@@ -174,7 +183,8 @@ export class SearchProgram {
     const magnitude = new Float64Array(this.#columns);
     for (let i = 0; i < vi.weights.length; i++) {
       pull[i] = vi.weights[i] * (sums[0] + sums[1] * vi.index100[i] + sums[2] * vi.index40[i]);
-      magnitude[i] = vi.weights[i] * (sizes[0] + sizes[1] * Math.abs(vi.index100[i]) + sizes[2] * Math.abs(vi.index40[i]));
+      magnitude[i] =
+        vi.weights[i] * (sizes[0] + sizes[1] * Math.abs(vi.index100[i]) + sizes[2] * Math.abs(vi.index40[i]));
     }
     return { pull, magnitude };
   }

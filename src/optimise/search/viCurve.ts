@@ -48,7 +48,8 @@ export class ViCurve {
   /** An upper bound of G'' over a part of a piece; 0 where the part is shown to be concave. */
   convexity(piece: number, from: number, to: number): number {
     const { index, vi } = this;
-    if (!index.curvature) throw new RangeError('This blending index has no curvature: a viscosity index cannot be searched.');
+    if (!index.curvature)
+      throw new RangeError('This blending index has no curvature: a viscosity index cannot be searched.');
     const bounds = viKv40Bounds(vi, piece, from, to);
     if (!bounds) return GREATEST_CONVEXITY;
     const low = viKv40(vi, piece, from);
@@ -128,6 +129,7 @@ export function viCurve(index: BlendingIndex, vi: number): ViCurve {
   const found = known.get(vi) ?? new ViCurve(index, vi);
   known.delete(vi);
   known.set(vi, found);
-  if (known.size > MOST_CURVES) for (const oldest of [...known.keys()].slice(0, known.size - MOST_CURVES)) known.delete(oldest);
+  if (known.size > MOST_CURVES)
+    for (const oldest of [...known.keys()].slice(0, known.size - MOST_CURVES)) known.delete(oldest);
   return found;
 }

@@ -1,5 +1,5 @@
 import { TABLE_H, TABLE_L, TABLE_Y } from '../../property/d2270Table1';
-import { basicValuesAboveTable, highIndexExponent, tableRow, TABLE_END_KV100 } from '../../property/viscosityIndex';
+import { basicValuesAboveTable, highIndexExponent, TABLE_END_KV100, tableRow } from '../../property/viscosityIndex';
 
 /**
  * KV40 at a given viscosity index, U_r(Y), on the pieces where ASTM D2270 gives it in closed form: between the knots
@@ -102,5 +102,8 @@ export function viKv40Bounds(
   if (!(qLeast > 0)) return undefined;
   const dqMost = a.H.second / a.H.value - hLeast * hLeast + k / (from * from);
   const leastValue = a.H.value / to ** k;
-  return { leastSlope: leastValue * qLeast, greatestCurvature: qMost + (dqMost > 0 ? dqMost / qLeast : dqMost / qMost) };
+  return {
+    leastSlope: leastValue * qLeast,
+    greatestCurvature: qMost + (dqMost > 0 ? dqMost / qLeast : dqMost / qMost),
+  };
 }
