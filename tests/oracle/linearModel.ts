@@ -79,7 +79,7 @@ export class LinearModel {
       const sum = (places: number[]): [number, number][] => places.map((i) => [n + i, 1]);
       if (choices.most !== undefined)
         all.push({ values: sum(stocks.map((_, i) => i)), lower: -Infinity, upper: choices.most });
-      for (const { members, max } of choices.counts) all.push({ values: sum(members), lower: -Infinity, upper: max });
+      for (const { members, min, max } of choices.counts) all.push({ values: sum(members), lower: min, upper: max });
       for (const { from, members } of choices.excludes) {
         for (const other of members) all.push({ values: sum([from, other]), lower: -Infinity, upper: 1 });
       }

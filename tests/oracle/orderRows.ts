@@ -30,7 +30,7 @@ export interface OrderRows {
   window: { low: number; high: number };
   choices: {
     most?: number;
-    counts: { members: number[]; max: number }[];
+    counts: { members: number[]; min: number; max: number }[];
     excludes: { from: number; members: number[] }[];
   };
   /** Specific volumes [L/kg], for costs per m³. */

@@ -56,8 +56,9 @@ export function applyShares(order: Order, built: OrderRows): void {
       const to = stocks.map((stock) => inSet(stock, rule.to));
       built.rows.push(...shareRows(name, members, to, rule.min, rule.max));
     } else if (rule.kind === 'count') {
-      if (rule.min !== undefined) throw new Error('The oracle does not read "at least so many of a set".');
-      if (rule.max !== undefined) built.choices.counts.push({ members: places, max: rule.max });
+      built.choices.counts.push({ members: places, min: rule.min ?? 0, max: rule.max ?? places.length });
+      // "At least so many" needs a share from which on a stock counts: a ten-thousandth.
+      if ((rule.min ?? 0) > 0) for (const i of places) built.least[i] = Math.max(built.least[i], 1e-4);
     } else {
       const from = stocks.findIndex((stock) => stock.id === rule.stockId);
       if (from >= 0) built.choices.excludes.push({ from, members: places.filter((i) => i !== from) });

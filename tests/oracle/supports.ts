@@ -6,7 +6,7 @@ function allowed({ choices, lower, upper, least }: OrderRows, used: readonly boo
   const count = (places: readonly number[]) => places.filter((i) => used[i]).length;
   if (used.some((u, i) => (!u && lower[i] > 0) || (u && Math.max(lower[i], least[i]) > upper[i]))) return false;
   if (choices.most !== undefined && used.filter(Boolean).length > choices.most) return false;
-  if (choices.counts.some(({ members, max }) => count(members) > max)) return false;
+  if (choices.counts.some(({ members, min, max }) => count(members) > max || count(members) < min)) return false;
   return choices.excludes.every(({ from, members }) => !used[from] || count(members) === 0);
 }
 

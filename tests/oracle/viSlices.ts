@@ -23,7 +23,7 @@ interface Sampled {
 
 /** Samples of G over a slice that lies within one piece of D2270. */
 function sample(vi: number, slice: Slice, index: (kv: number) => number): Sampled {
-  const above = slice.low >= 70;
+  const above = slice.high > 70;
   const u: number[] = [];
   const g: number[] = [];
   const uLow = index(slice.low);
@@ -83,6 +83,8 @@ export function startingSlices(order: OrderRows): Slice[] {
   const to = Math.min(order.window.high, thickest(order));
   if (!(from <= to)) return [];
   const cuts = breakpoints(from, to);
+  // At 70 itself the table still holds: a window that begins there begins with a slice of no width.
+  if (from === 70 && to > 70) cuts.unshift(70);
   return cuts.slice(1).map((cut, k) => ({ low: cuts[k], high: cut }));
 }
 

@@ -28,7 +28,11 @@ function viscosityAt(parts: readonly Part[], celsius: number, rule: string): num
 export function mixValue(order: Order, parts: readonly Part[], limit: Limit): number {
   const rule = order.viscosityRule ?? 'wright';
   if (limit.property === 'kv') return viscosityAt(parts, limit.celsius ?? 100, rule);
-  if (limit.property === 'vi') return viOf(viscosityAt(parts, 40, rule), viscosityAt(parts, 100, rule));
+  if (limit.property === 'vi') {
+    const kv100 = viscosityAt(parts, 100, rule);
+    // A mix on the lower end of D2270 may lie a rounding below it.
+    return viOf(viscosityAt(parts, 40, rule), kv100 < 2 && kv100 > 2 - 1e-9 ? 2 : kv100);
+  }
   const { basis, toIndex, fromIndex } = INDEX_RULES[limit.property];
   let weight = 0;
   let sum = 0;

@@ -32,3 +32,19 @@ test('discrete rules: status and cost as by trying every set of stocks', async (
   expect(found).toEqual([]);
   expect(solved).toBeGreaterThan(15);
 });
+
+test('at least so many stocks of a set: as by trying every set of stocks', async () => {
+  const found: string[] = [];
+  let solved = 0;
+  for (const seed of seeds(20, 2001)) {
+    const order = randomOrder(seed, { ...DISCRETE, stocks: [4, 6] });
+    const stockIds = order.stocks.slice(0, 3).map((stock) => stock.id);
+    order.shares = [...(order.shares ?? []), { kind: 'count', set: { stockIds }, min: 2 }];
+    const answer = enumerateSupports(order);
+    if (answer.status === 'solved') solved++;
+    const entry = caseOf(`seed ${seed}`, order, answer);
+    if (entry) found.push(...(await disagreements(solveBlend, [entry])));
+  }
+  expect(found).toEqual([]);
+  expect(solved).toBeGreaterThan(5);
+});

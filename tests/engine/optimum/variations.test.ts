@@ -115,3 +115,45 @@ test('a stock in whole drums: as by trying every number of drums', async () => {
   }
   await expectAgreement(cases);
 });
+
+/** Cost and penalty of an aim on Noack [% m/m], whose reporting unit is 0.1. */
+function withPenalty(cost: number, noack: number, aim: number, weight: number): number {
+  return cost + (weight * Math.abs(noack - aim)) / 0.1;
+}
+
+// Second way: the limit held at each of many values in turn, and the penalty added by hand.
+test('an aim weighs its deviation against the cost', async () => {
+  let pulled = 0;
+  for (const seed of seeds(14, 17_001)) {
+    const draw = new Draw(seed);
+    const order = randomOrder(seed, { ...CONTINUOUS, stocks: [3, 8], rules: false });
+    const plain = sliceSearch(order);
+    if (plain.status !== 'solved') continue;
+    const figures = order.stocks.map((stock) => stock.figures.find((f) => f.property === 'noack')?.value ?? 0);
+    const shares = order.stocks.map(
+      (stock) => plain.recipe.find((line) => line.stockId === stock.id)?.massFraction ?? 0,
+    );
+    const aim = Math.max(0, figures.reduce((sum, figure, i) => sum + figure * shares[i], 0) + draw.between(-2, 2));
+    const weight = draw.ratio(0.2, 20);
+    const outcome = await solveBlend({
+      ...order,
+      limits: [...order.limits, { property: 'noack', aim, aimWeight: weight }],
+    });
+    const cost = outcome.costPerTonne ?? Number.NaN;
+    const noack = outcome.properties?.properties.find((p) => p.property === 'noack')?.value ?? Number.NaN;
+    const worth = withPenalty(cost, noack, aim, weight);
+    expect(outcome.proof.kind, `seed ${seed}`).toBe('least cost');
+    expect(outcome.proof.lowerBound, `seed ${seed}`).toBeLessThanOrEqual(worth * (1 + 1e-9));
+    expect(outcome.proof.lowerBound, `seed ${seed}`).toBeGreaterThan(worth * (1 - 5e-6));
+    for (let k = 0; k <= 20; k++) {
+      const at = Math.min(...figures) + ((Math.max(...figures) - Math.min(...figures)) * k) / 20;
+      const held = sliceSearch({ ...order, limits: [...order.limits, { property: 'noack', min: at, max: at }] });
+      if (held.status !== 'solved') continue;
+      expect(worth, `seed ${seed}: better at ${at}`).toBeLessThanOrEqual(
+        withPenalty(held.cost, at, aim, weight) * (1 + 5e-6),
+      );
+    }
+    if (cost > plain.cost * (1 + 1e-5)) pulled++;
+  }
+  expect(pulled).toBeGreaterThan(2);
+});
