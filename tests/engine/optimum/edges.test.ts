@@ -4,7 +4,7 @@ import { Draw } from '../../oracle/mulberry32';
 import { CONTINUOUS, randomOrder } from '../../oracle/randomOrder';
 import { sliceSearch } from '../../oracle/sliceSearch';
 import { kv40OfVi } from '../../oracle/viscosityIndex';
-import { type Case, caseOf, disagreements, seeds } from './judge';
+import { caseOf, disagreements, seeds } from './judge';
 
 // Second way throughout: the slice search of tests/oracle.
 
