@@ -1,5 +1,5 @@
 import { PROPERTY_TABLE, propertyDefinition } from '../property/propertyTable';
-import { LEAST_KV100_FOR_VI, viscosityIndex } from '../property/viscosityIndex';
+import { hasViscosityIndex, viscosityIndex } from '../property/viscosityIndex';
 import { VISCOSITY_RULES } from '../property/viscosityRule';
 import { isBaseOil } from '../stock/family';
 import type { Recipe, Stock } from '../stock/stock';
@@ -36,6 +36,7 @@ function partsOf(stocks: readonly Stock[], recipe: Recipe): Part[] {
   for (const { stockId, massFraction } of recipe) {
     const stock = byId.get(stockId);
     if (!stock) throw new RangeError(`The recipe names a stock "${stockId}" that is not in the list.`);
+    if (parts.some((part) => part.stock.id === stockId)) throw new RangeError(`The recipe names ${stock.name} twice.`);
     if (!(massFraction >= 0)) throw new RangeError(`The share of ${stock.name} must be zero or more.`);
     sum += massFraction;
     if (massFraction > 0) parts.push({ stock, massFraction });
@@ -78,14 +79,10 @@ function viscosityIndexOf(kv40: PredictedProperty, kv100: PredictedProperty): Pr
     asTheRest: union('asTheRest'),
     estimatedFrom: union('estimatedFrom'),
   };
-  const defined =
-    kv40.value !== undefined &&
-    kv100.value !== undefined &&
-    kv100.value >= LEAST_KV100_FOR_VI &&
-    kv40.value > kv100.value;
-  return defined && kv40.value !== undefined && kv100.value !== undefined
-    ? { ...result, value: viscosityIndex(kv40.value, kv100.value) }
-    : result;
+  const { value: u } = kv40;
+  const { value: y } = kv100;
+  const defined = u !== undefined && y !== undefined && hasViscosityIndex(u, y);
+  return defined ? { ...result, value: viscosityIndex(u, y) } : result;
 }
 
 function predictOne(parts: readonly Part[], at: PropertyAt, options: PredictionOptions): PredictedProperty {

@@ -10,7 +10,7 @@ import type { PredictionOptions, PropertyAt } from './predictionOptions';
 export type StockValue =
   | { state: 'known'; value: number; estimated: boolean }
   | { state: 'as the rest' }
-  | { state: 'unknown'; missing: PropertyAt; message: string };
+  | { state: 'unknown'; missing: PropertyAt; message: string; outOfRange?: true };
 
 /** A property in words, "Kinematic viscosity at 40 °C". */
 export function propertyInWords({ property, celsius }: PropertyAt, options: PredictionOptions = {}): string {
@@ -79,13 +79,7 @@ function viscosityValue(stock: Stock, celsius: number, options: PredictionOption
   }
 }
 
-/**
- * The value of a property of a stock, in the unit of the property table: the figure itself; for viscosities at
- * other temperatures the D341 line through the measured ones; for pour points in an order with depressant the
- * figure "with depressant", else the neat one (a depressant does not raise a pour point).
- */
-export function stockValue(stock: Stock, { property, celsius }: PropertyAt, options: PredictionOptions): StockValue {
-  if (property === 'kv') return viscosityValue(stock, celsius ?? 100, options);
+function tableValue(stock: Stock, { property, celsius }: PropertyAt, options: PredictionOptions): StockValue {
   if (property === 'pourPoint' && options.depressant) {
     const depressed = findFigure(stock, 'pourPointDepressed');
     const value = depressed && known(depressed);
@@ -93,4 +87,26 @@ export function stockValue(stock: Stock, { property, celsius }: PropertyAt, opti
   }
   const figure = findFigure(stock, property, celsius);
   return (figure && known(figure)) ?? unknown(stock, { property, celsius }, options);
+}
+
+/** A figure that cannot be right counts as unknown, with the reason. */
+function inSense(stock: Stock, at: PropertyAt, found: StockValue, options: PredictionOptions): StockValue {
+  const definition = propertyDefinition(at.property, options.ownProperties);
+  if (found.state !== 'known' || !definition) return found;
+  const { sense, unit } = definition;
+  if (found.value >= sense.min && found.value <= sense.max) return found;
+  const what = propertyInWords(at, options);
+  const message = `${stock.name}: ${what} of ${found.value} ${unit} cannot be right. Check the figure.`;
+  return { state: 'unknown', missing: at, message, outOfRange: true };
+}
+
+/**
+ * The value of a property of a stock, in the unit of the property table: the figure itself; for viscosities at
+ * other temperatures the D341 line through the measured ones; for pour points in an order with depressant the
+ * figure "with depressant", else the neat one (a depressant does not raise a pour point).
+ */
+export function stockValue(stock: Stock, at: PropertyAt, options: PredictionOptions): StockValue {
+  const found =
+    at.property === 'kv' ? viscosityValue(stock, at.celsius ?? 100, options) : tableValue(stock, at, options);
+  return inSense(stock, at, found, options);
 }

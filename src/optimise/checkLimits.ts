@@ -11,11 +11,11 @@ const ON_LIMIT = 1e-3;
 /** The value of a property (at a temperature) of the mix at hand; undefined where it is unknown. */
 export type ValueOf = (property: string, celsius: number | undefined) => number | undefined;
 
-function checkLimit(order: Order, limit: Limit, place: number, valueOf: ValueOf): LimitCheck | undefined {
+function checkLimit(order: Order, limit: Limit, place: number, valueAt: ValueOf): LimitCheck | undefined {
   const definition = limitDefinition(limit, order);
   if (!definition) return undefined;
   const celsius = limitCelsius(limit, definition);
-  const value = valueOf(definition.id, celsius) ?? Number.NaN;
+  const value = valueAt(definition.id, celsius) ?? Number.NaN;
   const ends = limitEnds(limit, definition);
   const room = Math.min(value - (ends.min ?? -Infinity), (ends.max ?? Infinity) - value);
   return {
@@ -31,8 +31,8 @@ function checkLimit(order: Order, limit: Limit, place: number, valueOf: ValueOf)
 }
 
 /** Holds every limit of an order against a mix, in physical units. */
-export function checkLimits(order: Order, valueOf: ValueOf): LimitCheck[] {
-  return order.limits.flatMap((limit, place) => checkLimit(order, limit, place, valueOf) ?? []);
+export function checkLimits(order: Order, valueAt: ValueOf): LimitCheck[] {
+  return order.limits.flatMap((limit, place) => checkLimit(order, limit, place, valueAt) ?? []);
 }
 
 /** A limit in words, "Noack volatility". */

@@ -16,7 +16,7 @@ export interface Proof {
   kind: 'least cost' | 'within gap' | 'impossible' | 'impossible with known figures' | 'none';
   /** Proven lower bound of the cost (plus aim penalty), currency per tonne, or per m³ where the order says so. */
   lowerBound?: number;
-  /** (cost - lowerBound) / |cost| [-]. */
+  /** (cost - lowerBound) / |cost| [-]; near a cost of zero, on a thousandth of the greatest price. */
   gap?: number;
 }
 

@@ -1,5 +1,5 @@
 import { blendValue } from '../blend/blendValue';
-import { LEAST_KV100_FOR_VI, viscosityIndex } from '../property/viscosityIndex';
+import { hasViscosityIndex, viscosityIndex } from '../property/viscosityIndex';
 import type { Recipe } from '../stock/stock';
 import { checkLimits } from './checkLimits';
 import type { Order } from './order';
@@ -44,7 +44,7 @@ function valueOfShares(candidates: Candidates, shares: Float64Array) {
     if (property === 'vi') {
       const kv40 = viscosity(40);
       const kv100 = viscosity(100);
-      return kv100 >= LEAST_KV100_FOR_VI && kv40 > kv100 ? viscosityIndex(kv40, kv100) : undefined;
+      return hasViscosityIndex(kv40, kv100) ? viscosityIndex(kv40, kv100) : undefined;
     }
     const quantity = candidates.quantities.get(
       quantityKey(celsius === undefined ? { property } : { property, celsius }),

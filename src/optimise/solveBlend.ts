@@ -14,6 +14,7 @@ import { buildModel } from './rows/buildModel';
 import { type Candidates, findCandidates, neededProperties, predictionOptions } from './rows/candidates';
 import type { SearchModel } from './rows/searchModel';
 import type { SearchResult } from './search/branchAndBound';
+import { gapReference } from './search/gapReference';
 import { leastCostPerCubicMetre, leastCostPerTonne } from './search/leastCost';
 import { type ResolvedOptions, resolveOptions, type SolveOptions } from './solveOptions';
 import { validateOrder } from './validateOrder';
@@ -77,7 +78,7 @@ function outcomeOf(
   const { leftOut } = candidates;
   const base = {
     stopped: found.stopped,
-    proof: proofOf(found, leftOut, options.relativeGap),
+    proof: proofOf(found, model, leftOut, options.relativeGap),
     leftOut,
     problems: [],
     work: { nodes: found.nodes, linearPrograms: found.linearPrograms, milliseconds },
@@ -108,7 +109,7 @@ function outcomeOf(
   };
 }
 
-function proofOf(found: SearchResult, leftOut: readonly LeftOut[], relativeGap: number): Proof {
+function proofOf(found: SearchResult, model: SearchModel, leftOut: readonly LeftOut[], relativeGap: number): Proof {
   const { best, lowerBound } = found;
   if (!best) {
     if (lowerBound === Infinity) {
@@ -118,7 +119,8 @@ function proofOf(found: SearchResult, leftOut: readonly LeftOut[], relativeGap: 
     return Number.isFinite(lowerBound) ? { kind: 'none', lowerBound } : { kind: 'none' };
   }
   if (!Number.isFinite(lowerBound)) return { kind: 'none' };
-  const gap = best.cost === lowerBound ? 0 : (best.cost - lowerBound) / Math.abs(best.cost);
+  const missing = best.cost - lowerBound;
+  const gap = missing > 0 ? missing / gapReference(best.cost, model.cost) : 0;
   // A part closed at the cut-off lies one rounding beyond the gap asked for.
   return { kind: gap <= relativeGap * (1 + 1e-6) + 1e-12 ? 'least cost' : 'within gap', lowerBound, gap };
 }

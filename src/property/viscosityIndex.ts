@@ -52,6 +52,11 @@ export function basicValues(kv100: number): BasicValues {
   };
 }
 
+/** True where D2270 defines an index: KV100 of at least 2 mm²/s, and KV40 [mm²/s] above KV100. */
+export function hasViscosityIndex(kv40: number, kv100: number): boolean {
+  return kv100 >= LEAST_KV100_FOR_VI && kv40 > kv100 && Number.isFinite(kv40);
+}
+
 /**
  * Viscosity index [-], unrounded (the standard reports whole numbers).
  * Throws RangeError where KV100 is below 2 mm²/s, or KV40 is not above KV100.

@@ -1,6 +1,5 @@
 import { type BlendQuantity, blendQuantity } from '../../blend/blendQuantity';
 import type { PredictionOptions, PropertyAt } from '../../blend/predictionOptions';
-import { propertyInWords } from '../../blend/stockValue';
 import { propertyDefinition } from '../../property/propertyTable';
 import type { Stock } from '../../stock/stock';
 import type { Order } from '../order';
@@ -59,31 +58,12 @@ export function isCompulsory(order: Order, stockId: string): boolean {
 }
 
 /** Why a stock cannot serve for one property, if it cannot. */
-function obstacle(
-  stock: Stock,
-  quantity: BlendQuantity,
-  place: number,
-  options: PredictionOptions,
-): LeftOut | undefined {
+function obstacle(stock: Stock, quantity: BlendQuantity, place: number): LeftOut | undefined {
   const term = quantity.terms[place];
-  const where = quantity.celsius === undefined ? {} : { celsius: quantity.celsius };
-  if (term.state === 'unknown') {
-    const { missing, message } = term;
-    return { stockId: stock.id, name: stock.name, reason: 'unknown figure', ...missing, message };
-  }
-  if (term.state !== 'term') return undefined;
-  const { sense } = quantity.definition;
-  if (term.value >= sense.min && term.value <= sense.max && Number.isFinite(term.index)) return undefined;
-  const what = propertyInWords(quantity, options);
-  const message = `${stock.name}: ${what} of ${term.value} ${quantity.definition.unit} cannot be right. Check the figure.`;
-  return {
-    stockId: stock.id,
-    name: stock.name,
-    reason: 'figure out of range',
-    property: quantity.property,
-    ...where,
-    message,
-  };
+  if (term.state !== 'unknown') return undefined;
+  const { missing, message, outOfRange } = term;
+  const reason = outOfRange ? 'figure out of range' : 'unknown figure';
+  return { stockId: stock.id, name: stock.name, reason, ...missing, message };
 }
 
 /** Viscosity must fall as temperature rises, whatever the blending rule. */
@@ -121,12 +101,11 @@ function whyLeftOut(
   place: number,
   order: Order,
   quantities: ReadonlyMap<string, BlendQuantity>,
-  options: PredictionOptions,
 ): LeftOut | undefined {
   const flag = missingFlag(stock, order);
   if (flag) return flag;
   for (const quantity of quantities.values()) {
-    const found = obstacle(stock, quantity, place, options);
+    const found = obstacle(stock, quantity, place);
     if (found) return found;
   }
   return risingViscosity(stock, quantities.get('kv@40'), quantities.get('kv@100'), place);
@@ -153,7 +132,7 @@ export function findCandidates(order: Order): Candidates {
   const leftOut: LeftOut[] = [];
   const kept: number[] = [];
   all.forEach((stock, place) => {
-    const reason = whyLeftOut(stock, place, order, everyQuantity, options);
+    const reason = whyLeftOut(stock, place, order, everyQuantity);
     if (reason) leftOut.push(reason);
     else kept.push(place);
   });

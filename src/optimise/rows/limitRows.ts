@@ -44,8 +44,8 @@ function addAim(builder: ModelBuilder, limit: Limit, place: number, quantity: Bl
   builder.addRow({ kind: 'limit', limit: place, end: 'aim' }, 0, 0, [...entries, [over, -1], [under, 1]]);
 }
 
-function outOfDomain(quantity: BlendQuantity, value: number | undefined): boolean {
-  return value !== undefined && !Number.isFinite(quantity.index.toIndex(value));
+function outOfDomain({ index }: BlendQuantity, value: number | undefined): boolean {
+  return value !== undefined && !(value >= index.domain.min && value <= index.domain.max);
 }
 
 function addLimit(

@@ -1,7 +1,8 @@
 import type { LinearEngine } from '../linear/linearEngine';
 import type { SearchModel } from '../rows/searchModel';
 import type { ResolvedOptions } from '../solveOptions';
-import { BranchAndBound, type RecipeCheck, type SearchResult } from './branchAndBound';
+import { BranchAndBound, type SearchResult } from './branchAndBound';
+import type { RecipeCheck } from './recipeFinder';
 
 /** Least cost per tonne: one search. */
 export function leastCostPerTonne(

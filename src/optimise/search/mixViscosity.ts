@@ -1,4 +1,4 @@
-import { LEAST_KV100_FOR_VI, viscosityIndex } from '../../property/viscosityIndex';
+import { hasViscosityIndex, LEAST_KV100_FOR_VI, viscosityIndex } from '../../property/viscosityIndex';
 import type { ViLimits } from '../rows/searchModel';
 
 /** Viscosities of a mix, and by how many points it misses the limits on the viscosity index (0: it keeps them). */
@@ -21,8 +21,10 @@ export function mixViscosity(vi: ViLimits, values: ArrayLike<number>): MixViscos
   }
   const kv40 = vi.index.fromIndex(sum40 / weight);
   const kv100 = vi.index.fromIndex(sum100 / weight);
-  if (!(kv100 >= LEAST_KV100_FOR_VI * (1 - 1e-12)) || !(kv40 > kv100)) return { kv40, kv100, missed: Infinity };
-  const found = viscosityIndex(kv40, Math.max(kv100, LEAST_KV100_FOR_VI));
+  // A mix held at the lower end of the standard may lie a rounding below it.
+  const defined = Math.max(kv100, kv100 > LEAST_KV100_FOR_VI * (1 - 1e-12) ? LEAST_KV100_FOR_VI : 0);
+  if (!hasViscosityIndex(kv40, defined)) return { kv40, kv100, missed: Infinity };
+  const found = viscosityIndex(kv40, defined);
   const missed = Math.max(0, (vi.min?.value ?? -Infinity) - found, found - (vi.max?.value ?? Infinity));
   return { kv40, kv100, missed };
 }

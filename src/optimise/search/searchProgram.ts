@@ -1,6 +1,7 @@
 import { viscosityIndex } from '../../property/viscosityIndex';
 import type { LinearEngine, LinearProgram, LinearResult, LinearRow, LinearSession } from '../linear/linearEngine';
 import type { SearchModel, ViLimits } from '../rows/searchModel';
+import type { Box } from './box';
 import { type ExtraTerms, priceOut, safeBound } from './safeBound';
 import type { Line } from './viLine';
 import { knot, pieceOf, viKv40 } from './viPieces';
@@ -111,6 +112,18 @@ export class SearchProgram {
     this.lower[column] = lower;
     this.upper[column] = upper;
     this.#session.setColumnBounds(column, lower, upper);
+  }
+
+  setBox({ lower, upper }: Box): void {
+    for (let column = 0; column < lower.length; column++) this.setBounds(column, lower[column], upper[column]);
+  }
+
+  /** Keeps columns that sit on their lower bound there, but for the ones named idle. */
+  holdColumns(values: Float64Array, idle: readonly boolean[]): void {
+    idle.forEach((isIdle, column) => {
+      const onLower = values[column] <= this.lower[column] + 1e-9;
+      if (!isIdle && onLower) this.setBounds(column, this.lower[column], this.lower[column]);
+    });
   }
 
   #setDynamic(row: number, coefficients: readonly [number, number, number] | undefined, upperSide: boolean): void {

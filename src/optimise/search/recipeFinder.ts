@@ -1,0 +1,134 @@
+import type { LinearResult } from '../linear/linearEngine';
+import type { ModelRow, SearchModel, ViLimits } from '../rows/searchModel';
+import type { Box } from './box';
+import { keepsPresences, keepsWholeLots, roundedBounds } from './discreteChoices';
+import { mixViscosity } from './mixViscosity';
+import type { SearchProgram, ShadowPrices } from './searchProgram';
+import { innerRows, isNarrow, type Kv100Interval, NEAR, outerRows, tangentRows } from './viRows';
+
+export type Solution = Extract<LinearResult, { status: 'optimal' }>;
+
+/** Accepts shares as a recipe: the exact check in physical units. */
+export type RecipeCheck = (values: Float64Array) => boolean;
+
+/** The cheapest recipe so far. `tied`: a stock could come in, or go, at no change in cost. */
+interface Best {
+  values: Float64Array;
+  cost: number;
+  tied: boolean;
+}
+
+/** A viscosity index that misses its limit by less than this many points is on it. */
+const ON_LIMIT = 1e-7;
+/** Rounds of moving the tangent to where the solution goes. */
+const MOST_TANGENTS = 4;
+/** Prices of this many latest solves are kept to bound other parts with. */
+const MOST_PRICES = 3;
+
+/** Finds recipes near solutions of the relaxed program, keeps the cheapest, and the prices around it. */
+export class RecipeFinder {
+  readonly #program: SearchProgram;
+  readonly #model: SearchModel;
+  readonly #rows: readonly ModelRow[];
+  readonly #isRecipe: RecipeCheck;
+  best: Best | undefined;
+  /** Prices of the latest solves near a recipe, newest first. */
+  readonly prices: ShadowPrices[] = [];
+
+  constructor(program: SearchProgram, presenceRows: readonly ModelRow[], isRecipe: RecipeCheck) {
+    this.#program = program;
+    this.#model = program.model;
+    this.#rows = presenceRows;
+    this.#isRecipe = isRecipe;
+  }
+
+  /** Takes a solution that keeps every choice and limit, if it is a recipe; true where it is one. */
+  take({ values, duals }: Solution): boolean {
+    if (!this.#isSettledBy(values) || !this.#isRecipe(values)) return false;
+    const cost = this.#costOf(values);
+    if (this.best && cost >= this.best.cost) return true;
+    const tied = this.#program.idleColumns(values, duals).includes(true);
+    this.best = { values: Float64Array.from(values), cost, tied };
+    return true;
+  }
+
+  /** Looks for a recipe near a solution: choices rounded, KV100 close by, the curve's own line in place of the outer one. */
+  tryNear(values: Float64Array, interval: Kv100Interval | undefined): void {
+    const { vi } = this.#model;
+    if (!this.#settleChoices(values)) return;
+    if (vi && interval) this.#program.setViRows(innerRows(vi, interval, this.#followTangents(vi, interval, values)));
+    const result = this.#program.solve();
+    if (result.status === 'optimal' && this.take(result)) this.#remember(result.duals);
+  }
+
+  /**
+   * Among recipes of the proven cost the same one is always taken, the one of least rank sum: only columns that cost
+   * nothing to move may move, so that no trace of a dearer stock slips in under the ceiling.
+   */
+  chooseAmongEquals(box: Box, interval: Kv100Interval | undefined): void {
+    const { best } = this;
+    const { vi, stocks, cost } = this.#model;
+    if (!best?.tied) return;
+    this.#program.setBox(box);
+    if (!this.#settleChoices(best.values)) return;
+    if (vi && interval) this.#program.setViRows(innerRows(vi, interval, mixViscosity(vi, best.values).kv100));
+    const again = this.#program.solve();
+    if (again.status !== 'optimal') return;
+    this.#program.holdColumns(again.values, this.#program.idleColumns(again.values, again.duals));
+    const ranks = Float64Array.from(cost, (_, column) => (column < stocks.length ? 1 + column / stocks.length : 0));
+    const result = this.#program.solveForTie(ranks, best.cost);
+    if (result.status !== 'optimal' || !this.#isSettledBy(result.values) || !this.#isRecipe(result.values)) return;
+    const found = this.#costOf(result.values);
+    const isEqual = found <= best.cost + 1e-9 * Math.abs(best.cost);
+    if (isEqual) this.best = { ...best, values: Float64Array.from(result.values), cost: found };
+  }
+
+  #isSettledBy(values: Float64Array): boolean {
+    const { vi } = this.#model;
+    if (!keepsPresences(this.#model, this.#rows, values) || !keepsWholeLots(this.#model, values)) return false;
+    return !vi || mixViscosity(vi, values).missed <= ON_LIMIT;
+  }
+
+  #costOf(values: Float64Array): number {
+    return this.#model.cost.reduce((sum, price, column) => sum + price * values[column], 0);
+  }
+
+  /** Puts rounded discrete choices into the program; false where they leave nothing. */
+  #settleChoices(values: Float64Array): boolean {
+    const { lower, upper } = this.#program;
+    const bounds = roundedBounds(this.#model, this.#rows, values, lower, upper);
+    if (bounds.some((bound) => bound.lower > bound.upper)) return false;
+    for (const bound of bounds) this.#program.setBounds(bound.column, bound.lower, bound.upper);
+    return true;
+  }
+
+  /** Moves the tangent of the curve to where the solution goes, until it stays: KV100 of a recipe worth trying. */
+  #followTangents(vi: ViLimits, interval: Kv100Interval, values: Float64Array): number {
+    let { kv100 } = mixViscosity(vi, values);
+    if (!vi.min || isNarrow(interval)) return kv100;
+    for (let round = 0; round < MOST_TANGENTS; round++) {
+      this.#program.setViRows(tangentRows(vi, interval, kv100));
+      const result = this.#program.solve();
+      if (result.status !== 'optimal') return kv100;
+      const next = mixViscosity(vi, result.values).kv100;
+      const moved = Math.abs(next / kv100 - 1);
+      kv100 = next;
+      if (moved > NEAR / 2) continue;
+      this.#remember(result.duals);
+      break;
+    }
+    return kv100;
+  }
+
+  #remember(duals: Float64Array): void {
+    this.prices.unshift(this.#program.pricesOf(duals));
+    this.prices.length = Math.min(this.prices.length, MOST_PRICES);
+  }
+}
+
+/** Sets the program to a part: its box, and the outer rows of its interval. */
+export function loadPart(program: SearchProgram, box: Box, interval: Kv100Interval | undefined): void {
+  const { vi } = program.model;
+  program.setBox(box);
+  if (vi && interval) program.setViRows(outerRows(vi, interval));
+}
