@@ -1,0 +1,93 @@
+import { useId } from 'react';
+import type { Product } from '../../src';
+import { classNames } from '../parts/classNames';
+import { CellEditor } from './CellEditor';
+import type { CellView, Column } from './column';
+import type { Place } from './gridKeys';
+import styles from './StocksTable.module.css';
+import type { Editing, GridActions } from './useGrid';
+
+const MARKS: Partial<Record<NonNullable<CellView['state']>, { sign: string; words: string }>> = {
+  soft: { sign: '≈', words: 'estimated or assumed' },
+  'in-blend': { sign: '•', words: 'in-blend value' },
+};
+
+/** One cell of the table: its figure with its standing, or the field it is typed in. */
+export function StockCell({
+  product,
+  column,
+  place,
+  chosen,
+  tabbable,
+  editing,
+  missing,
+  flip,
+  grid,
+}: {
+  product: Product;
+  column: Column;
+  place: Place;
+  chosen: boolean;
+  tabbable: boolean;
+  editing: Editing | undefined;
+  /** Why the order on screen cannot use the stock, where this cell would help. */
+  missing: string | undefined;
+  /** Messages go above the cell, or to its left end, where there is no room. */
+  flip: { up: boolean; left: boolean };
+  grid: GridActions;
+}) {
+  const id = useId();
+  const view = column.read(product);
+  const said = view.problem ?? missing ?? view.caution;
+  const isHead = column.id === 'name';
+  const Cell = isHead ? 'th' : 'td';
+  const mark = view.state && MARKS[view.state];
+  return (
+    <Cell
+      scope={isHead ? 'row' : undefined}
+      role={isHead ? 'rowheader' : 'gridcell'}
+      tabIndex={editing ? -1 : tabbable ? 0 : -1}
+      data-chosen={chosen || undefined}
+      aria-readonly={!column.write || column.locked?.(product) ? true : undefined}
+      aria-invalid={view.problem ? true : undefined}
+      aria-describedby={said && chosen ? `${id}-said` : undefined}
+      title={[said, view.title, column.locked?.(product)].filter(Boolean).join('. ') || undefined}
+      className={classNames(
+        styles.cell,
+        styles[column.kind],
+        isHead && styles.name,
+        view.state && styles[view.state],
+        view.problem ? styles.invalid : said && styles.cautioned,
+        editing && styles.editing,
+      )}
+      onClick={() => !editing && grid.choose(place, product, column)}
+    >
+      {editing ? (
+        <CellEditor product={product} column={column} editing={editing} grid={grid} />
+      ) : (
+        <span className={styles.content}>
+          {mark && (
+            <span className={styles.mark}>
+              <span aria-hidden="true">{mark.sign}</span>
+              <span className="visually-hidden">{mark.words}</span>
+            </span>
+          )}
+          {view.text}
+        </span>
+      )}
+      {said && chosen && (
+        <span
+          id={`${id}-said`}
+          className={classNames(
+            styles.said,
+            flip.up && styles.up,
+            flip.left && styles.left,
+            !view.problem && styles.mild,
+          )}
+        >
+          {said}
+        </span>
+      )}
+    </Cell>
+  );
+}

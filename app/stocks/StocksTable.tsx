@@ -1,0 +1,159 @@
+import { type ClipboardEvent, useCallback, useMemo, useRef, useState } from 'react';
+import type { Product } from '../../src';
+import { Button } from '../parts/Button';
+import { Notice } from '../parts/Notice';
+import { Section } from '../parts/Section';
+import { useAnswer } from '../state/answerStore';
+import { announce, useView } from '../state/viewStore';
+import { useWorkbook } from '../state/workbookStore';
+import { EmptyStocks } from './EmptyStocks';
+import type { Place } from './gridKeys';
+import { isBlock, readBlock } from './pastedBlock';
+import { paste, pastedInWords, planPaste } from './pasteStocks';
+import { recipeShares } from './recipeShares';
+import { StockDetails } from './StockDetails';
+import { StocksGrid } from './StocksGrid';
+import styles from './StocksTable.module.css';
+import { furtherFigures, stockColumns } from './stockColumns';
+import { addStock, duplicateStock, removeStock, setUse } from './stockEdits';
+import { nextTrouble, troubledCells } from './troubledCells';
+import { useAnswerMarks } from './useAnswerMarks';
+import { useGrid } from './useGrid';
+
+const NONE: ReadonlySet<string> = new Set();
+
+/** The stocks with their figures, edited in place; blocks are pasted from a spreadsheet. */
+export function StocksTable() {
+  const products = useWorkbook(({ workbook }) => workbook.products);
+  const ownProperties = useWorkbook(({ workbook }) => workbook.ownProperties);
+  const currency = useWorkbook(({ workbook }) => workbook.settings.currency);
+  const orderId = useView((view) => view.orderId);
+  const order = useWorkbook(({ workbook }) => workbook.orders.find(({ id }) => id === orderId));
+  const answer = useAnswer(orderId);
+  const recipe = answer.outcome?.recipe;
+
+  const hasOrder = order !== undefined;
+  const further = furtherFigures(products, ownProperties, order).join('|');
+  const columns = useMemo(
+    () => stockColumns(further === '' ? [] : further.split('|'), ownProperties, currency, hasOrder),
+    [further, ownProperties, currency, hasOrder],
+  );
+  const shares = useMemo(() => recipeShares(products, recipe), [products, recipe]);
+  const excludedIds = order?.excludedProductIds;
+  const excluded = useMemo(() => (excludedIds ? new Set(excludedIds) : NONE), [excludedIds]);
+  const missing = useAnswerMarks(products, columns, answer);
+  const troubled = useMemo(() => troubledCells(products, columns), [products, columns]);
+
+  const onUse = useCallback(
+    (product: Product, use: boolean) => orderId !== undefined && setUse(orderId, product, use),
+    [orderId],
+  );
+  const table = useRef<HTMLTableElement>(null);
+  const grid = useGrid(table, products, columns, (product) => onUse(product, excluded.has(product.id)));
+  const { place, goTo } = grid;
+  const product = place && products[place.row];
+  const column = place && columns[place.column];
+
+  const [said, setSaid] = useState<string>();
+
+  function takePaste(text: string) {
+    const block = readBlock(text);
+    if (block.length === 0) return;
+    const words = pastedInWords(paste(planPaste(block, columns, place ?? { row: products.length, column: 0 })));
+    setSaid(words);
+    announce(words);
+  }
+
+  function onPaste(event: ClipboardEvent) {
+    const text = event.clipboardData.getData('text/plain');
+    // One cell goes into the field that is open; a block goes into the table.
+    const inField = event.target instanceof HTMLInputElement || event.target instanceof HTMLTextAreaElement;
+    if ((inField && !isBlock(text)) || !product) return;
+    event.preventDefault();
+    if (grid.editing) grid.actions.revert();
+    takePaste(text);
+  }
+
+  function onCopy(event: ClipboardEvent) {
+    if (grid.editing || !product || !column || !table.current?.contains(event.target as Node)) return;
+    event.clipboardData.setData('text/plain', column.read(product).edit);
+    event.preventDefault();
+  }
+
+  const edit = (to: Place | undefined) => to && goTo(to, {});
+  const nameAt = columns.findIndex(({ id }) => id === 'name');
+  return (
+    <Section
+      title="Stocks"
+      actions={
+        products.length > 0 && (
+          <>
+            <Button tone="quiet" icon="add" onClick={() => edit({ row: addStock(), column: nameAt })}>
+              Add stock
+            </Button>
+            <Button
+              tone="quiet"
+              icon="copy"
+              disabled={!product}
+              onClick={() => product && edit({ row: duplicateStock(product.id) ?? 0, column: nameAt })}
+            >
+              Duplicate
+            </Button>
+            <Button tone="quiet" icon="bin" disabled={!product} onClick={() => product && removeStock(product.id)}>
+              Remove
+            </Button>
+          </>
+        )
+      }
+    >
+      {said && (
+        <Notice className={styles.notice}>
+          {said}{' '}
+          <Button tone="quiet" onClick={() => setSaid(undefined)}>
+            Hide
+          </Button>
+        </Notice>
+      )}
+      {troubled.length > 0 && (
+        <Notice tone="warn" className={styles.notice}>
+          {troubled.length === 1 ? 'One cell needs attention.' : `${troubled.length} cells need attention.`}{' '}
+          <Button tone="quiet" onClick={() => edit(nextTrouble(troubled, place))}>
+            Show the next
+          </Button>
+        </Notice>
+      )}
+      {products.length === 0 ? (
+        <EmptyStocks onPaste={takePaste} onAdd={() => edit({ row: addStock(), column: nameAt })} />
+      ) : (
+        <section className={styles.scroll} aria-label="Table of stocks" onPaste={onPaste} onCopy={onCopy}>
+          <StocksGrid
+            tableRef={table}
+            products={products}
+            columns={columns}
+            shares={shares}
+            excluded={excluded}
+            missing={missing}
+            place={place}
+            editing={grid.editing}
+            grid={grid.actions}
+            onUse={onUse}
+            onKeyDown={grid.onKeyDown}
+            onFocus={grid.onFocus}
+          />
+        </section>
+      )}
+      {product && column && <StockDetails product={product} column={column} ownProperties={ownProperties} />}
+      {products.length > 0 && (
+        <p className={styles.legend}>
+          <span>≈ estimated or assumed</span>
+          <span>• in-blend value</span>
+          <span>rest: takes the value of the rest</span>
+          <span>– unknown</span>
+          <span className={styles.keys}>
+            Type to replace, Enter to edit, arrows to move; paste a block from a spreadsheet.
+          </span>
+        </p>
+      )}
+    </Section>
+  );
+}

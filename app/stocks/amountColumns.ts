@@ -1,0 +1,145 @@
+import type { Product } from '../../src';
+import { formatForEditing, formatNumber, parseNumber } from '../parts/numberText';
+import { environment } from '../state/environment';
+import { type CellView, type Column, dropUnread, keepUnread } from './column';
+
+interface Amount {
+  id: 'pricePerTonne' | 'leastDoseIfUsed' | 'greatestDose' | 'availableTonnes';
+  label: string;
+  unit: string;
+  title: string;
+  digits: number;
+  /** What an empty cell means. */
+  empty: string;
+  /** The stored number of one shown: 0.01 for shares in per cent. */
+  factor?: number;
+  get(product: Product): number | undefined;
+  set(product: Product, value: number | undefined): void;
+  problem?(value: number, product: Product): string | undefined;
+  caution?(value: number): string | undefined;
+  locked?(product: Product): string | undefined;
+}
+
+function amountColumn({ factor = 1, ...amount }: Amount): Column {
+  const { id, label, unit, title } = amount;
+  const shown = (value: number) => Number((value / factor).toPrecision(12));
+  function read(product: Product): CellView {
+    const unread = product.unread?.[id];
+    if (unread !== undefined) return { text: unread, edit: unread, problem: reasonOf(unread, id) };
+    const value = amount.get(product);
+    const isPrice = id === 'pricePerTonne';
+    if (value === undefined) {
+      return { text: '–', edit: '', state: 'unknown', title: amount.empty, ...(isPrice && { caution: amount.empty }) };
+    }
+    const problem = amount.problem?.(value, product);
+    const caution = amount.caution?.(value);
+    return {
+      text: formatNumber(shown(value), amount.digits),
+      edit: formatForEditing(shown(value), 0),
+      ...(problem && { problem }),
+      ...(caution && { caution }),
+    };
+  }
+  function write(product: Product, text: string): void {
+    dropUnread(product, id);
+    const parsed = parseNumber(factor === 1 ? text : text.replace(/%\s*$/, ''));
+    if ('problem' in parsed) {
+      amount.set(product, undefined);
+      keepUnread(product, id, text);
+    } else if ('empty' in parsed) amount.set(product, undefined);
+    else amount.set(product, Number((parsed.value * factor).toPrecision(12)));
+  }
+  return { id, label, unit, title, kind: 'number', read, write, locked: amount.locked };
+}
+
+function reasonOf(text: string, id: Amount['id']): string {
+  const parsed = parseNumber(text);
+  const reason = 'problem' in parsed ? parsed.problem : `“${text}” was not taken.`;
+  return id === 'pricePerTonne'
+    ? `${reason} Until then the stock is left out.`
+    : `${reason} Until then it counts as not given.`;
+}
+
+const outsideShare = (value: number) => (value < 0 || value > 1 ? 'A share lies between 0 and 100 %.' : undefined);
+
+export function priceColumn(currency: string): Column {
+  return amountColumn({
+    id: 'pricePerTonne',
+    label: 'Price',
+    unit: `${currency}/t`,
+    title: `Price per tonne [${currency}/t]`,
+    digits: 0,
+    empty: 'no price: the stock is left out of every order until it has one',
+    get: ({ pricePerTonne }) => pricePerTonne,
+    set(product, value) {
+      if (value === undefined) delete product.pricePerTonne;
+      else product.pricePerTonne = value;
+    },
+    caution: (value) => (value < 0 ? 'Below zero: using this stock saves money. Is that meant?' : undefined),
+  });
+}
+
+export const ON_HAND_COLUMN = amountColumn({
+  id: 'availableTonnes',
+  label: 'On hand',
+  unit: 't',
+  title: 'On hand, all lots together [t]; empty: not limited',
+  digits: 1,
+  empty: 'not limited',
+  get: ({ lots }) => sumOfLots(lots.map(({ availableTonnes }) => availableTonnes)),
+  set(product, value) {
+    const [lot] = product.lots;
+    if (!lot) {
+      if (value !== undefined) product.lots.push(newLot(value));
+    } else if (value === undefined) delete lot.availableTonnes;
+    else lot.availableTonnes = value;
+  },
+  problem: (value) => (value < 0 ? 'A quantity cannot be below zero.' : undefined),
+  locked: ({ lots }) => (lots.length > 1 ? `The sum of ${lots.length} lots.` : undefined),
+});
+
+function newLot(availableTonnes: number) {
+  return { id: environment().newId(), name: 'on hand', availableTonnes, figures: [] };
+}
+
+/** The sum where every lot's quantity is known: unknown is not zero. */
+function sumOfLots(tonnes: readonly (number | undefined)[]): number | undefined {
+  if (tonnes.length === 0) return undefined;
+  return tonnes.reduce<number | undefined>((sum, t) => (sum === undefined || t === undefined ? undefined : sum + t), 0);
+}
+
+export const LEAST_DOSE_COLUMN = amountColumn({
+  id: 'leastDoseIfUsed',
+  label: 'Least if used',
+  unit: '%',
+  title: 'Least share the plant can meter: absent, or at least so much of the mix [% m/m]',
+  digits: 2,
+  factor: 0.01,
+  empty: 'none',
+  get: ({ leastDoseIfUsed }) => leastDoseIfUsed,
+  set(product, value) {
+    if (value === undefined) delete product.leastDoseIfUsed;
+    else product.leastDoseIfUsed = value;
+  },
+  problem: (value, { greatestDose }) =>
+    outsideShare(value) ??
+    (greatestDose !== undefined && value > greatestDose
+      ? 'This is above the greatest share. Change one of them.'
+      : undefined),
+});
+
+export const GREATEST_DOSE_COLUMN = amountColumn({
+  id: 'greatestDose',
+  label: 'Greatest',
+  unit: '%',
+  title: 'Greatest share in a mix [% m/m]',
+  digits: 2,
+  factor: 0.01,
+  empty: 'none',
+  get: ({ greatestDose }) => greatestDose,
+  set(product, value) {
+    if (value === undefined) delete product.greatestDose;
+    else product.greatestDose = value;
+  },
+  problem: outsideShare,
+});
