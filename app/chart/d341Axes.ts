@@ -1,0 +1,61 @@
+import { kvFromWalther, logTemperature, waltherIndex } from '../../src';
+
+/**
+ * The axes of ASTM D341: abscissa log10 of the absolute temperature, ordinate W = log10(log10 Z) of the kinematic
+ * viscosity. On them a viscosity-temperature line is straight. Ticks are in °C and mm²/s.
+ */
+
+/** A tick of either axis: where it stands and what it says. */
+export interface Tick {
+  at: number;
+  value: number;
+}
+
+/** Round viscosities [mm²/s], from the thinnest spindle oil to grease. */
+const NICE_KV = [
+  0.5, 1, 1.5, 2, 3, 5, 7, 10, 20, 30, 50, 100, 200, 500, 1000, 2000, 5000, 1e4, 2e4, 5e4, 1e5, 2e5, 5e5, 1e6, 2e6, 5e6,
+  1e7,
+];
+
+/** Nice viscosities within [min, max] mm²/s, no two nearer than `apart` on the axis (in W); rounder ones stay. */
+export function viscosityTicks(min: number, max: number, apart: number): Tick[] {
+  const ticks: Tick[] = [];
+  const inside = NICE_KV.filter((value) => value >= min && value <= max);
+  const byRoundness = [...inside].sort((a, b) => roundness(a) - roundness(b) || a - b);
+  for (const value of byRoundness) {
+    const at = waltherIndex(value);
+    if (ticks.every((tick) => Math.abs(tick.at - at) >= apart)) ticks.push({ at, value });
+  }
+  return ticks.sort((a, b) => a.at - b.at);
+}
+
+/** Powers of ten first, then 2 and 5, then the others. */
+function roundness(value: number): number {
+  const digit = value / 10 ** Math.floor(Math.log10(value) + 1e-9);
+  if (Math.abs(digit - 1) < 1e-6) return 0;
+  return Math.abs(digit - 2) < 1e-6 || Math.abs(digit - 5) < 1e-6 ? 1 : 2;
+}
+
+/** Multiples of `step` °C within [min, max]. */
+export function temperatureTicks(min: number, max: number, step: number): Tick[] {
+  const ticks: Tick[] = [];
+  for (let celsius = Math.ceil(min / step) * step; celsius <= max; celsius += step) {
+    ticks.push({ at: logTemperature(celsius), value: celsius });
+  }
+  return ticks;
+}
+
+/** Temperature [°C] of a place on the abscissa. */
+export function celsiusAt(x: number): number {
+  return 10 ** x - 273.15;
+}
+
+/** Viscosity [mm²/s] of a place on the ordinate. */
+export function kvAt(y: number): number {
+  return kvFromWalther(y);
+}
+
+/** Place of a viscosity on the ordinate, undefined where D341 has none (0.21 to 2·10⁷ mm²/s). */
+export function placeOfKv(kv: number): number | undefined {
+  return kv >= 0.21 && kv <= 2e7 ? waltherIndex(kv) : undefined;
+}
