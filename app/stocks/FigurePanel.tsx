@@ -38,7 +38,7 @@ export function FigurePanel({
     });
 
   return (
-    <section className={styles.panel} aria-label={`Figure: ${column.label} of ${product.name}`}>
+    <section className={styles.fields} aria-label={`Figure: ${column.label} of ${product.name}`}>
       <p className={styles.what}>
         <b>{product.name || 'Stock without a name'}</b>
         <span>{column.title}</span>

@@ -1,4 +1,4 @@
-import { useId } from 'react';
+import { useId, useRef } from 'react';
 import type { Product } from '../../src';
 import { classNames } from '../parts/classNames';
 import { CellEditor } from './CellEditor';
@@ -6,6 +6,7 @@ import type { CellView, Column } from './column';
 import type { Place } from './gridKeys';
 import styles from './StocksTable.module.css';
 import type { Editing, GridActions } from './useGrid';
+import { useNoRoomAtRight } from './useNoRoomAtRight';
 
 const MARKS: Partial<Record<NonNullable<CellView['state']>, { sign: string; words: string }>> = {
   soft: { sign: '≈', words: 'estimated or assumed' },
@@ -21,7 +22,7 @@ export function StockCell({
   tabbable,
   editing,
   missing,
-  flip,
+  isLow,
   grid,
 }: {
   product: Product;
@@ -32,13 +33,15 @@ export function StockCell({
   editing: Editing | undefined;
   /** Why the order on screen cannot use the stock, where this cell would help. */
   missing: string | undefined;
-  /** Messages go above the cell, or to its left end, where there is no room. */
-  flip: { up: boolean; left: boolean };
+  /** Messages go above the cells of the last rows. */
+  isLow: boolean;
   grid: GridActions;
 }) {
   const id = useId();
   const view = column.read(product);
   const said = view.problem ?? missing ?? view.caution;
+  const message = useRef<HTMLSpanElement>(null);
+  const toTheLeft = useNoRoomAtRight(message, said !== undefined && chosen);
   const isHead = column.id === 'name';
   const Cell = isHead ? 'th' : 'td';
   const mark = view.state && MARKS[view.state];
@@ -77,11 +80,12 @@ export function StockCell({
       )}
       {said && chosen && (
         <span
+          ref={message}
           id={`${id}-said`}
           className={classNames(
             styles.said,
-            flip.up && styles.up,
-            flip.left && styles.left,
+            isLow && styles.up,
+            toTheLeft && styles.left,
             !view.problem && styles.mild,
           )}
         >

@@ -18,7 +18,7 @@ export function StockDetails({
 }) {
   const isViscosity = column.figure?.property === 'kv' || column.id === 'vi';
   return (
-    <>
+    <div className={styles.panel}>
       {column.figure && (
         <FigurePanel
           key={`${product.id} ${column.id}`}
@@ -27,7 +27,7 @@ export function StockDetails({
           ownProperties={ownProperties}
         />
       )}
-      <section className={styles.panel} aria-label={`More about ${product.name}`}>
+      <section className={styles.fields} aria-label={`More about ${product.name}`}>
         <NumberField
           key={product.id}
           label="Weight in viscosity blending"
@@ -44,6 +44,6 @@ export function StockDetails({
         />
         {isViscosity && <AddViscosity key={`${product.id} further`} product={product} />}
       </section>
-    </>
+    </div>
   );
 }

@@ -72,7 +72,7 @@ export const StockRow = memo(function StockRow(props: StockRowProps) {
             tabbable={tabbable === place}
             editing={isChosen ? editing : undefined}
             missing={missing?.get(column.id)}
-            flip={{ up: isLow, left: place > columns.length / 2 }}
+            isLow={isLow}
             grid={grid}
           />
         );

@@ -108,18 +108,13 @@ export function StocksTable() {
     >
       {said && (
         <Notice className={styles.notice}>
-          {said}{' '}
-          <Button tone="quiet" onClick={() => setSaid(undefined)}>
-            Hide
-          </Button>
+          {said} <Button onClick={() => setSaid(undefined)}>Hide</Button>
         </Notice>
       )}
       {troubled.length > 0 && (
         <Notice tone="warn" className={styles.notice}>
           {troubled.length === 1 ? 'One cell needs attention.' : `${troubled.length} cells need attention.`}{' '}
-          <Button tone="quiet" onClick={() => edit(nextTrouble(troubled, place))}>
-            Show the next
-          </Button>
+          <Button onClick={() => edit(nextTrouble(troubled, place))}>Show the next</Button>
         </Notice>
       )}
       {products.length === 0 ? (

@@ -110,7 +110,7 @@ function sumOfLots(tonnes: readonly (number | undefined)[]): number | undefined 
 
 export const LEAST_DOSE_COLUMN = amountColumn({
   id: 'leastDoseIfUsed',
-  label: 'Least if used',
+  label: 'Least dose',
   unit: '%',
   title: 'Least share the plant can meter: absent, or at least so much of the mix [% m/m]',
   digits: 2,
@@ -130,7 +130,7 @@ export const LEAST_DOSE_COLUMN = amountColumn({
 
 export const GREATEST_DOSE_COLUMN = amountColumn({
   id: 'greatestDose',
-  label: 'Greatest',
+  label: 'Greatest dose',
   unit: '%',
   title: 'Greatest share in a mix [% m/m]',
   digits: 2,

@@ -71,10 +71,10 @@ describe('the table of stocks', () => {
 
   it('takes doses in per cent and says where they contradict each other', async () => {
     const user = setUp();
-    act(() => cellAt(0, 'Least if used').focus());
+    act(() => cellAt(0, 'Least dose').focus());
     await user.keyboard('2,5{Tab}1{Enter}');
     expect(stockOnPage('a')).toMatchObject({ leastDoseIfUsed: 0.025, greatestDose: 0.01 });
-    expect(cellAt(0, 'Least if used')).toBeInvalid();
+    expect(cellAt(0, 'Least dose')).toBeInvalid();
   });
 
   it('shows the share of each stock in the recipe, of its lots too', () => {
