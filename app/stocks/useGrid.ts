@@ -24,12 +24,7 @@ export interface GridActions {
   /** A click: the cell is chosen and, where it can be, typed in. */
   choose(place: Place, product: Product, column: Column): void;
   /** Takes the text of the cell being typed in; `move` says where to go then. */
-  commit(
-    product: Product,
-    column: Column,
-    text: string | undefined,
-    move: 'down' | 'up' | 'right' | 'left' | 'stay',
-  ): void;
+  commit(product: Product, column: Column, text: string | undefined, move: 'down' | 'up' | 'right' | 'left'): void;
   /** The focus has left the cell being typed in. */
   leave(product: Product, column: Column, text: string | undefined): void;
   revert(): void;
@@ -37,7 +32,7 @@ export interface GridActions {
   pick(product: Product, column: Column, text: string): void;
 }
 
-const STEPS = { down: [1, 0], up: [-1, 0], right: [0, 1], left: [0, -1], stay: [0, 0] } as const;
+const STEPS = { down: [1, 0], up: [-1, 0], right: [0, 1], left: [0, -1] } as const;
 
 const isTyped = (product: Product, column: Column) => column.write !== undefined && !column.locked?.(product);
 

@@ -95,6 +95,18 @@ describe('typing in a cell', () => {
     expect(stockOnPage('a').pricePerTonne).toBe(777);
   });
 
+  it('gives no way to type over the sum of several lots, or over a calculated index', async () => {
+    const lot = { id: 'l', name: 'L', availableTonnes: 1, figures: [] };
+    const user = setUp([inventedStock('a', { figures: [kv(40, 30), kv(100, 5)], lots: [lot, { ...lot, id: 'm' }] })]);
+    for (const heading of ['On hand', 'VI']) {
+      await user.click(cellAt(0, heading));
+      expect(within(cellAt(0, heading)).queryByRole('textbox')).toBeNull();
+      expect(cellAt(0, heading)).toHaveAttribute('aria-readonly', 'true');
+      await user.keyboard('{Delete}');
+    }
+    expect(steps()).toBe(0);
+  });
+
   it('chooses a family from the list', async () => {
     const user = setUp();
     await user.click(cellAt(0, 'Family'));

@@ -106,6 +106,20 @@ describe('the table of stocks', () => {
     expect(cellAt(1, 'Price')).toHaveAttribute('title', expect.stringContaining('Stock b has no price.'));
   });
 
+  it('leads from one cell that needs attention to the next', async () => {
+    const user = setUp([
+      inventedStock('a', { unread: { noack: 'n.d.' } }),
+      inventedStock('b', { figures: [{ property: 'flashPoint', value: 900, origin: 'typical' }] }),
+    ]);
+    expect(screen.getByText(/2 cells need attention/)).toBeVisible();
+    await user.click(button('Show the next'));
+    expect(within(cellAt(0, 'Noack')).getByRole('textbox')).toHaveFocus();
+    await user.click(button('Show the next'));
+    await user.keyboard('{Control>}a{/Control}210{Enter}');
+    expect(figureOnPage('b', 'flashPoint')?.value).toBe(210);
+    expect(screen.getByText(/One cell needs attention/)).toBeVisible();
+  });
+
   it('has a column for each property of the user’s own', async () => {
     const biobased = { id: 'bio', label: 'Biobased', unit: '% m/m', rule: 'linear by mass' as const, digits: 1 };
     const user = setUp([inventedStock('a')], { ownProperties: [biobased] });
