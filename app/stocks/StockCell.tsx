@@ -54,7 +54,7 @@ export function StockCell({
       aria-readonly={!column.write || column.locked?.(product) ? true : undefined}
       aria-invalid={view.problem ? true : undefined}
       aria-describedby={said && chosen ? `${id}-said` : undefined}
-      title={[said, view.title, column.locked?.(product)].filter(Boolean).join('. ') || undefined}
+      title={sentences(said, view.title, column.locked?.(product))}
       className={classNames(
         styles.cell,
         styles[column.kind],
@@ -94,4 +94,9 @@ export function StockCell({
       )}
     </Cell>
   );
+}
+
+function sentences(...texts: (string | undefined)[]): string | undefined {
+  const given = texts.flatMap((text) => (text ? [text.replace(/\.$/, '')] : []));
+  return given.length > 0 ? given.join('. ') : undefined;
 }
