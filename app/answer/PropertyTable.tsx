@@ -48,7 +48,7 @@ export function PropertyTable({
 function Row({ row, others }: { row: PropertyRow; others: string | undefined }) {
   return (
     <tr className={classNames(row.limits.length === 0 && styles.unlimited)}>
-      <th scope="row">
+      <th scope="row" title={row.fullName}>
         {row.name}
         {others && <span className={styles.small}>other rules: {others}</span>}
       </th>

@@ -19,7 +19,7 @@ async function copy(text: string): Promise<void> {
   }
 }
 
-/** What goes into the kettle: shares, kilograms, litres, cost and what stays in the tank. */
+/** What goes into the kettle: shares, kilograms, litres, cost and what stays in the tank; each name above its figures. */
 export function RecipeTable({
   rows,
   totals,
@@ -33,6 +33,7 @@ export function RecipeTable({
   const digits = amountDigits(totals.kilograms);
   const showsLeft = rows.some(({ leftTonnes }) => leftTonnes !== undefined);
   const showsCost = rows.some(({ costShare }) => costShare !== undefined);
+  const width = 4 + Number(showsCost) + Number(showsLeft);
   return (
     <>
       <ProportionBar rows={rows} />
@@ -41,29 +42,26 @@ export function RecipeTable({
           <caption className="visually-hidden">Recipe, kilograms and litres {batch.words}</caption>
           <thead>
             <tr>
-              <th scope="col">Stock</th>
               <th scope="col">% mass</th>
               <th scope="col">% vol.</th>
               <th scope="col">kg</th>
-              <th scope="col" title="Litres at 15 °C">
-                L, 15 °C
-              </th>
+              <th scope="col">L, 15 °C</th>
               {showsCost && <th scope="col">% cost</th>}
               {showsLeft && <th scope="col">left, t</th>}
             </tr>
           </thead>
-          <tbody>
-            {rows.map((row, place) => (
-              <tr key={row.stockId}>
-                <th scope="row">
+          {rows.map((row, place) => (
+            <tbody key={row.stockId}>
+              <tr className={styles.nameRow}>
+                <th scope="rowgroup" colSpan={width}>
                   <span className={styles.stock}>
                     <Swatch look={looks[place]} />
-                    <span>
-                      {row.name}
-                      <span className={styles.family}>{row.family}</span>
-                    </span>
+                    <span>{row.name}</span>
+                    <span className={styles.family}>{row.family}</span>
                   </span>
                 </th>
+              </tr>
+              <tr>
                 <td>{percent(row.massFraction, 2)}</td>
                 <td>{percent(row.volumeFraction, 2)}</td>
                 <td>{formatNumber(row.kilograms, digits)}</td>
@@ -71,11 +69,15 @@ export function RecipeTable({
                 {showsCost && <td>{percent(row.costShare, 1)}</td>}
                 {showsLeft && <td>{formatNumber(row.leftTonnes, 1)}</td>}
               </tr>
-            ))}
-          </tbody>
+            </tbody>
+          ))}
           <tfoot>
+            <tr className={styles.nameRow}>
+              <th scope="rowgroup" colSpan={width}>
+                Total
+              </th>
+            </tr>
             <tr>
-              <th scope="row">Total</th>
               <td>{percent(1, 2)}</td>
               <td>{percent(totals.litres === undefined ? undefined : 1, 2)}</td>
               <td>{formatNumber(totals.kilograms, digits)}</td>

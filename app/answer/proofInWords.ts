@@ -20,7 +20,8 @@ export function percentUp(fraction: number): string {
   const percent = Math.max(fraction * 100, 0.0001);
   const digits = Math.max(0, Math.min(4, 1 - Math.floor(Math.log10(percent))));
   const up = Math.ceil(percent * 10 ** digits - 1e-6) / 10 ** digits;
-  return `${formatNumber(up, digits)} %`;
+  // A trailing zero would claim a digit more.
+  return `${formatNumber(up, String(up).split('.')[1]?.length ?? 0)} %`;
 }
 
 /** What a claim rests on: said with every claim about the cheapest. */

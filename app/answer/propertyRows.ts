@@ -7,13 +7,15 @@ import {
   propertyDefinition,
   VI_DEFINITION,
 } from '../../src';
-import { limitName, rangeInWords, roomInWords } from '../order/limitWords';
+import { limitName, rangeInWords, roomInWords, shortLimitName } from '../order/limitWords';
 import { figureText } from '../stocks/figureText';
 
 /** One predicted property of the mix against its limits. */
 export interface PropertyRow {
   key: string;
+  /** Short, as columns are headed: "KV40". */
   name: string;
+  fullName: string;
   unit: string;
   /** As shown; "–" where it is unknown. */
   value: string;
@@ -31,12 +33,12 @@ function definitionOf({ property }: Pick<PredictedProperty, 'property'>, order: 
 const namesOf = (ids: readonly string[], order: Order) =>
   ids.map((id) => order.stocks.find((stock) => stock.id === id)?.name ?? id).join(', ');
 
-/** "PAO 4 has no Noack volatility" */
-function unknownInWords({ value, unknownFrom, property }: PredictedProperty, label: string, order: Order) {
+/** "unknown: PAO 4 has no figure" */
+function unknownInWords({ value, unknownFrom, property }: PredictedProperty, order: Order): string | undefined {
   if (value !== undefined) return undefined;
   if (unknownFrom.length > 0) {
     const has = unknownFrom.length === 1 ? 'has' : 'have';
-    return `unknown: ${namesOf(unknownFrom, order)} ${has} no ${label.charAt(0).toLowerCase()}${label.slice(1)}`;
+    return `unknown: ${namesOf(unknownFrom, order)} ${has} no figure`;
   }
   return property === 'vi' ? 'not defined below a KV100 of 2 mm²/s' : 'cannot be calculated from these figures';
 }
@@ -54,12 +56,13 @@ export function propertyRows(order: Order, { properties, checks }: BlendOutcome)
     const definition = definitionOf(predicted, order);
     if (!definition) return [];
     const { property, celsius, value, estimatedFrom } = predicted;
-    const name = `${limitName(predicted, order.ownProperties)}${property === 'pourPoint' && order.depressant ? ', with depressant' : ''}`;
-    const unknown = unknownInWords(predicted, definition.label, order);
+    const depressed = property === 'pourPoint' && order.depressant ? ', with depressant' : '';
+    const unknown = unknownInWords(predicted, order);
     return [
       {
         key: `${property}@${celsius ?? ''}`,
-        name,
+        name: shortLimitName(predicted, order.ownProperties) + depressed,
+        fullName: limitName(predicted, order.ownProperties) + depressed,
         unit: definition.unit === '-' ? '' : definition.unit,
         value: figureText(definition, value),
         ...(unknown && { unknown }),

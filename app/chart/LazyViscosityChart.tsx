@@ -2,6 +2,7 @@ import { lazy, Suspense, useMemo } from 'react';
 import type { BlendOutcome, Order } from '../../src';
 import { useWidth } from '../parts/useWidth';
 import { ChartTable } from './ChartTable';
+import { CHART_HEIGHT, plotSize } from './chartLayout';
 import { chartScene } from './chartScene';
 import styles from './ViscosityChart.module.css';
 import { viscosityLines } from './viscosityLines';
@@ -10,22 +11,23 @@ import { viscosityWindows } from './viscosityWindows';
 /** Recharts is a third of the page's weight: it is fetched when the rest is already on screen. */
 const ViscosityChart = lazy(() => import('./ViscosityChart'));
 
-const HEIGHT = 320;
-const PLOT_HEIGHT = 268;
-
 /** The viscosity-temperature chart of a recipe, its table, and what not to read into it. */
 export function LazyViscosityChart({ order, outcome }: { order: Order; outcome: BlendOutcome }) {
   const [frame, width] = useWidth<HTMLDivElement>(400);
   const lines = useMemo(() => viscosityLines(order, outcome), [order, outcome]);
   const windows = useMemo(() => viscosityWindows(order, outcome), [order, outcome]);
-  const scene = useMemo(() => chartScene(lines, windows, PLOT_HEIGHT), [lines, windows]);
+  const scene = useMemo(() => chartScene(lines, windows, plotSize(width)), [lines, windows, width]);
   if (lines.length === 0) return <p className={styles.note}>No line: viscosities at two temperatures are needed.</p>;
   const grade = windows.find(({ kind }) => kind === 'grade');
   return (
     <div ref={frame} className={styles.frame}>
-      <div role="img" aria-label="Viscosity against temperature on ASTM D341 axes. The table below it says the same.">
+      <div
+        className={styles.chart}
+        role="img"
+        aria-label="Viscosity against temperature on ASTM D341 axes. The table below it says the same."
+      >
         <Suspense fallback={<Placeholder width={width} />}>
-          <ViscosityChart scene={scene} width={width} height={HEIGHT} />
+          <ViscosityChart scene={scene} width={width} />
         </Suspense>
       </div>
       <p className={styles.key}>
@@ -43,7 +45,7 @@ export function LazyViscosityChart({ order, outcome }: { order: Order; outcome: 
 
 function Placeholder({ width }: { width: number }) {
   return (
-    <div className={styles.placeholder} style={{ width, height: HEIGHT }}>
+    <div className={styles.placeholder} style={{ width, height: CHART_HEIGHT }}>
       The chart is on its way …
     </div>
   );

@@ -1,34 +1,30 @@
 import { CartesianGrid, Line, LineChart, ReferenceArea, XAxis, YAxis } from 'recharts';
 import { classNames } from '../parts/classNames';
 import { formatNumber } from '../parts/numberText';
+import { CHART_HEIGHT, MARGIN, plotSize, X_AXIS_HEIGHT, Y_AXIS_WIDTH } from './chartLayout';
 import type { ChartScene, DrawnLine } from './chartScene';
 import { labelPlaces } from './labelPlaces';
 import styles from './ViscosityChart.module.css';
 
-const MARGIN = { top: 8, right: 108, bottom: 4, left: 0 };
-const Y_AXIS = 46;
-const X_AXIS = 40;
+/** Height of a name [px]. */
 const LABEL_HEIGHT = 13;
-
-/** Height left for the plot itself [px]. */
-export function plotHeightOf(height: number): number {
-  return height - MARGIN.top - MARGIN.bottom - X_AXIS;
-}
+/** Letters of a name that fit beside the plot. */
+const LABEL_LETTERS = 18;
 
 /** The lines and windows on D341 axes. Names stand at the lines' warm ends. */
-export default function ViscosityChart({ scene, width, height }: { scene: ChartScene; width: number; height: number }) {
+export default function ViscosityChart({ scene, width }: { scene: ChartScene; width: number }) {
   const { xDomain, yDomain, temperatures, viscosities, lines, windows } = scene;
-  const plotHeight = plotHeightOf(height);
+  const plot = plotSize(width);
   const labelled = lines.filter(({ end }) => end !== undefined);
   const pixels = labelled.map(
-    ({ end }) => MARGIN.top + plotHeight * (1 - ((end?.y ?? 0) - yDomain[0]) / (yDomain[1] - yDomain[0])),
+    ({ end }) => MARGIN.top + plot.height * (1 - ((end?.y ?? 0) - yDomain[0]) / (yDomain[1] - yDomain[0])),
   );
-  const places = labelPlaces(pixels, LABEL_HEIGHT, MARGIN.top, height - MARGIN.bottom - X_AXIS);
+  const places = labelPlaces(pixels, LABEL_HEIGHT, MARGIN.top, MARGIN.top + plot.height);
   const labels = new Map(viscosities.map(({ at, value }) => [at, value]));
   const celsius = new Map(temperatures.map(({ at, value }) => [at, value]));
   return (
-    <LineChart width={width} height={height} margin={MARGIN} accessibilityLayer={false} className={styles.chart}>
-      <CartesianGrid className={styles.grid} />
+    <LineChart width={width} height={CHART_HEIGHT} margin={MARGIN} accessibilityLayer={false}>
+      <CartesianGrid />
       <XAxis
         type="number"
         dataKey="x"
@@ -36,7 +32,7 @@ export default function ViscosityChart({ scene, width, height }: { scene: ChartS
         ticks={temperatures.map(({ at }) => at)}
         tickFormatter={(at: number) => formatNumber(celsius.get(at), 0)}
         interval={0}
-        height={X_AXIS}
+        height={X_AXIS_HEIGHT}
         allowDataOverflow
         label={{ value: 'Temperature, °C', position: 'insideBottom', offset: 4, className: styles.axisLabel }}
       />
@@ -47,7 +43,7 @@ export default function ViscosityChart({ scene, width, height }: { scene: ChartS
         ticks={viscosities.map(({ at }) => at)}
         tickFormatter={(at: number) => kvText(labels.get(at))}
         interval={0}
-        width={Y_AXIS}
+        width={Y_AXIS_WIDTH}
         allowDataOverflow
       />
       {windows.map(({ key, kind, x1, x2, y1, y2 }) => (
@@ -69,7 +65,7 @@ export default function ViscosityChart({ scene, width, height }: { scene: ChartS
           y={(places[place] ?? 0) + 4}
           className={classNames(styles.label, isMix && styles.mixLabel)}
         >
-          {name.length > 17 ? `${name.slice(0, 16)}…` : name}
+          {name.length > LABEL_LETTERS ? `${name.slice(0, LABEL_LETTERS - 1)}…` : name}
         </text>
       ))}
     </LineChart>
@@ -94,6 +90,12 @@ function strokes({ id, isMix, solid, dashed }: DrawnLine) {
         className={classNames(className, styles.dashed)}
       />
     )),
-    <Line key={`${id} solid`} {...shared} data={solid} dot={{ r: isMix ? 3 : 2 }} className={className} />,
+    <Line
+      key={`${id} solid`}
+      {...shared}
+      data={solid}
+      dot={{ r: isMix ? 3 : 2, className: classNames(styles.dot, isMix && styles.mix) }}
+      className={className}
+    />,
   ];
 }

@@ -40,10 +40,9 @@ export interface ChartScene {
   windows: DrawnWindow[];
 }
 
-const USUAL = { coldest: -20, warmest: 120 };
-/** Half-widths of the bars [°C]: limits on their temperature, grades beside them. */
-const LIMIT_BAR = 1.6;
-const GRADE_BAR = { from: -5.2, to: -2.4 };
+const USUAL = { coldest: 0, warmest: 120 };
+/** Half-widths of the bars [°C]; a grade's bar is drawn behind a limit's. */
+const HALF_WIDTH = { limit: 3.5, grade: 6 };
 
 function temperatureRange(lines: readonly ViscosityLine[], windows: readonly ViscosityWindow[]) {
   const all = [
@@ -77,20 +76,31 @@ function drawn(line: ViscosityLine, coldest: number, warmest: number): DrawnLine
 
 function drawnWindow(window: ViscosityWindow, key: number, [low, high]: [number, number]): DrawnWindow[] {
   const { kind, name, celsius, min, max } = window;
-  const [from, to] = kind === 'limit' ? [-LIMIT_BAR, LIMIT_BAR] : [GRADE_BAR.from, GRADE_BAR.to];
+  const half = HALF_WIDTH[kind];
   const y1 = min === undefined ? low : placeOfKv(min);
   const y2 = max === undefined ? high : placeOfKv(max);
   if (y1 === undefined || y2 === undefined) return [];
   return [
-    { key: `${kind} ${key}`, kind, name, x1: logTemperature(celsius + from), x2: logTemperature(celsius + to), y1, y2 },
+    {
+      key: `${kind} ${key}`,
+      kind,
+      name,
+      x1: logTemperature(celsius - half),
+      x2: logTemperature(celsius + half),
+      y1,
+      y2,
+    },
   ];
 }
 
-/** Lays out lines and windows on the D341 axes for a plot so many pixels high. */
+/** Least distance of two tick labels [px]. */
+const TICKS_APART = { x: 28, y: 16 };
+
+/** Lays out lines and windows on the D341 axes for a plot of so many pixels. */
 export function chartScene(
   lines: readonly ViscosityLine[],
   windows: readonly ViscosityWindow[],
-  plotHeight: number,
+  plot: { width: number; height: number },
 ): ChartScene {
   const { coldest, warmest } = temperatureRange(lines, windows);
   const drawnLines = lines.map((line) => drawn(line, coldest, warmest));
@@ -101,12 +111,14 @@ export function chartScene(
   const [low, high] = ys.length ? [Math.min(...ys), Math.max(...ys)] : [waltherIndex(2), waltherIndex(1000)];
   const room = Math.max(0.02, 0.04 * (high - low));
   const yDomain: [number, number] = [low - room, high + room];
-  const perPixel = (yDomain[1] - yDomain[0]) / plotHeight;
+  const xDomain: [number, number] = [logTemperature(coldest), logTemperature(warmest)];
+  const apartX = (TICKS_APART.x * (xDomain[1] - xDomain[0])) / plot.width;
+  const apartY = (TICKS_APART.y * (yDomain[1] - yDomain[0])) / plot.height;
   return {
-    xDomain: [logTemperature(coldest), logTemperature(warmest)],
+    xDomain,
     yDomain,
-    temperatures: temperatureTicks(coldest, warmest, warmest - coldest > 160 ? 40 : 20),
-    viscosities: viscosityTicks(0.5, 1e7, 16 * perPixel).filter(({ at }) => at >= yDomain[0] && at <= yDomain[1]),
+    temperatures: temperatureTicks(coldest, warmest, apartX),
+    viscosities: viscosityTicks(0.5, 1e7, apartY).filter(({ at }) => at >= yDomain[0] && at <= yDomain[1]),
     lines: drawnLines,
     windows: windows.flatMap((window, place) => drawnWindow(window, place, yDomain)),
   };

@@ -19,14 +19,9 @@ const NICE_KV = [
 
 /** Nice viscosities within [min, max] mm²/s, no two nearer than `apart` on the axis (in W); rounder ones stay. */
 export function viscosityTicks(min: number, max: number, apart: number): Tick[] {
-  const ticks: Tick[] = [];
   const inside = NICE_KV.filter((value) => value >= min && value <= max);
-  const byRoundness = [...inside].sort((a, b) => roundness(a) - roundness(b) || a - b);
-  for (const value of byRoundness) {
-    const at = waltherIndex(value);
-    if (ticks.every((tick) => Math.abs(tick.at - at) >= apart)) ticks.push({ at, value });
-  }
-  return ticks.sort((a, b) => a.at - b.at);
+  const byRoundness = inside.sort((a, b) => roundness(a) - roundness(b) || a - b);
+  return spaced(byRoundness, waltherIndex, apart);
 }
 
 /** Powers of ten first, then 2 and 5, then the others. */
@@ -36,13 +31,25 @@ function roundness(value: number): number {
   return Math.abs(digit - 2) < 1e-6 || Math.abs(digit - 5) < 1e-6 ? 1 : 2;
 }
 
-/** Multiples of `step` °C within [min, max]. */
-export function temperatureTicks(min: number, max: number, step: number): Tick[] {
+/** The temperatures that matter most on this chart come first when there is no room for all. */
+const FIRST_CELSIUS = [40, 100];
+
+/** Multiples of 20 °C within [min, max], no two nearer than `apart` on the axis; 40 and 100 °C stay. */
+export function temperatureTicks(min: number, max: number, apart: number): Tick[] {
+  const all: number[] = [];
+  for (let celsius = Math.ceil(min / 20) * 20; celsius <= max; celsius += 20) all.push(celsius);
+  const first = FIRST_CELSIUS.filter((celsius) => celsius >= min && celsius <= max);
+  return spaced([...first, ...all.filter((celsius) => !first.includes(celsius))], logTemperature, apart);
+}
+
+/** Takes values in turn, leaving out what would stand too near to one already there; in the axis's order. */
+function spaced(values: readonly number[], place: (value: number) => number, apart: number): Tick[] {
   const ticks: Tick[] = [];
-  for (let celsius = Math.ceil(min / step) * step; celsius <= max; celsius += step) {
-    ticks.push({ at: logTemperature(celsius), value: celsius });
+  for (const value of values) {
+    const at = place(value);
+    if (ticks.every((tick) => Math.abs(tick.at - at) >= apart)) ticks.push({ at, value });
   }
-  return ticks;
+  return ticks.sort((a, b) => a.at - b.at);
 }
 
 /** Temperature [°C] of a place on the abscissa. */

@@ -1,0 +1,56 @@
+import { describe, expect, it } from 'vitest';
+import { recipeRows } from '../../../app/answer/recipeRows';
+import { recipeText } from '../../../app/answer/recipeText';
+import { mixOf, orderOf, outcomeOf } from './answers';
+
+describe('the rows of a recipe', () => {
+  it('weighs, measures and prices each stock for the batch, the largest share first', () => {
+    const { rows, totals } = recipeRows(orderOf({ batchTonnes: 8 }), mixOf());
+    expect(rows.map(({ name }) => name)).toEqual(['Light oil', 'Heavy oil']);
+    const [light, heavy] = rows;
+    // By hand: 6000 kg at 800 kg/m³ are 7500 L, 2000 kg at 900 kg/m³ are 2222.2 L; 750 and 750 of 1500 a tonne.
+    expect(light).toMatchObject({ kilograms: 6000, costShare: 0.5, leftTonnes: 14 });
+    expect(light?.litres).toBeCloseTo(7500, 3);
+    expect(heavy?.litres).toBeCloseTo(2222.222, 2);
+    expect(heavy).toMatchObject({ kilograms: 2000, costShare: 0.5 });
+    expect(totals.kilograms).toBe(8000);
+    expect(totals.litres).toBeCloseTo(9722.222, 2);
+  });
+
+  it('says nothing of what is left where the quantity on hand is not known', () => {
+    const { rows } = recipeRows(orderOf({ batchTonnes: 8 }), mixOf());
+    expect(rows.find(({ name }) => name === 'Heavy oil')).not.toHaveProperty('leftTonnes');
+  });
+
+  it('counts for 1000 kg without a batch, and takes nothing from the tanks', () => {
+    const { rows, batch } = recipeRows(orderOf(), mixOf());
+    expect(batch).toMatchObject({ kilograms: 1000, given: false });
+    expect(rows[0]).toMatchObject({ kilograms: 750 });
+    expect(rows.every((row) => row.leftTonnes === undefined)).toBe(true);
+  });
+
+  it('counts for the smallest batch of a range', () => {
+    expect(recipeRows(orderOf({ batchTonnes: { min: 5, max: 9 } }), mixOf()).totals.kilograms).toBe(5000);
+  });
+
+  it('leaves litres out, never at zero, where a density is unknown', () => {
+    const properties = { properties: [], spread: [] };
+    const { rows, totals } = recipeRows(orderOf({ batchTonnes: 8 }), mixOf({ properties }));
+    expect(totals).not.toHaveProperty('litres');
+    expect(rows[0]).not.toHaveProperty('litres');
+  });
+
+  it('has no rows without a recipe', () => {
+    expect(recipeRows(orderOf(), outcomeOf()).rows).toEqual([]);
+  });
+});
+
+describe('the recipe as a block for a spreadsheet', () => {
+  it('has a heading, a line a stock and the total, with as many cells each', () => {
+    const { rows, totals, batch } = recipeRows(orderOf({ batchTonnes: 8 }), mixOf());
+    const lines = recipeText(rows, totals, batch).split('\n');
+    expect(lines).toHaveLength(4);
+    expect(new Set(lines.map((line) => line.split('\t').length))).toEqual(new Set([8]));
+    expect(lines[1]).toBe('Light oil\tGroup III\t75.000\t77.143\t6000.0\t7500.0\t50.0\t14.00');
+  });
+});
