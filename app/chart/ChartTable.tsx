@@ -4,7 +4,7 @@ import styles from './ViscosityChart.module.css';
 import { isExtrapolated, kvOnLine, type ViscosityLine } from './viscosityLines';
 import type { ViscosityWindow } from './viscosityWindows';
 
-const TEMPERATURES = [-20, 0, 20, 40, 60, 80, 100, 120];
+const TEMPERATURES = [-30, -20, 0, 20, 40, 60, 80, 100, 120, 150];
 const KV = { id: 'kv', digits: 2 };
 
 /** The same as the chart, in numbers. */

@@ -1,6 +1,7 @@
 import { lazy, Suspense, useMemo } from 'react';
 import type { BlendOutcome, Order } from '../../src';
 import { useWidth } from '../parts/useWidth';
+import { ErrorBoundary } from '../shell/ErrorBoundary';
 import { ChartTable } from './ChartTable';
 import { CHART_HEIGHT, plotSize } from './chartLayout';
 import { chartScene } from './chartScene';
@@ -21,15 +22,17 @@ export function LazyViscosityChart({ order, outcome }: { order: Order; outcome: 
   const grade = windows.find(({ kind }) => kind === 'grade');
   return (
     <div ref={frame} className={styles.frame}>
-      <div
-        className={styles.chart}
-        role="img"
-        aria-label="Viscosity against temperature on ASTM D341 axes. The table below it says the same."
-      >
+      <ErrorBoundary what="The chart">
         <Suspense fallback={<Placeholder width={width} />}>
-          <ViscosityChart scene={scene} width={width} />
+          <div
+            className={styles.chart}
+            role="img"
+            aria-label="Viscosity against temperature on ASTM D341 axes. The table below it says the same."
+          >
+            <ViscosityChart scene={scene} width={width} />
+          </div>
         </Suspense>
-      </div>
+      </ErrorBoundary>
       <p className={styles.key}>
         <span>mm²/s on ASTM D341 axes</span>
         {windows.some(({ kind }) => kind === 'limit') && <span className={styles.limitKey}>limit</span>}

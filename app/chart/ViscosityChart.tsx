@@ -6,6 +6,8 @@ import type { ChartScene, DrawnLine } from './chartScene';
 import { labelPlaces } from './labelPlaces';
 import styles from './ViscosityChart.module.css';
 
+/** Recharts colours its texts on the element itself, where no style sheet reaches. */
+const TEXT = { fill: 'var(--ink-soft)', fontSize: 11 };
 /** Height of a name [px]. */
 const LABEL_HEIGHT = 13;
 /** Letters of a name that fit beside the plot. */
@@ -32,9 +34,10 @@ export default function ViscosityChart({ scene, width }: { scene: ChartScene; wi
         ticks={temperatures.map(({ at }) => at)}
         tickFormatter={(at: number) => formatNumber(celsius.get(at), 0)}
         interval={0}
+        tick={TEXT}
         height={X_AXIS_HEIGHT}
         allowDataOverflow
-        label={{ value: 'Temperature, °C', position: 'insideBottom', offset: 4, className: styles.axisLabel }}
+        label={{ value: 'Temperature, °C', position: 'insideBottom', offset: 4, style: TEXT }}
       />
       <YAxis
         type="number"
@@ -43,6 +46,7 @@ export default function ViscosityChart({ scene, width }: { scene: ChartScene; wi
         ticks={viscosities.map(({ at }) => at)}
         tickFormatter={(at: number) => kvText(labels.get(at))}
         interval={0}
+        tick={TEXT}
         width={Y_AXIS_WIDTH}
         allowDataOverflow
       />
@@ -65,17 +69,22 @@ export default function ViscosityChart({ scene, width }: { scene: ChartScene; wi
           y={(places[place] ?? 0) + 4}
           className={classNames(styles.label, isMix && styles.mixLabel)}
         >
-          {name.length > LABEL_LETTERS ? `${name.slice(0, LABEL_LETTERS - 1)}…` : name}
+          {name.length > LABEL_LETTERS ? `${name.slice(0, LABEL_LETTERS - 1).trimEnd()}…` : name}
+          {name.length > LABEL_LETTERS && <title>{name}</title>}
         </text>
       ))}
     </LineChart>
   );
 }
 
+/** A tick of the viscosity axis; 10⁵ and up as powers, which the narrow axis has room for. */
 function kvText(kv: number | undefined): string {
   if (kv === undefined) return '';
-  return formatNumber(kv, Number.isInteger(kv) ? 0 : 1);
+  const power = POWERS[kv];
+  return power ?? formatNumber(kv, Number.isInteger(kv) ? 0 : 1);
 }
+
+const POWERS: Readonly<Record<number, string>> = { 1e5: '10⁵', 1e6: '10⁶', 1e7: '10⁷' };
 
 function strokes({ id, isMix, solid, dashed }: DrawnLine) {
   const shared = { dataKey: 'y', type: 'linear', isAnimationActive: false, activeDot: false } as const;
@@ -94,7 +103,7 @@ function strokes({ id, isMix, solid, dashed }: DrawnLine) {
       key={`${id} solid`}
       {...shared}
       data={solid}
-      dot={{ r: isMix ? 3 : 2, className: classNames(styles.dot, isMix && styles.mix) }}
+      dot={isMix ? false : { r: 2, className: styles.dot }}
       className={className}
     />,
   ];

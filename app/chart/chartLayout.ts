@@ -1,5 +1,8 @@
 /** Where things stand in the chart [px]; shared by what lays it out and what draws it. */
 export const CHART_HEIGHT = 320;
+/** Temperatures drawn [°C], unless a measured point or a limit lies outside. */
+export const COLDEST = -30;
+export const WARMEST = 150;
 /** To the right stand the names of the lines. */
 export const MARGIN = { top: 8, right: 112, bottom: 4, left: 0 };
 export const Y_AXIS_WIDTH = 46;

@@ -1,6 +1,7 @@
 import { logTemperature, waltherIndex } from '../../src';
+import { COLDEST, WARMEST } from './chartLayout';
 import { placeOfKv, type Tick, temperatureTicks, viscosityTicks } from './d341Axes';
-import { isExtrapolated, kvOnLine, type ViscosityLine } from './viscosityLines';
+import { kvOnLine, type ViscosityLine } from './viscosityLines';
 import type { ViscosityWindow } from './viscosityWindows';
 
 /** A place on the D341 axes. */
@@ -40,19 +41,17 @@ export interface ChartScene {
   windows: DrawnWindow[];
 }
 
-const USUAL = { coldest: 0, warmest: 120 };
 /** Half-widths of the bars [°C]; a grade's bar is drawn behind a limit's. */
 const HALF_WIDTH = { limit: 3.5, grade: 6 };
 
+/** The chart's temperatures [°C]; wider where a measured point or a limit lies outside. */
 function temperatureRange(lines: readonly ViscosityLine[], windows: readonly ViscosityWindow[]) {
-  const all = [
-    ...lines.flatMap(({ points }) => points.map(({ celsius }) => celsius)),
-    ...windows.map(({ celsius }) => celsius),
-  ];
-  const beyond = (celsius: number, by: number) => Math.round((celsius + by) / 10) * 10;
+  const all = [...lines.flatMap(({ known }) => known), ...windows.map(({ celsius }) => celsius)];
+  const coldest = Math.min(...all);
+  const warmest = Math.max(...all);
   return {
-    coldest: Math.min(USUAL.coldest, ...all.filter((celsius) => celsius <= USUAL.coldest).map((c) => beyond(c, -10))),
-    warmest: Math.max(USUAL.warmest, ...all.filter((celsius) => celsius >= USUAL.warmest).map((c) => beyond(c, 10))),
+    coldest: coldest < COLDEST ? Math.floor(coldest / 10) * 10 : COLDEST,
+    warmest: warmest > WARMEST ? Math.ceil(warmest / 10) * 10 : WARMEST,
   };
 }
 
@@ -62,16 +61,18 @@ function placeAt(line: ViscosityLine, celsius: number): Place | undefined {
   return y === undefined ? undefined : { x: logTemperature(celsius), y };
 }
 
+/** A line through all its bends within the chart, cut at the ends of what its figures carry. */
 function drawn(line: ViscosityLine, coldest: number, warmest: number): DrawnLine {
-  const solid = line.points.map(({ celsius, kv }) => ({ x: logTemperature(celsius), y: waltherIndex(kv) }));
-  const first = solid[0];
-  const last = solid.at(-1);
-  const cold = isExtrapolated(line, coldest) ? placeAt(line, coldest) : undefined;
-  const warm = isExtrapolated(line, warmest) ? placeAt(line, warmest) : undefined;
-  const dashed = [cold && first ? [cold, first] : [], last && warm ? [last, warm] : []].filter(
-    ({ length }) => length > 0,
-  );
-  return { id: line.id, name: line.name, isMix: line.isMix, solid, dashed, end: warm ?? last };
+  const [from, to] = line.known;
+  const bends = line.points.map(({ celsius }) => celsius).filter((celsius) => celsius > coldest && celsius < warmest);
+  const temperatures = [...new Set([coldest, ...bends, from, to, warmest])].sort((a, b) => a - b);
+  const part = (low: number, high: number) =>
+    temperatures
+      .filter((celsius) => celsius >= low && celsius <= high)
+      .flatMap((celsius) => placeAt(line, celsius) ?? []);
+  const dashed = [part(coldest, from), part(to, warmest)].filter(({ length }) => length > 1);
+  const solid = part(from, to);
+  return { id: line.id, name: line.name, isMix: line.isMix, solid, dashed, end: dashed.at(-1)?.at(-1) ?? solid.at(-1) };
 }
 
 function drawnWindow(window: ViscosityWindow, key: number, [low, high]: [number, number]): DrawnWindow[] {
@@ -93,6 +94,17 @@ function drawnWindow(window: ViscosityWindow, key: number, [low, high]: [number,
   ];
 }
 
+/** Where the viscosity axis may begin and end [mm²/s]: coarse steps, so that it stays put while the mix moves. */
+const BOUNDS = [0.21, 0.5, 1, 1.5, 2, 3, 5, 10, 20, 50, 100, 1e3, 1e4, 1e5, 1e6, 1e7, 2e7].map(waltherIndex);
+
+function boundsAround(places: readonly number[]): [number, number] {
+  const least = Math.min(...places);
+  const most = Math.max(...places);
+  const low = BOUNDS.findLast((bound) => bound <= least);
+  const high = BOUNDS.find((bound) => bound >= most);
+  return low === undefined || high === undefined || low >= high ? [waltherIndex(1), waltherIndex(1e3)] : [low, high];
+}
+
 /** Least distance of two tick labels [px]. */
 const TICKS_APART = { x: 28, y: 16 };
 
@@ -108,9 +120,7 @@ export function chartScene(
     ...drawnLines.flatMap(({ solid, dashed }) => [...solid, ...dashed.flat()].map(({ y }) => y)),
     ...windows.flatMap(({ min, max }) => [min, max].flatMap((kv) => (kv === undefined ? [] : (placeOfKv(kv) ?? [])))),
   ];
-  const [low, high] = ys.length ? [Math.min(...ys), Math.max(...ys)] : [waltherIndex(2), waltherIndex(1000)];
-  const room = Math.max(0.02, 0.04 * (high - low));
-  const yDomain: [number, number] = [low - room, high + room];
+  const yDomain = boundsAround(ys);
   const xDomain: [number, number] = [logTemperature(coldest), logTemperature(warmest)];
   const apartX = (TICKS_APART.x * (xDomain[1] - xDomain[0])) / plot.width;
   const apartY = (TICKS_APART.y * (yDomain[1] - yDomain[0])) / plot.height;

@@ -12,10 +12,7 @@ export interface Tick {
 }
 
 /** Round viscosities [mm²/s], from the thinnest spindle oil to grease. */
-const NICE_KV = [
-  0.5, 1, 1.5, 2, 3, 5, 7, 10, 20, 30, 50, 100, 200, 500, 1000, 2000, 5000, 1e4, 2e4, 5e4, 1e5, 2e5, 5e5, 1e6, 2e6, 5e6,
-  1e7,
-];
+const NICE_KV = [0.5, 1, 1.5, 2, 3, 5, 7, 10, 20, 30, 50, 100, 200, 500, 1000, 2000, 5000, 1e4, 1e5, 1e6, 1e7];
 
 /** Nice viscosities within [min, max] mm²/s, no two nearer than `apart` on the axis (in W); rounder ones stay. */
 export function viscosityTicks(min: number, max: number, apart: number): Tick[] {
