@@ -185,7 +185,7 @@ describe('figures', () => {
 });
 
 describe('viscosity index', () => {
-  // ASTM D2270, Appendix X1 example for oils of VI 100 and above: KV40 22.83, KV100 5.05 gives VI 156.
+  // Worked example of ASTM D2270 for a VI above 100, from memory: KV40 22.83 and KV100 5.05 give 156.
   it('is calculated from KV40 and KV100 and cannot be typed', async () => {
     const user = setUp([inventedStock('a', { figures: [kv(40, 22.83), kv(100, 5.05)] })]);
     expect(cellAt(0, 'VI')).toHaveTextContent('156');
