@@ -27,6 +27,7 @@ export default defineConfig({
       },
     ],
     testTimeout: 60_000,
+    hookTimeout: 60_000,
     restoreMocks: true,
     allowOnly: false,
   },

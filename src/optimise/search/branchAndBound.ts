@@ -126,8 +126,12 @@ export class BranchAndBound {
       this.#close(open.bound);
       return;
     }
+    const known = this.#finder.best;
     if (this.#isWorthTrying(open)) this.#finder.tryNear(result.values, open.kv100);
-    if (!this.#isClosedByPrices(open, box)) this.#split(open, box, result.values);
+    if (this.#isClosedByPrices(open, box)) return;
+    // Lines are tight where a part is split: a recipe found in this part is the place to have them tight.
+    const { best } = this.#finder;
+    this.#split(open, box, result.values, best && best !== known ? best.values : result.values);
   }
 
   /** A part whose bound reaches this holds nothing better by more than the gap asked for. */
@@ -183,9 +187,9 @@ export class BranchAndBound {
   }
 
   /** Splits on a viscosity index that is far off, else on a discrete choice, else on KV100; else the part keeps its bound. */
-  #split(node: SearchNode, { lower, upper }: Box, values: Float64Array): void {
+  #split(node: SearchNode, { lower, upper }: Box, values: Float64Array, place: Float64Array): void {
     const { vi } = this.model;
-    const mix = vi && mixViscosity(vi, values);
+    const mix = vi && { missed: mixViscosity(vi, values).missed, kv100: mixViscosity(vi, place).kv100 };
     if (mix && mix.missed > FAR_OFF && this.#splitKv100(node, mix.kv100)) return;
     const choice = nextChoice(this.model, this.#rows, values, lower, upper);
     if (choice) {

@@ -3,7 +3,7 @@ import type { ModelRow, SearchModel, ViLimits } from '../rows/searchModel';
 import type { Box } from './box';
 import { keepsPresences, keepsWholeLots, roundedBounds } from './discreteChoices';
 import { mixViscosity } from './mixViscosity';
-import type { SearchProgram, ShadowPrices } from './searchProgram';
+import type { SearchProgram, ShadowPrices, ViRows } from './searchProgram';
 import { innerRows, isNarrow, type Kv100Interval, NEAR, outerRows, tangentRows } from './viRows';
 
 export type Solution = Extract<LinearResult, { status: 'optimal' }>;
@@ -21,7 +21,11 @@ interface Best {
 /** A viscosity index that misses its limit by less than this many points is on it. */
 const ON_LIMIT = 1e-7;
 /** Rounds of moving the tangent to where the solution goes. */
-const MOST_TANGENTS = 4;
+const MOST_TANGENTS = 3;
+/** Windows of KV100 around a solution, relative: the first, how fast they shrink, and how many are tried. */
+const WIDEST_WINDOW = 0.15;
+const WINDOW_SHRINKS_BY = 6;
+const MOST_WINDOWS = 8;
 /** Prices of this many latest solves are kept to bound other parts with. */
 const MOST_PRICES = 3;
 
@@ -56,7 +60,7 @@ export class RecipeFinder {
   tryNear(values: Float64Array, interval: Kv100Interval | undefined): void {
     const { vi } = this.#model;
     if (!this.#settleChoices(values)) return;
-    if (vi && interval) this.#program.setViRows(innerRows(vi, interval, this.#followTangents(vi, interval, values)));
+    if (vi && interval) this.#program.setViRows(innerRows(vi, interval, this.#kv100Near(vi, interval, values)));
     const result = this.#program.solve();
     if (result.status === 'optimal' && this.take(result)) this.#remember(result.duals);
   }
@@ -102,22 +106,53 @@ export class RecipeFinder {
     return true;
   }
 
-  /** Moves the tangent of the curve to where the solution goes, until it stays: KV100 of a recipe worth trying. */
-  #followTangents(vi: ViLimits, interval: Kv100Interval, values: Float64Array): number {
-    let { kv100 } = mixViscosity(vi, values);
+  /** KV100 of a recipe worth trying, from that of a relaxed solution. */
+  #kv100Near(vi: ViLimits, interval: Kv100Interval, values: Float64Array): number {
+    const { kv100 } = mixViscosity(vi, values);
     if (!vi.min || isNarrow(interval)) return kv100;
+    return this.#followTangents(vi, interval, kv100) ?? this.#closeIn(vi, interval, kv100);
+  }
+
+  /** Moves the tangent of the curve to where the solution goes, until it stays; undefined where it does not. */
+  #followTangents(vi: ViLimits, interval: Kv100Interval, start: number): number | undefined {
+    let kv100 = start;
     for (let round = 0; round < MOST_TANGENTS; round++) {
-      this.#program.setViRows(tangentRows(vi, interval, kv100));
-      const result = this.#program.solve();
-      if (result.status !== 'optimal') return kv100;
-      const next = mixViscosity(vi, result.values).kv100;
-      const moved = Math.abs(next / kv100 - 1);
-      kv100 = next;
-      if (moved > NEAR / 2) continue;
-      this.#remember(result.duals);
-      break;
+      const found = this.#solutionUnder(vi, tangentRows(vi, interval, kv100));
+      if (found === undefined) return undefined;
+      const moved = Math.abs(found / kv100 - 1);
+      kv100 = found;
+      if (moved <= NEAR) return kv100;
+    }
+    return undefined;
+  }
+
+  /**
+   * Follows the solution under the outer lines of ever smaller windows: for where the curve bends at the knots of
+   * Table 1 and a tangent of one piece leads astray.
+   */
+  #closeIn(vi: ViLimits, interval: Kv100Interval, start: number): number {
+    let kv100 = start;
+    let reach = WIDEST_WINDOW;
+    for (let round = 0; round < MOST_WINDOWS && reach > NEAR; round++) {
+      const from = Math.max(interval.from, kv100 / (1 + reach));
+      const to = Math.min(interval.to, kv100 * (1 + reach));
+      const found = this.#solutionUnder(vi, outerRows(vi, { from, to }));
+      if (found === undefined) return kv100;
+      kv100 = found;
+      const atEnd =
+        (found < from * (1 + NEAR) && from > interval.from) || (found > to * (1 - NEAR) && to < interval.to);
+      if (!atEnd) reach /= WINDOW_SHRINKS_BY;
     }
     return kv100;
+  }
+
+  /** KV100 of the least-cost solution under some rows; undefined where there is none. */
+  #solutionUnder(vi: ViLimits, rows: ViRows): number | undefined {
+    this.#program.setViRows(rows);
+    const result = this.#program.solve();
+    if (result.status !== 'optimal') return undefined;
+    this.#remember(result.duals);
+    return mixViscosity(vi, result.values).kv100;
   }
 
   #remember(duals: Float64Array): void {

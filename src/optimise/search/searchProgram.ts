@@ -11,7 +11,8 @@ export interface ViRows {
   /** Ends of the interval as indices of KV100. */
   from: number;
   to: number;
-  above?: readonly [Line, Line];
+  /** One or two lines. */
+  above?: readonly Line[];
   below?: Line;
 }
 
@@ -24,7 +25,10 @@ export interface ShadowPrices {
   line?: { price: number; slope: number };
 }
 
+/** The interval's lower and upper end, "VI at most", and two lines for "VI at least", in this order. */
 const DYNAMIC_ROWS = 5;
+const FIRST_ABOVE = 3;
+const LINES_ABOVE = 2;
 /** Columns of the three sums that carry viscosity, in this order: weights, KV100 indices, KV40 indices. */
 const SUMS = 3;
 
@@ -149,9 +153,11 @@ export class SearchProgram {
     const line = ({ offset, slope }: Line) => [-offset * vi, -slope * vi, vi] as const;
     this.#setDynamic(0, [-from * kv, kv, 0], false);
     this.#setDynamic(1, [-to * kv, kv, 0], true);
-    this.#setDynamic(2, above && line(above[0]), true);
-    this.#setDynamic(3, above && line(above[1]), true);
-    this.#setDynamic(4, below && line(below), false);
+    this.#setDynamic(2, below && line(below), false);
+    for (let k = 0; k < LINES_ABOVE; k++) {
+      const one = above?.[k];
+      this.#setDynamic(FIRST_ABOVE + k, one && line(one), true);
+    }
   }
 
   /** Minimises something else under a ceiling on the cost: used once, to choose among equals, from a fresh basis. */
@@ -178,7 +184,7 @@ export class SearchProgram {
     const sizes = [0, 0, 0];
     for (let row = 0; row < DYNAMIC_ROWS; row++) {
       const multiplier = multipliers[this.#staticRows + 1 + SUMS + row] * scale;
-      const lowerSide = row === 0 || row === 4;
+      const lowerSide = row === 0 || row === 2;
       // A multiplier of the wrong sign leans on an infinite side: dropping it keeps the bound valid.
       if (!this.#active[row] || !Number.isFinite(multiplier) || (lowerSide ? multiplier < 0 : multiplier > 0)) continue;
       for (let sum = 0; sum < SUMS; sum++) {
@@ -206,7 +212,7 @@ export class SearchProgram {
   pricesOf(duals: Float64Array): ShadowPrices {
     const scale = 1 / this.#costScale;
     const multipliers = duals.slice(0, this.#staticRows).map((dual) => dual * scale);
-    const kept: readonly (-1 | 1)[] = [1, -1, -1, -1, 1];
+    const kept: readonly (-1 | 1)[] = [1, -1, 1, -1, -1];
     let steepness = 0;
     let price = 0;
     for (let row = 0; row < DYNAMIC_ROWS; row++) {

@@ -11,7 +11,7 @@ export interface Kv100Interval {
 }
 
 /** Half width of the interval around a solution in which a recipe is sought, relative to KV100 [-]. */
-export const NEAR = 2e-4;
+export const NEAR = 5e-4;
 /** An interval of KV100 that spans less than this factor is narrow: its outer lines are as good as the curve. */
 const NARROW = 1.002;
 
@@ -33,13 +33,11 @@ export function outerRows({ index, min, max }: ViLimits, { from, to }: Kv100Inte
   };
 }
 
-/** The outer rows with the curve's tangent at a KV100 in place of the outer lines: a step towards a recipe, no bound. */
+/** The outer rows with the curve's tangent in place of the outer lines: a step towards a recipe, no bound. */
 export function tangentRows(vi: ViLimits, interval: Kv100Interval, kv100: number): ViRows {
-  const { index, min } = vi;
+  const { min } = vi;
   const rows = outerRows(vi, interval);
-  if (!min) return rows;
-  const line = tangent(viCurve(index, min.value), inside(interval, kv100));
-  return { ...rows, above: [line, line] };
+  return min ? { ...rows, above: [tangent(viCurve(vi.index, min.value), inside(interval, kv100))] } : rows;
 }
 
 /** Rows for a narrow interval around a KV100, within one piece, that only mixes on the right side of the curve keep. */
@@ -52,7 +50,7 @@ export function innerRows({ index, min, max }: ViLimits, within: Kv100Interval, 
   return {
     from: index.toIndex(from),
     to: index.toIndex(to),
-    ...(line ? { above: [line, line] as const } : {}),
+    ...(line ? { above: [line] } : {}),
     ...(max ? { below: tangent(viCurve(index, max.value), inside({ from, to }, centre)) } : {}),
   };
 }
