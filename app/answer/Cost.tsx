@@ -17,21 +17,21 @@ export function Cost({
 }) {
   const { costPerTonne, costPerCubicMetre } = outcome;
   if (costPerTonne === undefined) return null;
-  const perTonne = `${formatMoney(costPerTonne, currency)} per tonne`;
-  const perCubicMetre =
-    costPerCubicMetre === undefined
-      ? 'per m³ unknown: a density is missing'
-      : `${formatMoney(costPerCubicMetre, currency)} per m³ at 15 °C`;
-  const byVolume = order.costBasis === 'cubic metre' && costPerCubicMetre !== undefined;
-  const [main, second] = byVolume ? [perCubicMetre, perTonne] : [perTonne, perCubicMetre];
-  const [amount, ...unit] = main.split(' per ');
+  const perTonne = { amount: formatMoney(costPerTonne, currency), unit: 'per tonne' };
+  const perCubicMetre = costPerCubicMetre !== undefined && {
+    amount: formatMoney(costPerCubicMetre, currency),
+    unit: 'per m³ at 15 °C',
+  };
+  const byVolume = order.costBasis === 'cubic metre' && perCubicMetre;
+  const main = byVolume || perTonne;
+  const second = byVolume ? perTonne : perCubicMetre;
   return (
     <div className={styles.cost}>
       <p className={styles.mainCost}>
-        {amount} <span className={styles.costUnit}>per {unit.join(' per ')}</span>
+        {main.amount} <span className={styles.costUnit}>{main.unit}</span>
       </p>
       <p className={styles.soft}>
-        {second}
+        {second ? `${second.amount} ${second.unit}` : 'per m³ unknown: a density is missing'}
         {batch.given && ` · ${formatMoney((costPerTonne * batch.kilograms) / 1000, currency, 0)} ${batch.words}`}
       </p>
     </div>

@@ -1,4 +1,4 @@
-import type { SolveProgress } from '../../src';
+import type { SolveProgress, WorkbookOrder } from '../../src';
 import { Button } from '../parts/Button';
 import { formatMoney } from '../parts/money';
 import { formatNumber } from '../parts/numberText';
@@ -10,16 +10,16 @@ import { percentUp } from './proofInWords';
 export function Progress({
   progress,
   currency,
-  measure,
+  costBasis,
 }: {
   progress: SolveProgress | undefined;
   currency: string;
-  measure: string;
+  costBasis: WorkbookOrder['costBasis'];
 }) {
   const { cancelSolve } = useCommands();
   return (
     <div className={styles.progress}>
-      <span>{progressInWords(progress, currency, measure)}</span>
+      <span>{progressInWords(progress, currency, costBasis === 'cubic metre' ? 'per m³' : 'per tonne')}</span>
       <Button disabled={!cancelSolve.enabled()} onClick={() => cancelSolve.run()}>
         {cancelSolve.label}
       </Button>

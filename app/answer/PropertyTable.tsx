@@ -50,6 +50,7 @@ function Row({ row, others }: { row: PropertyRow; others: string | undefined }) 
     <tr className={classNames(row.limits.length === 0 && styles.unlimited)}>
       <th scope="row" title={row.fullName}>
         {row.name}
+        {row.asTheRest && <span className={styles.small}>{row.asTheRest}</span>}
         {others && <span className={styles.small}>other rules: {others}</span>}
       </th>
       <td className={styles.value} title={row.estimated}>

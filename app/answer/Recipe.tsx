@@ -1,38 +1,53 @@
-import { useDeferredValue } from 'react';
+import { memo, useDeferredValue } from 'react';
 import type { BlendOutcome, Order } from '../../src';
 import { LazyViscosityChart } from '../chart/LazyViscosityChart';
 import { Section } from '../parts/Section';
+import { ErrorBoundary } from '../shell/ErrorBoundary';
 import styles from './AnswerPanel.module.css';
 import { apiGroupsInWords } from './apiGroups';
 import { Cautions } from './Cautions';
 import { Cost } from './Cost';
+import { gradesInWords } from './gradesInWords';
 import { PropertyTable } from './PropertyTable';
 import { RecipeTable } from './RecipeTable';
 import { recipeRows } from './recipeRows';
+import { recipeText } from './recipeText';
 import { SpreadTable } from './SpreadTable';
 
-/** A recipe and everything said of it. Only ever drawn where there is one. */
-export function Recipe({
+/** A recipe and everything said of it; nothing where there is none. Drawn anew for another answer only. */
+export const Recipe = memo(function Recipe({
+  title,
+  proof,
   order,
   outcome,
   laboratoryOnly,
   currency,
 }: {
+  /** Name of the order, and what is proven: both go with a recipe that is copied. */
+  title: string;
+  proof: string;
   order: Order;
-  outcome: BlendOutcome & Required<Pick<BlendOutcome, 'recipe'>>;
+  outcome: BlendOutcome;
   laboratoryOnly: readonly string[];
   currency: string;
 }) {
-  const { rows, totals, batch } = recipeRows(order, outcome);
   // The chart may lag behind while a limit is dragged; numbers may not.
   const charted = useDeferredValue(outcome);
   const chartedOrder = useDeferredValue(order);
+  if (!outcome.recipe) return null;
+  const { rows, totals, batch } = recipeRows(order, outcome);
   return (
     <>
       <Cost outcome={outcome} order={order} batch={batch} currency={currency} />
       <Cautions cautions={outcome.cautions} />
-      <RecipeTable rows={rows} totals={totals} batch={batch} />
+      <RecipeTable
+        rows={rows}
+        totals={totals}
+        batch={batch}
+        text={() => recipeText({ title, proof, cautions: outcome.cautions, rows, totals, batch })}
+      />
       <Section title="Predicted properties" level={3} className={styles.part}>
+        <p className={styles.soft}>{gradesInWords(outcome)}</p>
         <PropertyTable order={order} outcome={outcome} laboratoryOnly={laboratoryOnly} />
         <SpreadTable spread={outcome.properties?.spread ?? []} ownRule={order.viscosityRule ?? 'wright'} />
         <p className={styles.soft}>
@@ -41,8 +56,10 @@ export function Recipe({
         </p>
       </Section>
       <Section title="Viscosity and temperature" level={3} className={styles.part}>
-        <LazyViscosityChart order={chartedOrder} outcome={charted} />
+        <ErrorBoundary what="The chart">
+          <LazyViscosityChart order={chartedOrder} outcome={charted} />
+        </ErrorBoundary>
       </Section>
     </>
   );
-}
+});

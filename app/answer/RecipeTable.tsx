@@ -1,33 +1,25 @@
-import { Button } from '../parts/Button';
 import { formatNumber } from '../parts/numberText';
-import { announce } from '../state/viewStore';
+import { CopyRecipe } from './CopyRecipe';
 import { looksOf } from './familyTone';
 import { ProportionBar, Swatch } from './ProportionBar';
 import styles from './RecipeTable.module.css';
 import { amountDigits, type Batch, type RecipeRow, type RecipeTotals } from './recipeRows';
-import { recipeText } from './recipeText';
 
 const percent = (share: number | undefined, digits: number) =>
   share === undefined ? '–' : formatNumber(share * 100, digits);
-
-async function copy(text: string): Promise<void> {
-  try {
-    await navigator.clipboard.writeText(text);
-    announce('The recipe is on the clipboard: paste it into a spreadsheet.');
-  } catch {
-    announce('The browser did not allow copying. Select the table with the mouse and copy it instead.');
-  }
-}
 
 /** What goes into the kettle: shares, kilograms, litres, cost and what stays in the tank; each name above its figures. */
 export function RecipeTable({
   rows,
   totals,
   batch,
+  text,
 }: {
   rows: readonly RecipeRow[];
   totals: RecipeTotals;
   batch: Batch;
+  /** The recipe to be copied. */
+  text(): string;
 }) {
   const looks = looksOf(rows.map(({ family }) => family));
   const digits = amountDigits(totals.kilograms);
@@ -78,11 +70,11 @@ export function RecipeTable({
               </th>
             </tr>
             <tr>
-              <td>{percent(1, 2)}</td>
-              <td>{percent(totals.litres === undefined ? undefined : 1, 2)}</td>
+              <td>{percent(totals.massFraction, 2)}</td>
+              <td>{percent(totals.volumeFraction, 2)}</td>
               <td>{formatNumber(totals.kilograms, digits)}</td>
               <td>{formatNumber(totals.litres, digits)}</td>
-              {showsCost && <td>{percent(1, 1)}</td>}
+              {showsCost && <td>{percent(totals.costShare, 1)}</td>}
               {showsLeft && <td />}
             </tr>
           </tfoot>
@@ -93,9 +85,7 @@ export function RecipeTable({
           Kilograms and litres {batch.words}
           {batch.given ? '.' : '; give the order a batch for its own.'}
         </span>
-        <Button tone="quiet" icon="copy" onClick={() => void copy(recipeText(rows, totals, batch))}>
-          Copy recipe
-        </Button>
+        <CopyRecipe text={text} />
       </p>
     </>
   );

@@ -1,21 +1,24 @@
-import { apiGroupOf, isBaseOil, type Order, type Recipe } from '../../src';
+import { apiGroupOf, isBaseOil, type Order, type Recipe, type Stock } from '../../src';
 import { formatNumber } from '../parts/numberText';
 
-const ORDER = ['I', 'II', 'III', 'IV', 'V'] as const;
+const ORDER = ['I', 'II', 'III', 'IV', 'V', 'not classed', 'thickener', 'package', 'depressant'];
 
-/** "III 62.1 %, IV 30.0 %, not classed 5.0 %, additives 1.1 %": shares of the mix by mass, by the stocks' API groups. */
+/** Base oils by their API group, additives by their kind. */
+function kindOf(stock: Stock): string {
+  return isBaseOil(stock.family) ? (apiGroupOf(stock).group ?? 'not classed') : stock.family;
+}
+
+/** "III 62.1 %, IV 30.0 %, not classed 5.0 %, package 1.1 %": shares of the mix by mass. */
 export function apiGroupsInWords({ stocks }: Pick<Order, 'stocks'>, recipe: Recipe): string {
   const shares = new Map<string, number>();
   for (const { stockId, massFraction } of recipe) {
     const stock = stocks.find(({ id }) => id === stockId);
     if (!stock || !(massFraction > 0)) continue;
-    const group = isBaseOil(stock.family) ? (apiGroupOf(stock).group ?? 'not classed') : 'additives';
-    shares.set(group, (shares.get(group) ?? 0) + massFraction);
+    const kind = kindOf(stock);
+    shares.set(kind, (shares.get(kind) ?? 0) + massFraction);
   }
-  return [...ORDER, 'not classed', 'additives']
-    .flatMap((group) => {
-      const share = shares.get(group);
-      return share === undefined ? [] : [`${group} ${formatNumber(share * 100, 1)} %`];
-    })
+  return [...shares]
+    .sort(([a], [b]) => ORDER.indexOf(a) - ORDER.indexOf(b))
+    .map(([kind, share]) => `${kind} ${formatNumber(share * 100, 1)} %`)
     .join(', ');
 }

@@ -7,7 +7,7 @@ import {
   propertyDefinition,
   VI_DEFINITION,
 } from '../../src';
-import { limitName, rangeInWords, roomInWords, shortLimitName } from '../order/limitWords';
+import { limitName, rangeInWords, roomInWords, shortLimitName, withUnit } from '../order/limitWords';
 import { figureText } from '../stocks/figureText';
 
 /** One predicted property of the mix against its limits. */
@@ -23,6 +23,8 @@ export interface PropertyRow {
   unknown?: string;
   /** Some of the figures behind it are estimates. */
   estimated?: string;
+  /** Stocks that took the value of the rest of the mix. */
+  asTheRest?: string;
   limits: { range: string; room: string; tone: 'plain' | 'on' | 'bad' }[];
 }
 
@@ -47,7 +49,8 @@ function limitRow(check: LimitCheck, order: Order, definition: PropertyDefinitio
   const limit = order.limits[check.limit];
   if (!limit) return [];
   const tone = !check.passes ? ('bad' as const) : check.onLimit ? ('on' as const) : ('plain' as const);
-  return [{ range: rangeInWords(limit, definition), room: roomInWords(check, definition), tone }];
+  const inside = limit.insideBy ? `, inside by ${withUnit(limit.insideBy, definition)}` : '';
+  return [{ range: rangeInWords(limit, definition) + inside, room: roomInWords(check, definition), tone }];
 }
 
 /** The predicted properties of the recipe; none where there is no recipe. */
@@ -55,13 +58,13 @@ export function propertyRows(order: Order, { properties, checks }: BlendOutcome)
   return (properties?.properties ?? []).flatMap((predicted): PropertyRow[] => {
     const definition = definitionOf(predicted, order);
     if (!definition) return [];
-    const { property, celsius, value, estimatedFrom } = predicted;
+    const { property, celsius, value, estimatedFrom, asTheRest } = predicted;
     const depressed = property === 'pourPoint' && order.depressant ? ', with depressant' : '';
     const unknown = unknownInWords(predicted, order);
     return [
       {
         key: `${property}@${celsius ?? ''}`,
-        name: shortLimitName(predicted, order.ownProperties) + depressed,
+        name: (property === 'density' ? limitName : shortLimitName)(predicted, order.ownProperties) + depressed,
         fullName: limitName(predicted, order.ownProperties) + depressed,
         unit: definition.unit === '-' ? '' : definition.unit,
         value: figureText(definition, value),
@@ -69,6 +72,7 @@ export function propertyRows(order: Order, { properties, checks }: BlendOutcome)
         ...(estimatedFrom.length > 0 && {
           estimated: `rests on estimated figures of ${namesOf(estimatedFrom, order)}`,
         }),
+        ...(value !== undefined && asTheRest.length > 0 && { asTheRest: `as the rest: ${namesOf(asTheRest, order)}` }),
         limits: checks
           .filter((check) => check.property === property && check.celsius === celsius)
           .flatMap((check) => limitRow(check, order, definition)),

@@ -1,4 +1,4 @@
-import type { BlendOutcome, Family, Order } from '../../src';
+import type { BlendOutcome, Family, Order, Recipe } from '../../src';
 
 /** One stock of the recipe, with everything the table says of it. */
 export interface RecipeRow {
@@ -16,9 +16,13 @@ export interface RecipeRow {
   leftTonnes?: number;
 }
 
+/** The sums of the rows as they stand, so that a wrong row would show. A sum with an unknown part is unknown. */
 export interface RecipeTotals {
+  massFraction: number;
+  volumeFraction?: number;
   kilograms: number;
   litres?: number;
+  costShare?: number;
 }
 
 /** The batch the kilograms are for. */
@@ -44,6 +48,8 @@ export function recipeRows(
   const { recipe = [], properties, costPerTonne } = outcome;
   const density = properties?.properties.find(({ property }) => property === 'density')?.value;
   const totalLitres = density === undefined ? undefined : (batch.kilograms / density) * 1000;
+  // With a stock that is paid to be taken, shares of the cost say nothing.
+  const hasShares = costPerTonne !== undefined && costPerTonne > 0 && usesNoNegativePrice(order, recipe);
   const rows = recipe.flatMap(({ stockId, massFraction }, place): RecipeRow[] => {
     const stock = order.stocks.find(({ id }) => id === stockId);
     if (!stock || !(massFraction > 0)) return [];
@@ -59,14 +65,38 @@ export function recipeRows(
         kilograms,
         ...(volumeFraction !== undefined && { volumeFraction }),
         ...(volumeFraction !== undefined && totalLitres !== undefined && { litres: volumeFraction * totalLitres }),
-        ...(costPerTonne ? { costShare: (massFraction * stock.pricePerTonne) / costPerTonne } : {}),
+        ...(hasShares && { costShare: (massFraction * stock.pricePerTonne) / costPerTonne }),
         ...(batch.given && left !== undefined && { leftTonnes: left - kilograms / 1000 }),
       },
     ];
   });
   rows.sort((a, b) => b.massFraction - a.massFraction);
-  const totals = { kilograms: batch.kilograms, ...(totalLitres !== undefined && { litres: totalLitres }) };
-  return { rows, totals, batch };
+  return { rows, totals: totalsOf(rows), batch };
+}
+
+function usesNoNegativePrice({ stocks }: Order, recipe: Recipe): boolean {
+  const used = new Set(recipe.flatMap(({ stockId, massFraction }) => (massFraction > 0 ? [stockId] : [])));
+  return stocks.every(({ id, pricePerTonne }) => pricePerTonne >= 0 || !used.has(id));
+}
+
+function totalsOf(rows: readonly RecipeRow[]): RecipeTotals {
+  const sum = (read: (row: RecipeRow) => number | undefined) =>
+    rows.reduce<number | undefined>((total, row) => {
+      const part = read(row);
+      return total === undefined || part === undefined ? undefined : total + part;
+    }, 0);
+  const [volumeFraction, litres, costShare] = [
+    sum((row) => row.volumeFraction),
+    sum((row) => row.litres),
+    sum((row) => row.costShare),
+  ];
+  return {
+    massFraction: sum((row) => row.massFraction) ?? 0,
+    kilograms: sum((row) => row.kilograms) ?? 0,
+    ...(volumeFraction !== undefined && { volumeFraction }),
+    ...(litres !== undefined && { litres }),
+    ...(costShare !== undefined && { costShare }),
+  };
 }
 
 /** Decimals of kilograms and litres: what a scale of that batch can show. */

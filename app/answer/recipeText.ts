@@ -1,35 +1,45 @@
+import type { Caution } from '../../src';
 import { formatNumber } from '../parts/numberText';
 import { amountDigits, type Batch, type RecipeRow, type RecipeTotals } from './recipeRows';
 
-/** The recipe as a block for a spreadsheet: tabs between cells, headings with units. */
-export function recipeText(rows: readonly RecipeRow[], totals: RecipeTotals, batch: Batch): string {
+export interface RecipeToCopy {
+  title: string;
+  /** What is proven: a recipe that leaves the screen says so. */
+  proof: string;
+  cautions: readonly Caution[];
+  rows: readonly RecipeRow[];
+  totals: RecipeTotals;
+  batch: Batch;
+}
+
+/** The recipe as a block for a spreadsheet: tabs between cells, headings with units, proof and cautions above. */
+export function recipeText({ title, proof, cautions, rows, totals, batch }: RecipeToCopy): string {
   const digits = amountDigits(totals.kilograms);
   const number = (value: number | undefined, decimals: number) =>
     value === undefined ? '' : formatNumber(value, decimals);
   const percent = (share: number | undefined, decimals: number) =>
     share === undefined ? '' : formatNumber(share * 100, decimals);
-  const lines = [
-    ['Stock', 'Family', '% m/m', '% v/v', `kg ${batch.words}`, `L at 15 °C ${batch.words}`, '% of cost', 'left [t]'],
-    ...rows.map((row) => [
-      row.name,
-      row.family,
-      percent(row.massFraction, 3),
-      percent(row.volumeFraction, 3),
-      number(row.kilograms, digits),
-      number(row.litres, digits),
-      percent(row.costShare, 1),
-      number(row.leftTonnes, 2),
-    ]),
-    [
-      'Total',
-      '',
-      percent(1, 3),
-      percent(totals.litres === undefined ? undefined : 1, 3),
-      number(totals.kilograms, digits),
-      number(totals.litres, digits),
-      '',
-      '',
-    ],
+  const figures = (of: RecipeTotals & Pick<RecipeRow, 'leftTonnes'>) => [
+    percent(of.massFraction, 3),
+    percent(of.volumeFraction, 3),
+    number(of.kilograms, digits),
+    number(of.litres, digits),
+    percent(of.costShare, 1),
+    number(of.leftTonnes, 2),
   ];
-  return lines.map((cells) => cells.map((cell) => cell.replace(/[\t\n]/g, ' ')).join('\t')).join('\n');
+  const lines = [
+    [plain(title)],
+    [plain(`${proof} A prediction: passing is for the laboratory.`)],
+    ...cautions.map(({ message }) => [plain(message)]),
+    ['Stock', 'Family', '% m/m', '% v/v', `kg ${batch.words}`, `L at 15 °C ${batch.words}`, '% of cost', 'left [t]'],
+    ...rows.map((row) => [plain(row.name), row.family, ...figures(row)]),
+    ['Total', '', ...figures(totals)],
+  ];
+  return lines.map((cells) => cells.join('\t')).join('\n');
+}
+
+/** A text that stays one cell, and that no spreadsheet takes for a formula. */
+function plain(text: string): string {
+  const oneLine = text.replace(/[\t\r\n]+/g, ' ');
+  return /^[=+@-]/.test(oneLine) ? `'${oneLine}` : oneLine;
 }

@@ -2,9 +2,10 @@ import { describe, expect, it } from 'vitest';
 import { apiGroupsInWords } from '../../../app/answer/apiGroups';
 import { conflictInWords } from '../../../app/answer/Conflict';
 import { looksOf, PATTERNS } from '../../../app/answer/familyTone';
+import { gradesInWords } from '../../../app/answer/gradesInWords';
 import { propertyRows } from '../../../app/answer/propertyRows';
 import { otherRules } from '../../../app/answer/ruleSpread';
-import { mixOf, orderOf, outcomeOf } from './answers';
+import { HEAVY, LIGHT, mixOf, orderOf, outcomeOf } from './answers';
 
 const KV40 = { property: 'kv', celsius: 40, min: 30, max: 40 };
 
@@ -15,6 +16,23 @@ describe('the predicted properties', () => {
     const kv40 = rows.find(({ fullName }) => fullName === 'Kinematic viscosity at 40 °C');
     expect(kv40).toMatchObject({ name: 'KV40', value: '38.12', unit: 'mm²/s' });
     expect(kv40?.limits).toEqual([{ range: '30.00 to 40.00 mm²/s', room: 'room 1.88 mm²/s', tone: 'plain' }]);
+  });
+
+  it('say how far inside its limit the mix has to stay, and who took the value of the rest', () => {
+    const limit = { ...KV40, insideBy: 0.5 };
+    const check = { limit: 0, ...KV40, value: 38.12, room: 1.38, passes: true, onLimit: false };
+    const kv40 = {
+      property: 'kv',
+      celsius: 40,
+      value: 38.12,
+      unknownFrom: [],
+      asTheRest: ['heavy'],
+      estimatedFrom: [],
+    };
+    const outcome = mixOf({ checks: [check], properties: { properties: [kv40], spread: [] } });
+    const [row] = propertyRows(orderOf({ limits: [limit] }), outcome);
+    expect(row?.limits[0]?.range).toBe('30.00 to 40.00 mm²/s, inside by 0.50 mm²/s');
+    expect(row?.asTheRest).toBe('as the rest: Heavy oil');
   });
 
   it('name the stocks that leave a property unknown', () => {
@@ -44,10 +62,32 @@ describe('what other blending rules say', () => {
   });
 });
 
+describe('the viscosity windows of a mix', () => {
+  it('are those of the published tables; no grade is claimed', () => {
+    // ISO 3448: VG 46 is 41.4 to 50.6 at 40 °C. SAE J300: 20 is 6.9 to below 9.3 at 100 °C; SAE J306: 75 is 6.5 to below 8.5.
+    const kv = (celsius: number, value: number) => ({
+      property: 'kv',
+      celsius,
+      value,
+      unknownFrom: [],
+      asTheRest: [],
+      estimatedFrom: [],
+    });
+    const properties = { properties: [kv(40, 46), kv(100, 7)], spread: [] };
+    const words = gradesInWords({ properties });
+    expect(words).toMatch(/^Inside the KV40 window of ISO VG 46; the KV100 window of SAE/);
+    expect(words).toMatch(/SAE 20/);
+    expect(words).toMatch(/J306 75/);
+    expect(gradesInWords({})).toMatch(/^Inside no viscosity window/);
+  });
+});
+
 describe('the API groups of a recipe', () => {
   it('are shares by mass; PAO is Group IV (API 1509, Annex E), and what figures do not decide is not classed', () => {
     // The light oil has neither saturates nor sulphur.
     expect(apiGroupsInWords(orderOf(), mixOf().recipe ?? [])).toBe('IV 25.0 %, not classed 75.0 %');
+    const order = orderOf({ stocks: [{ ...LIGHT, family: 'package' }, HEAVY] });
+    expect(apiGroupsInWords(order, mixOf().recipe ?? [])).toBe('IV 25.0 %, package 75.0 %');
   });
 });
 

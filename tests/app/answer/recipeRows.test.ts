@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { recipeRows } from '../../../app/answer/recipeRows';
 import { recipeText } from '../../../app/answer/recipeText';
-import { mixOf, orderOf, outcomeOf } from './answers';
+import { HEAVY, LIGHT, mixOf, orderOf, outcomeOf } from './answers';
 
 describe('the rows of a recipe', () => {
   it('weighs, measures and prices each stock for the batch, the largest share first', () => {
@@ -45,12 +45,48 @@ describe('the rows of a recipe', () => {
   });
 });
 
+describe('the sums', () => {
+  it('are those of the rows as they stand', () => {
+    const { totals } = recipeRows(orderOf(), mixOf({ recipe: [{ stockId: 'light', massFraction: 0.9 }] }));
+    expect(totals.massFraction).toBeCloseTo(0.9, 12);
+    expect(totals.kilograms).toBeCloseTo(900, 9);
+  });
+
+  it('leave shares of the cost out where a stock is paid to be taken', () => {
+    const paid = { ...HEAVY, pricePerTonne: -100 };
+    const { rows, totals } = recipeRows(orderOf({ stocks: [LIGHT, paid] }), mixOf({ costPerTonne: 725 }));
+    expect(rows.every(({ costShare }) => costShare === undefined)).toBe(true);
+    expect(totals).not.toHaveProperty('costShare');
+    const idle = recipeRows(orderOf({ stocks: [LIGHT, HEAVY, { ...paid, id: 'idle' }] }), mixOf());
+    expect(idle.totals.costShare).toBeCloseTo(1, 12);
+  });
+});
+
 describe('the recipe as a block for a spreadsheet', () => {
+  const copied = (name = LIGHT.name) => {
+    const order = orderOf({ batchTonnes: 8, stocks: [{ ...LIGHT, name }, HEAVY] });
+    const cautions = [{ kind: 'trial blend' as const, message: 'Make a trial blend first.' }];
+    return recipeText({ title: 'Gear oil', proof: 'Cheapest.', cautions, ...recipeRows(order, mixOf()) }).split('\n');
+  };
+
+  it('says above the figures what they are for, what is proven and what to do first', () => {
+    expect(copied().slice(0, 3)).toEqual([
+      'Gear oil',
+      'Cheapest. A prediction: passing is for the laboratory.',
+      'Make a trial blend first.',
+    ]);
+  });
+
   it('has a heading, a line a stock and the total, with as many cells each', () => {
-    const { rows, totals, batch } = recipeRows(orderOf({ batchTonnes: 8 }), mixOf());
-    const lines = recipeText(rows, totals, batch).split('\n');
+    const lines = copied().slice(3);
     expect(lines).toHaveLength(4);
     expect(new Set(lines.map((line) => line.split('\t').length))).toEqual(new Set([8]));
     expect(lines[1]).toBe('Light oil\tGroup III\t75.000\t77.143\t6000.0\t7500.0\t50.0\t14.00');
+    expect(lines[3]).toBe('Total\t\t100.000\t100.000\t8000.0\t9722.2\t100.0\t');
+  });
+
+  it('gives a spreadsheet no formula and no stray cells', () => {
+    expect(copied('=1+1')[4]).toMatch(/^'=1\+1\t/);
+    expect(copied('a\tb\nc')[4]).toMatch(/^a b c\tGroup III/);
   });
 });
