@@ -35,11 +35,13 @@ export function App() {
           )}
         </div>
         <div id="answer" className={styles.answer}>
-          {orderId !== undefined && (
-            <ErrorBoundary key={orderId} what="The answer">
-              <AnswerPanel orderId={orderId} />
-            </ErrorBoundary>
-          )}
+          <div className={styles.answerSheet}>
+            {orderId !== undefined && (
+              <ErrorBoundary key={orderId} what="The answer">
+                <AnswerPanel orderId={orderId} />
+              </ErrorBoundary>
+            )}
+          </div>
         </div>
         <div id="stocks" className={styles.stocks}>
           <ErrorBoundary what="The stocks">
