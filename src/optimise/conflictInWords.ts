@@ -1,5 +1,6 @@
 import type { Order } from './order';
 import type { ModelRow, SearchModel } from './rows/searchModel';
+import { doseInWords, percent, ruleInWords } from './ruleInWords';
 
 /** What stands in the way of an impossible order, as far as the proofs tell. */
 export interface Conflict {
@@ -9,13 +10,15 @@ export interface Conflict {
   rules: string[];
 }
 
-function ruleInWords(row: ModelRow, order: Order, model: SearchModel): string | undefined {
-  const { source } = row;
+function rowInWords({ source }: ModelRow, order: Order, model: SearchModel): string | undefined {
   if (source.kind === 'dose') {
-    const stock = model.stocks.find((candidate) => candidate.id === order.doses?.[source.dose]?.stockId);
-    return `the dose of ${stock?.name ?? 'a stock'}`;
+    const dose = order.doses?.[source.dose];
+    return dose && doseInWords(dose, order.stocks);
   }
-  if (source.kind === 'share') return `rule ${source.share + 1} on shares`;
+  if (source.kind === 'share') {
+    const rule = order.shares?.[source.share];
+    return rule && ruleInWords(rule, order.stocks);
+  }
   if (source.kind === 'most stocks') return `at most ${order.mostStocks} stocks`;
   if (source.kind === 'presence') return `the least dose of ${model.stocks[source.stock].name}`;
   return undefined;
@@ -32,17 +35,13 @@ export function impossibleBounds(model: SearchModel): string[] {
   );
 }
 
-function percent(share: number): string {
-  return `${Number((100 * share).toPrecision(6))} %`;
-}
-
 /** The limits and rules that the proofs of impossibility lean on. */
 export function conflictOf(order: Order, model: SearchModel, rows: readonly ModelRow[], usesVi: boolean): Conflict {
   const limits = new Set<number>();
   const rules = new Set(impossibleBounds(model));
   for (const row of rows) {
     if (row.source.kind === 'limit') limits.add(row.source.limit);
-    const words = ruleInWords(row, order, model);
+    const words = rowInWords(row, order, model);
     if (words) rules.add(words);
   }
   if (usesVi && model.vi?.min) limits.add(model.vi.min.limit);
