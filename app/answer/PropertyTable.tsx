@@ -36,7 +36,7 @@ export function PropertyTable({
           <tr key={test} className={styles.unlimited}>
             <th scope="row">{test}</th>
             <td colSpan={2} className={styles.laboratory}>
-              not predicted: laboratory only
+              laboratory only
             </td>
           </tr>
         ))}
@@ -50,7 +50,11 @@ function Row({ row, others }: { row: PropertyRow; others: string | undefined }) 
     <tr className={classNames(row.limits.length === 0 && styles.unlimited)}>
       <th scope="row" title={row.fullName}>
         {row.name}
-        {row.asTheRest && <span className={styles.small}>{row.asTheRest}</span>}
+        {row.asTheRest.length > 0 && (
+          <span className={styles.small} title={row.asTheRest.join(', ')}>
+            {row.asTheRest.length === 1 ? 'one stock' : `${row.asTheRest.length} stocks`} as the rest
+          </span>
+        )}
         {others && <span className={styles.small}>other rules: {others}</span>}
       </th>
       <td className={styles.value} title={row.estimated}>

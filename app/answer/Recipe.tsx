@@ -47,7 +47,7 @@ export const Recipe = memo(function Recipe({
         text={() => recipeText({ title, proof, cautions: outcome.cautions, rows, totals, batch })}
       />
       <Section title="Predicted properties" level={3} className={styles.part}>
-        <p className={styles.soft}>{gradesInWords(outcome)}</p>
+        <p className={styles.grades}>{gradesInWords(outcome)}</p>
         <PropertyTable order={order} outcome={outcome} laboratoryOnly={laboratoryOnly} />
         <SpreadTable spread={outcome.properties?.spread ?? []} ownRule={order.viscosityRule ?? 'wright'} />
         <p className={styles.soft}>

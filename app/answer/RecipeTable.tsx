@@ -22,7 +22,7 @@ export function RecipeTable({
   text(): string;
 }) {
   const looks = looksOf(rows.map(({ family }) => family));
-  const digits = amountDigits(totals.kilograms);
+  const digits = amountDigits(batch.kilograms);
   const showsLeft = rows.some(({ leftTonnes }) => leftTonnes !== undefined);
   const showsCost = rows.some(({ costShare }) => costShare !== undefined);
   const width = 4 + Number(showsCost) + Number(showsLeft);

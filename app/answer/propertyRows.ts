@@ -24,7 +24,7 @@ export interface PropertyRow {
   /** Some of the figures behind it are estimates. */
   estimated?: string;
   /** Stocks that took the value of the rest of the mix. */
-  asTheRest?: string;
+  asTheRest: string[];
   limits: { range: string; room: string; tone: 'plain' | 'on' | 'bad' }[];
 }
 
@@ -72,7 +72,7 @@ export function propertyRows(order: Order, { properties, checks }: BlendOutcome)
         ...(estimatedFrom.length > 0 && {
           estimated: `rests on estimated figures of ${namesOf(estimatedFrom, order)}`,
         }),
-        ...(value !== undefined && asTheRest.length > 0 && { asTheRest: `as the rest: ${namesOf(asTheRest, order)}` }),
+        asTheRest: value === undefined ? [] : asTheRest.map((id) => namesOf([id], order)),
         limits: checks
           .filter((check) => check.property === property && check.celsius === celsius)
           .flatMap((check) => limitRow(check, order, definition)),

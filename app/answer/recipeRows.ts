@@ -100,7 +100,7 @@ function totalsOf(rows: readonly RecipeRow[]): RecipeTotals {
 }
 
 /** Decimals of kilograms and litres: what a scale of that batch can show. */
-export function amountDigits(totalKilograms: number): number {
-  if (totalKilograms >= 10_000) return 0;
-  return totalKilograms >= 500 ? 1 : 2;
+export function amountDigits(batchKilograms: number): number {
+  if (batchKilograms >= 10_000) return 0;
+  return batchKilograms >= 500 ? 1 : 2;
 }

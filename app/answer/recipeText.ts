@@ -14,7 +14,7 @@ export interface RecipeToCopy {
 
 /** The recipe as a block for a spreadsheet: tabs between cells, headings with units, proof and cautions above. */
 export function recipeText({ title, proof, cautions, rows, totals, batch }: RecipeToCopy): string {
-  const digits = amountDigits(totals.kilograms);
+  const digits = amountDigits(batch.kilograms);
   const number = (value: number | undefined, decimals: number) =>
     value === undefined ? '' : formatNumber(value, decimals);
   const percent = (share: number | undefined, decimals: number) =>
