@@ -1,4 +1,4 @@
-import { lazy, Suspense, useMemo } from 'react';
+import { lazy, memo, Suspense, useMemo } from 'react';
 import type { BlendOutcome, Order } from '../../src';
 import { useWidth } from '../parts/useWidth';
 import { ErrorBoundary } from '../shell/ErrorBoundary';
@@ -12,8 +12,16 @@ import { viscosityWindows } from './viscosityWindows';
 /** Recharts is a third of the page's weight: it is fetched when the rest is already on screen. */
 const ViscosityChart = lazy(() => import('./ViscosityChart'));
 
-/** The viscosity-temperature chart of a recipe, its table, and what not to read into it. */
-export function LazyViscosityChart({ order, outcome }: { order: Order; outcome: BlendOutcome }) {
+interface ChartProps {
+  order: Order;
+  outcome: BlendOutcome;
+}
+
+/**
+ * The viscosity-temperature chart of a recipe, its table, and what not to read into it. Memoised, so that the page can
+ * let it lag behind its numbers.
+ */
+export const LazyViscosityChart = memo(function LazyViscosityChart({ order, outcome }: ChartProps) {
   const [frame, width] = useWidth<HTMLDivElement>(400);
   const lines = useMemo(() => viscosityLines(order, outcome), [order, outcome]);
   const windows = useMemo(() => viscosityWindows(order, outcome), [order, outcome]);
@@ -44,7 +52,7 @@ export function LazyViscosityChart({ order, outcome }: { order: Order; outcome: 
       <ChartTable lines={lines} windows={windows} />
     </div>
   );
-}
+});
 
 function Placeholder({ width }: { width: number }) {
   return (

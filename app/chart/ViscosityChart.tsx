@@ -61,7 +61,18 @@ export default function ViscosityChart({ scene, width }: { scene: ChartScene; wi
           className={kind === 'limit' ? styles.limit : styles.grade}
         />
       ))}
-      {[...lines].reverse().flatMap(strokes)}
+      {PENS.map((pen) => (
+        <Line
+          key={pen.name}
+          data={strokes(lines, pen)}
+          dataKey="y"
+          type="linear"
+          isAnimationActive={false}
+          activeDot={false}
+          dot={pen.dots && { r: 2, className: styles.dot }}
+          className={classNames(styles.line, pen.mix && styles.mix, pen.dashed && styles.dashed)}
+        />
+      ))}
       {labelled.map(({ id, name, isMix }, place) => (
         <text
           key={id}
@@ -86,25 +97,22 @@ function kvText(kv: number | undefined): string {
 
 const POWERS: Readonly<Record<number, string>> = { 1e5: '10⁵', 1e6: '10⁶', 1e7: '10⁷' };
 
-function strokes({ id, isMix, solid, dashed }: DrawnLine) {
-  const shared = { dataKey: 'y', type: 'linear', isAnimationActive: false, activeDot: false } as const;
-  const className = classNames(styles.line, isMix && styles.mix);
-  return [
-    ...dashed.map((data, place) => (
-      <Line
-        key={`${id} dashed ${data[0]?.x ?? place}`}
-        {...shared}
-        data={data}
-        dot={false}
-        className={classNames(className, styles.dashed)}
-      />
-    )),
-    <Line
-      key={`${id} solid`}
-      {...shared}
-      data={solid}
-      dot={isMix ? false : { r: 2, className: styles.dot }}
-      className={className}
-    />,
-  ];
+/** The mix is drawn last, over the stocks. Its line is calculated, so it has no points. */
+const PENS = [
+  { name: 'stocks dashed', mix: false, dashed: true, dots: false },
+  { name: 'stocks', mix: false, dashed: false, dots: true },
+  { name: 'mix dashed', mix: true, dashed: true, dots: false },
+  { name: 'mix', mix: true, dashed: false, dots: false },
+] as const;
+
+/**
+ * Everything one pen draws, as a single line with gaps: Recharts takes several milliseconds for each of its lines,
+ * whatever is in it, and the chart has to keep up with a limit being dragged.
+ */
+function strokes(lines: readonly DrawnLine[], { mix, dashed }: (typeof PENS)[number]) {
+  const parts = lines
+    .filter(({ isMix }) => isMix === mix)
+    .flatMap((line) => (dashed ? line.dashed : [line.solid]))
+    .filter(({ length }) => length > 0);
+  return parts.flatMap((part) => [...part, { x: part.at(-1)?.x, y: null }]);
 }

@@ -14,8 +14,10 @@ describe('the viscosity-temperature chart', () => {
     render(<LazyViscosityChart order={order} outcome={outcome} />);
     const chart = await screen.findByRole('img', { name: /Viscosity against temperature/ }, PATIENCE);
     for (const name of ['Mix', 'Thin', 'Thick']) expect(within(chart).getByText(name)).toBeInTheDocument();
-    // A solid and two dashed parts for the mix and either stock.
-    expect(chart.querySelectorAll('.recharts-line-curve')).toHaveLength(9);
+    // A solid and two dashed parts for the mix and either stock, drawn with four pens.
+    const curves = [...chart.querySelectorAll('.recharts-line-curve')];
+    expect(curves).toHaveLength(4);
+    expect(curves.flatMap((curve) => curve.getAttribute('d')?.match(/M/g) ?? [])).toHaveLength(9);
     expect(chart.querySelectorAll('.recharts-reference-area')).toHaveLength(1);
     expect(within(chart).getByText('40')).toBeInTheDocument();
   });

@@ -12,12 +12,21 @@ const order = orderOf({ limits: [{ property: 'kv', celsius: 40, min: 30, max: 40
 const lines = viscosityLines(order, mixOf());
 const windows = viscosityWindows(order, mixOf());
 
+/** How many lines the paths draw: each begins with a move. */
+function partsOf(container: HTMLElement, selector: string): number {
+  const paths = [...container.querySelectorAll(selector)];
+  return paths.reduce((count, path) => count + (path.getAttribute('d')?.match(/M/g)?.length ?? 0), 0);
+}
+
 describe('the viscosity-temperature chart', () => {
   it('names every line, dashes the extrapolated parts, draws the limit, and brings no style element along', () => {
     const { container } = render(<ViscosityChart scene={chartScene(lines, windows, plotSize(400))} width={400} />);
     for (const name of ['Mix', 'Light oil', 'Heavy oil']) expect(screen.getByText(name)).toBeInTheDocument();
-    expect(container.querySelectorAll('.line.dashed path')).toHaveLength(6);
-    expect(container.querySelectorAll('.line:not(.dashed) path')).toHaveLength(3);
+    // Two dashed parts and a solid one for the mix and either stock.
+    expect(partsOf(container, '.line.dashed:not(.mix) path')).toBe(4);
+    expect(partsOf(container, '.line:not(.dashed):not(.mix) path')).toBe(2);
+    expect(partsOf(container, '.line.dashed.mix path')).toBe(2);
+    expect(partsOf(container, '.line.mix:not(.dashed) path')).toBe(1);
     expect(container.querySelectorAll('.limit path')).toHaveLength(1);
     // The content security policy allows no style element.
     expect(document.querySelectorAll('style')).toHaveLength(0);
