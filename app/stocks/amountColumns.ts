@@ -1,5 +1,5 @@
 import type { Product } from '../../src';
-import { formatForEditing, formatNumber, parseNumber } from '../parts/numberText';
+import { formatForEditing, parseNumber } from '../parts/numberText';
 import { environment } from '../state/environment';
 import { type CellView, type Column, dropUnread, keepUnread } from './column';
 
@@ -34,7 +34,7 @@ function amountColumn({ factor = 1, ...amount }: Amount): Column {
     const problem = amount.problem?.(value, product);
     const caution = amount.caution?.(value);
     return {
-      text: formatNumber(shown(value), amount.digits),
+      text: formatForEditing(shown(value), amount.digits),
       edit: formatForEditing(shown(value), 0),
       ...(problem && { problem }),
       ...(caution && { caution }),

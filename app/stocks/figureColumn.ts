@@ -2,7 +2,7 @@ import type { Figure, FigureOrigin, Product, PropertyDefinition } from '../../sr
 import { formatForEditing, parseNumber } from '../parts/numberText';
 import { type CellView, type Column, dropUnread, keepUnread } from './column';
 import { figureProblem, unreadReason } from './figureProblem';
-import { figureText } from './figureText';
+import { enteredText, figureText } from './figureText';
 import { type FigureAt, figureKey, figureOf, putFigure } from './productFigures';
 import { estimatedKv40 } from './statedVi';
 
@@ -50,7 +50,7 @@ function viewOf(product: Product, definition: PropertyDefinition, at: FigureAt):
   if (figure.origin === 'as the rest') return { text: 'rest', edit: 'rest', state: 'rest', title };
   const problem = figureProblem(product, definition, at);
   return {
-    text: figureText(definition, figure.value),
+    text: enteredText(definition, figure.value),
     edit: formatForEditing(figure.value, 0),
     state: STATES[figure.origin],
     title,
