@@ -1,4 +1,4 @@
-import { type SolveOptions, solveBlend } from '../../src';
+import { type BlendOutcome, type SolveOptions, solveBlend } from '../../src';
 import type { FromWorker, ToWorker } from './protocol';
 
 type Request = Extract<ToWorker, { kind: 'solve' }>;
@@ -12,6 +12,10 @@ export interface WorkerSurroundings {
   now(): number;
   /** Lets messages in. */
   pause(): Promise<void>;
+}
+
+function kv100Of({ properties }: BlendOutcome): number | undefined {
+  return properties?.properties.find(({ property, celsius }) => property === 'kv' && celsius === 100)?.value;
 }
 
 /** An error in a few words. What the wasm loader adds for its own developers means nothing here. */
@@ -29,6 +33,8 @@ export function serveSolves({ send, loadEngine, now, pause }: WorkerSurroundings
   const engine = loadEngine();
   let newest = 0;
   let cancelled = 0;
+  /** KV100 of the last recipe: an order is mostly the one before, with a limit moved. */
+  let near: number | undefined;
   let queue: Promise<void> = engine.then(
     () => send({ kind: 'ready' }),
     (error: unknown) => send({ kind: 'no engine', message: inWords(error) }),
@@ -41,9 +47,11 @@ export function serveSolves({ send, loadEngine, now, pause }: WorkerSurroundings
         now,
         pause,
         linearEngine: await engine,
+        ...(near === undefined ? {} : { near }),
         isCancelled: () => id < newest || id <= cancelled,
         onProgress: (progress) => send({ kind: 'progress', id, progress }),
       });
+      near = kv100Of(outcome) ?? near;
       send({ kind: 'outcome', id, outcome });
     } catch (error) {
       send({ kind: 'error', id, message: inWords(error) });

@@ -1,5 +1,5 @@
 import wasmUrl from 'highs/runtime?url';
-import { createHighsEngine } from '../../src';
+import { createHighsEngine, reusingSessions } from '../../src';
 import { serveInWorker } from './workerScope';
 
-serveInWorker(() => createHighsEngine({ locateFile: () => wasmUrl }));
+serveInWorker(async () => reusingSessions(await createHighsEngine({ locateFile: () => wasmUrl })));

@@ -58,7 +58,7 @@ export class BranchAndBound {
 
   async run(): Promise<SearchResult> {
     try {
-      this.#open.push({ bound: -Infinity, depth: 0, ...(this.model.vi ? { kv100: wholeInterval(this.model) } : {}) });
+      this.#start();
       const stopped = await this.#loop();
       const box = boxOf(this.model);
       if (stopped === 'finished' && box) this.#finder.chooseAmongEquals(box, wholeInterval(this.model));
@@ -66,6 +66,19 @@ export class BranchAndBound {
     } finally {
       this.#program.dispose();
     }
+  }
+
+  /** Opens the whole search, split at once where a similar order had its recipe and this one has one too. */
+  #start(): void {
+    const kv100 = wholeInterval(this.model);
+    const root: SearchNode = { bound: -Infinity, depth: 0, ...(kv100 ? { kv100 } : {}) };
+    const { near } = this.options;
+    const { vi } = this.model;
+    if (near !== undefined && vi && kv100 && this.#finder.startNear(near, kv100)) {
+      const { best } = this.#finder;
+      if (best && this.#splitKv100(root, mixViscosity(vi, best.values).kv100)) return;
+    }
+    this.#open.push(root);
   }
 
   async #loop(): Promise<SearchResult['stopped']> {

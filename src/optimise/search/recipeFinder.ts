@@ -65,6 +65,19 @@ export class RecipeFinder {
     if (result.status === 'optimal' && this.take(result)) this.#remember(result.duals);
   }
 
+  /** Looks for a recipe near a KV100 known from a similar order; true where there is one. */
+  startNear(kv100: number, interval: Kv100Interval): boolean {
+    const { vi, presences, wholeLots } = this.#model;
+    if (!vi?.min || presences.length > 0 || wholeLots.length > 0) return false;
+    const place = this.#followTangents(vi, interval, kv100);
+    if (place === undefined) return false;
+    this.#program.setViRows(innerRows(vi, interval, place));
+    const result = this.#program.solve();
+    if (result.status !== 'optimal' || !this.take(result)) return false;
+    this.#remember(result.duals);
+    return true;
+  }
+
   /**
    * Among recipes of the proven cost the same one is always taken, the one of least rank sum: only columns that cost
    * nothing to move may move, so that no trace of a dearer stock slips in under the ceiling.
