@@ -46,6 +46,11 @@ export const Recipe = memo(function Recipe({
         batch={batch}
         text={() => recipeText({ title, proof, cautions: outcome.cautions, rows, totals, batch })}
       />
+      <Section title="Viscosity and temperature" level={3} className={styles.part}>
+        <ErrorBoundary what="The chart">
+          <LazyViscosityChart order={chartedOrder} outcome={charted} />
+        </ErrorBoundary>
+      </Section>
       <Section title="Predicted properties" level={3} className={styles.part}>
         <p className={styles.grades}>{gradesInWords(outcome)}</p>
         <PropertyTable order={order} outcome={outcome} laboratoryOnly={laboratoryOnly} />
@@ -54,11 +59,6 @@ export const Recipe = memo(function Recipe({
           API groups of the stocks, by mass: {apiGroupsInWords(order, outcome.recipe)}. The groups class stocks, not
           mixes.
         </p>
-      </Section>
-      <Section title="Viscosity and temperature" level={3} className={styles.part}>
-        <ErrorBoundary what="The chart">
-          <LazyViscosityChart order={chartedOrder} outcome={charted} />
-        </ErrorBoundary>
       </Section>
     </>
   );

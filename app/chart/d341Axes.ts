@@ -1,4 +1,4 @@
-import { kvFromWalther, logTemperature, waltherIndex } from '../../src';
+import { logTemperature, waltherIndex } from '../../src';
 
 /**
  * The axes of ASTM D341: abscissa log10 of the absolute temperature, ordinate W = log10(log10 Z) of the kinematic
@@ -47,16 +47,6 @@ function spaced(values: readonly number[], place: (value: number) => number, apa
     if (ticks.every((tick) => Math.abs(tick.at - at) >= apart)) ticks.push({ at, value });
   }
   return ticks.sort((a, b) => a.at - b.at);
-}
-
-/** Temperature [°C] of a place on the abscissa. */
-export function celsiusAt(x: number): number {
-  return 10 ** x - 273.15;
-}
-
-/** Viscosity [mm²/s] of a place on the ordinate. */
-export function kvAt(y: number): number {
-  return kvFromWalther(y);
 }
 
 /** Place of a viscosity on the ordinate, undefined where D341 has none (0.21 to 2·10⁷ mm²/s). */

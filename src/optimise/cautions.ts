@@ -1,6 +1,6 @@
 import type { PredictedProperties } from '../blend/predictedProperties';
 import { propertyDefinition } from '../property/propertyTable';
-import { VISCOSITY_RULE_TABLE } from '../property/viscosityRule';
+import { VISCOSITY_RULE_TABLE, type ViscosityRule } from '../property/viscosityRule';
 import { findFigure } from '../stock/findFigure';
 import type { Recipe, Stock } from '../stock/stock';
 import { limitInWords } from './checkLimits';
@@ -34,11 +34,13 @@ function trialBlend(order: Order, checks: readonly LimitCheck[], predicted: Pred
   const parts = checks.flatMap((check) => {
     const rules = disagreeing(check, predicted);
     if (rules.length === 0) return [];
-    const names = rules.map((rule) => VISCOSITY_RULE_TABLE[rule as keyof typeof VISCOSITY_RULE_TABLE].label);
-    return [`${limitInWords(order.limits[check.limit], order)} (outside by ${names.join(', ')})`];
+    const names = rules.map((rule) => VISCOSITY_RULE_TABLE[rule as ViscosityRule].short).join(' and ');
+    return [
+      `by the ${names} rule${rules.length > 1 ? 's' : ''} ${limitInWords(order.limits[check.limit], order)} is outside its limit`,
+    ];
   });
   if (parts.length === 0) return [];
-  const message = `Make a trial blend first: the blending rules disagree on pass or fail for ${parts.join('; ')}.`;
+  const message = `Make a trial blend first. The blending rules disagree on pass or fail: ${parts.join('; ')}.`;
   return [{ kind: 'trial blend', message }];
 }
 

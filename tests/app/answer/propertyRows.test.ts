@@ -83,9 +83,9 @@ describe('the viscosity windows of a mix', () => {
 });
 
 describe('the API groups of a recipe', () => {
-  it('are shares by mass; PAO is Group IV (API 1509, Annex E), and what figures do not decide is not classed', () => {
+  it('are shares by mass; PAO is Group IV (API 1509, Annex E), and what figures do not decide is as stated', () => {
     // The light oil has neither saturates nor sulphur.
-    expect(apiGroupsInWords(orderOf(), mixOf().recipe ?? [])).toBe('IV 25.0 %, not classed 75.0 %');
+    expect(apiGroupsInWords(orderOf(), mixOf().recipe ?? [])).toBe('III as stated 75.0 %, IV 25.0 %');
     const order = orderOf({ stocks: [{ ...LIGHT, family: 'package' }, HEAVY] });
     expect(apiGroupsInWords(order, mixOf().recipe ?? [])).toBe('IV 25.0 %, package 75.0 %');
   });

@@ -1,10 +1,10 @@
 import { describe, expect, it } from 'vitest';
 import { plotSize } from '../../../app/chart/chartLayout';
 import { chartScene } from '../../../app/chart/chartScene';
-import { celsiusAt, kvAt } from '../../../app/chart/d341Axes';
 import { viscosityLines } from '../../../app/chart/viscosityLines';
 import { viscosityWindows } from '../../../app/chart/viscosityWindows';
 import { kinematicViscosityAt, logTemperature, type Order, waltherIndex } from '../../../src';
+import { celsiusAt, kvAt } from './axesBack';
 import { answered, stockThrough, THICK, THIN } from './chartOrders';
 
 const PLOT = plotSize(366);

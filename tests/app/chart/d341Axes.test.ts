@@ -1,7 +1,8 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { celsiusAt, kvAt, placeOfKv, temperatureTicks, viscosityTicks } from '../../../app/chart/d341Axes';
+import { placeOfKv, temperatureTicks, viscosityTicks } from '../../../app/chart/d341Axes';
 import { logTemperature, waltherIndex } from '../../../src';
+import { celsiusAt, kvAt } from './axesBack';
 
 describe('the axes of ASTM D341', () => {
   it('place temperatures and viscosities by the standard’s formula', () => {
