@@ -37,6 +37,7 @@ function specificVolume(stock: Stock, options: PredictionOptions): number | Excl
 function wrightSlope(stock: Stock, celsius: number, kv: number, options: PredictionOptions): number | StockValue {
   const anchor = celsius < 70 ? 100 : 40;
   const other = stockValue(stock, { property: 'kv', celsius: anchor }, options);
+  if (other.state === 'as the rest') return halfRest(stock, celsius, anchor);
   if (other.state !== 'known') return other;
   const slope = (logTemperature(anchor) - logTemperature(celsius)) / (waltherIndex(other.value) - waltherIndex(kv));
   if (slope < 0 && Number.isFinite(slope)) return -slope;
@@ -46,6 +47,17 @@ function wrightSlope(stock: Stock, celsius: number, kv: number, options: Predict
     message:
       `${stock.name}: viscosity must fall as temperature rises, but it is ${kv} mm²/s at ${celsius} °C and ` +
       `${other.value} mm²/s at ${anchor} °C. Check both figures.`,
+  };
+}
+
+/** The Wright method needs both temperatures of a stock, or neither. */
+function halfRest(stock: Stock, celsius: number, anchor: number): StockValue {
+  return {
+    state: 'unknown',
+    missing: { property: 'kv', celsius: anchor },
+    message:
+      `${stock.name}: its viscosity is given at ${celsius} °C but taken from the rest at ${anchor} °C. ` +
+      'Enter both, or take both from the rest.',
   };
 }
 

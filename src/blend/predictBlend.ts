@@ -4,6 +4,7 @@ import { VISCOSITY_RULES } from '../property/viscosityRule';
 import { isBaseOil } from '../stock/family';
 import type { Recipe, Stock } from '../stock/stock';
 import { type BlendQuantity, blendQuantity } from './blendQuantity';
+import { blendValue } from './blendValue';
 import type { PredictedProperties, PredictedProperty, RuleSpread } from './predictedProperties';
 import type { PredictionOptions, PropertyAt } from './predictionOptions';
 
@@ -54,20 +55,16 @@ function mean(quantity: BlendQuantity, parts: readonly Part[]): PredictedPropert
     asTheRest: [],
     estimatedFrom: [],
   };
-  let weighted = 0;
-  let weight = 0;
-  parts.forEach(({ stock, massFraction }, place) => {
+  parts.forEach(({ stock }, place) => {
     const term = quantity.terms[place];
     if (term.state === 'unknown') result.unknownFrom.push(stock.id);
     else if (term.state === 'as the rest') result.asTheRest.push(stock.id);
-    else {
-      if (term.estimated) result.estimatedFrom.push(stock.id);
-      weighted += massFraction * term.weight * term.index;
-      weight += massFraction * term.weight;
-    }
+    else if (term.estimated) result.estimatedFrom.push(stock.id);
   });
-  if (result.unknownFrom.length > 0 || !(weight > 0)) return result;
-  const value = quantity.index.fromIndex(weighted / weight);
+  const value = blendValue(
+    quantity,
+    parts.map((part) => part.massFraction),
+  );
   return Number.isFinite(value) ? { ...result, value } : result;
 }
 

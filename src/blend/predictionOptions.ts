@@ -15,3 +15,8 @@ export interface PropertyAt {
   property: string;
   celsius?: number;
 }
+
+/** A property at a temperature, without the key where there is none. */
+export function propertyAt(property: string, celsius: number | undefined): PropertyAt {
+  return celsius === undefined ? { property } : { property, celsius };
+}

@@ -4,7 +4,7 @@ import { kv40ForViscosityIndex } from '../property/viscosityIndex';
 import type { Figure } from '../stock/figure';
 import { findFigure } from '../stock/findFigure';
 import type { Stock } from '../stock/stock';
-import type { PredictionOptions, PropertyAt } from './predictionOptions';
+import { type PredictionOptions, type PropertyAt, propertyAt } from './predictionOptions';
 
 /** What is known of one property of one stock. `missing` names the figure that would help. */
 export type StockValue =
@@ -56,12 +56,11 @@ function viscosityLine(stock: Stock): ViscosityLine {
 }
 
 function viscosityValue(stock: Stock, celsius: number, options: PredictionOptions): StockValue {
-  if (stock.figures.some((figure) => figure.property === 'kv' && figure.origin === 'as the rest')) {
-    return { state: 'as the rest' };
-  }
   const exact = findFigure(stock, 'kv', celsius);
   const direct = exact && known(exact);
   if (direct) return direct;
+  const stated = stock.figures.filter((figure) => figure.property === 'kv');
+  if (stated.length > 0 && stated.every((figure) => figure.origin === 'as the rest')) return { state: 'as the rest' };
   try {
     const { points, estimated } = viscosityLine(stock);
     if (points.length < 2) {
@@ -85,8 +84,15 @@ function tableValue(stock: Stock, { property, celsius }: PropertyAt, options: Pr
     const value = depressed && known(depressed);
     if (value) return value;
   }
-  const figure = findFigure(stock, property, celsius);
-  return (figure && known(figure)) ?? unknown(stock, { property, celsius }, options);
+  const figure = findFigure(stock, property, celsius) ?? withoutTemperature(stock, { property, celsius }, options);
+  return (figure && known(figure)) ?? unknown(stock, propertyAt(property, celsius), options);
+}
+
+/** A figure stated without its temperature, where the property has but one (density at 15 °C). */
+function withoutTemperature(stock: Stock, { property, celsius }: PropertyAt, options: PredictionOptions) {
+  const temperatures = propertyDefinition(property, options.ownProperties)?.temperatures;
+  if (temperatures?.length !== 1 || temperatures[0] !== celsius) return undefined;
+  return stock.figures.find((figure) => figure.property === property && figure.celsius === undefined);
 }
 
 /** A figure that cannot be right counts as unknown, with the reason. */

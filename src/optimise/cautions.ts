@@ -4,7 +4,7 @@ import { VISCOSITY_RULE_TABLE, type ViscosityRule } from '../property/viscosityR
 import { findFigure } from '../stock/findFigure';
 import type { Recipe, Stock } from '../stock/stock';
 import { limitInWords } from './checkLimits';
-import type { Order } from './order';
+import type { Limit, Order } from './order';
 import type { Caution, LimitCheck } from './outcome';
 
 /** The cube-root rule is far off for unlike stocks by its nature: its disagreement tells nothing. */
@@ -85,7 +85,7 @@ function mixedMethods(order: Order, used: readonly Stock[]): Caution[] {
 }
 
 /** A thin and a heavy stock together: the linear rule of Noack reads low (common practice, no source). */
-function model(order: Order, recipe: Recipe, used: readonly Stock[]): Caution[] {
+function whereTheRulesFail(order: Order, recipe: Recipe, used: readonly Stock[]): Caution[] {
   const cautions: Caution[] = [];
   if (order.limits.some((limit) => limit.property === 'noack')) {
     const heavy = used.flatMap((stock) => {
@@ -107,6 +107,35 @@ function model(order: Order, recipe: Recipe, used: readonly Stock[]): Caution[] 
   return cautions;
 }
 
+/** What the order leaves uncounted. */
+function uncounted(order: Order, recipe: Recipe): Caution[] {
+  const cautions: Caution[] = [];
+  const dosesDepressant = order.stocks.some(
+    (stock) => stock.family === 'depressant' && recipe.some((line) => line.stockId === stock.id),
+  );
+  if (order.depressant && !dosesDepressant && order.limits.some((limit) => limit.property === 'pourPoint')) {
+    const message = 'Pour points with depressant are counted, but no depressant is dosed: its cost is not.';
+    cautions.push({ kind: 'model', message });
+  }
+  const inDrums = order.stocks.filter(
+    (stock) => stock.lotTonnes !== undefined && recipe.some((line) => line.stockId === stock.id),
+  );
+  if (inDrums.length > 0 && typeof order.batchTonnes !== 'number') {
+    cautions.push({ kind: 'model', message: `${names(inDrums)}: whole drums are counted for a fixed batch only.` });
+  }
+  const bent = order.limits.filter((limit) => limit.aim !== undefined && !averagesByMass(limit, order));
+  for (const limit of bent) {
+    const message = `${limitInWords(limit, order)}: deviations from the aim are counted to first order near it.`;
+    cautions.push({ kind: 'model', message });
+  }
+  return cautions;
+}
+
+function averagesByMass(limit: Limit, order: Order): boolean {
+  const definition = propertyDefinition(limit.property, order.ownProperties);
+  return definition?.index === 'linear' && definition.basis === 'mass';
+}
+
 /** What the reader of a recipe must know beside its figures. */
 export function cautionsOf(
   order: Order,
@@ -120,6 +149,7 @@ export function cautionsOf(
     ...asTheRest(predicted, used, order),
     ...estimated(predicted, used, order),
     ...mixedMethods(order, used),
-    ...model(order, recipe, used),
+    ...whereTheRulesFail(order, recipe, used),
+    ...uncounted(order, recipe),
   ];
 }

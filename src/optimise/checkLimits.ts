@@ -32,7 +32,11 @@ function checkLimit(order: Order, limit: Limit, place: number, valueAt: ValueOf)
 
 /** Holds every limit of an order against a mix, in physical units. */
 export function checkLimits(order: Order, valueAt: ValueOf): LimitCheck[] {
-  return order.limits.flatMap((limit, place) => checkLimit(order, limit, place, valueAt) ?? []);
+  return order.limits.flatMap((limit, place) => {
+    const check = checkLimit(order, limit, place, valueAt);
+    const saysNothing = check && Number.isNaN(check.value) && check.min === undefined && check.max === undefined;
+    return check && !saysNothing ? check : [];
+  });
 }
 
 /** A limit in words, "Noack volatility". */

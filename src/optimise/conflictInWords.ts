@@ -1,6 +1,8 @@
 import type { Order } from './order';
 import type { ModelRow, SearchModel } from './rows/searchModel';
 import { doseInWords, percent, ruleInWords } from './ruleInWords';
+import type { SearchResult } from './search/branchAndBound';
+import type { StockBound } from './search/searchProgram';
 
 /** What stands in the way of an impossible order, as far as the proofs tell. */
 export interface Conflict {
@@ -35,16 +37,23 @@ export function impossibleBounds(model: SearchModel): string[] {
   );
 }
 
+function boundInWords({ stock, end }: StockBound, { stocks, lower, upper }: SearchModel): string {
+  const { name } = stocks[stock];
+  if (end === 'least') return `${name} at least ${percent(lower[stock])} of the mix`;
+  return `${name} at most ${percent(upper[stock])} of the mix, by its dose or by what is on hand`;
+}
+
 /** The limits and rules that the proofs of impossibility lean on. */
-export function conflictOf(order: Order, model: SearchModel, rows: readonly ModelRow[], usesVi: boolean): Conflict {
+export function conflictOf(order: Order, model: SearchModel, found: SearchResult['conflict']): Conflict {
   const limits = new Set<number>();
   const rules = new Set(impossibleBounds(model));
-  for (const row of rows) {
+  for (const row of found.rows) {
     if (row.source.kind === 'limit') limits.add(row.source.limit);
     const words = rowInWords(row, order, model);
     if (words) rules.add(words);
   }
-  if (usesVi && model.vi?.min) limits.add(model.vi.min.limit);
-  if (usesVi && model.vi?.max) limits.add(model.vi.max.limit);
+  for (const bound of found.bounds) rules.add(boundInWords(bound, model));
+  if (found.usesVi && model.vi?.min) limits.add(model.vi.min.limit);
+  if (found.usesVi && model.vi?.max) limits.add(model.vi.max.limit);
   return { limits: [...limits].sort((a, b) => a - b), rules: [...rules] };
 }

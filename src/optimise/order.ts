@@ -15,12 +15,16 @@ export interface Limit {
   min?: number;
   max?: number;
   /** Strict upper limit: the mix stays one reporting unit inside. `true` makes the `max` beside it strict. */
-  below?: number | true;
+  below?: number | boolean;
   /** Margin: the mix stays inside every stated end by this much, same unit. Default 0. */
   insideBy?: number;
   /** Value to come near to, beside the range. */
   aim?: number;
-  /** What a deviation of one reporting unit from `aim` may cost, currency per tonne. Default 1. */
+  /**
+   * What a deviation of one reporting unit from `aim` may cost, currency per tonne. Default 1. Deviations are counted
+   * along the property's blending index, at its slope at the aim, and at the mean weight of the stocks: exact for
+   * properties that average by mass, to first order elsewhere.
+   */
   aimWeight?: number;
 }
 
@@ -67,7 +71,7 @@ export interface Order {
   limits: Limit[];
   doses?: Dose[];
   shares?: ShareRule[];
-  /** Batch size [t]: fixed, or free within a range (then the smallest decides what is short). */
+  /** Batch size [t]: fixed, or free within a range (then the smallest decides what is short). Drums need a fixed one. */
   batchTonnes?: number | { min: number; max: number };
   /** Greatest number of stocks in the mix, compulsory ones included. */
   mostStocks?: number;

@@ -14,7 +14,7 @@ export interface Proof {
    * - `none`: nothing is proven.
    */
   kind: 'least cost' | 'within gap' | 'impossible' | 'impossible with known figures' | 'none';
-  /** Proven lower bound of the cost (plus aim penalty), currency per tonne, or per m³ where the order says so. */
+  /** Proven lower bound of `objective`, currency per tonne, or per m³ where the order says so. */
   lowerBound?: number;
   /** (cost - lowerBound) / |cost| [-]; near a cost of zero, on a thousandth of the greatest price. */
   gap?: number;
@@ -41,7 +41,7 @@ export interface LimitCheck {
 export interface LeftOut {
   stockId: string;
   name: string;
-  reason: 'unknown figure' | 'missing flag' | 'figure out of range' | 'dose of the rest';
+  reason: 'unknown figure' | 'missing flag' | 'figure out of range';
   /** The figure that is missing or cannot be used. */
   property?: string;
   celsius?: number;
@@ -72,6 +72,8 @@ export interface BlendOutcome {
   proof: Proof;
   recipe?: Recipe;
   costPerTonne?: number;
+  /** What the search made least: the cost, in the order's cost basis, and what deviations from aims count. */
+  objective?: number;
   /** Cost per m³ at 15 °C of the mix, where the densities are known. */
   costPerCubicMetre?: number;
   properties?: PredictedProperties;

@@ -58,10 +58,6 @@ export function recipeCheck(order: Order, candidates: Candidates, model: SearchM
   return (values: Float64Array): boolean => {
     const shares = sharesOf(model, values);
     if (!keepsShares(model, shares)) return false;
-    return checkLimits(order, valueOfShares(candidates, shares)).every((check) => check.passes || !hasEnds(check));
+    return checkLimits(order, valueOfShares(candidates, shares)).every((check) => check.passes);
   };
-}
-
-function hasEnds(check: { min?: number; max?: number }): boolean {
-  return check.min !== undefined || check.max !== undefined;
 }

@@ -1,5 +1,7 @@
 import { isBaseOil } from '../stock/family';
 import type { Stock } from '../stock/stock';
+import { limitInWords } from './checkLimits';
+import { checkShape } from './checkShape';
 import type { Dose, Limit, Order, ShareRule } from './order';
 import type { OrderProblem } from './outcome';
 import { limitDefinition, limitEnds } from './rows/limitEnds';
@@ -75,12 +77,17 @@ function checkLimit(limit: Limit, place: number, order: Order, problems: Problem
     );
     return;
   }
-  const { label, sense } = definition;
+  const { sense } = definition;
+  const label = limitInWords(limit, order);
+  if (definition.anyTemperature || (definition.temperatures?.length ?? 0) > 1) {
+    if (limit.celsius === undefined) problems.add([...path, 'celsius'], `${label} needs a temperature. Enter one.`);
+  }
   for (const key of ['min', 'max', 'aim'] as const) {
     problems.number([...path, key], limit[key], label, sense.min, sense.max);
   }
-  if (limit.below !== true) problems.number([...path, 'below'], limit.below, label, sense.min, sense.max);
-  else if (limit.max === undefined) problems.add([...path, 'below'], `${label}: "below" needs the number beside it.`);
+  if (typeof limit.below !== 'boolean') problems.number([...path, 'below'], limit.below, label, sense.min, sense.max);
+  else if (limit.below && limit.max === undefined)
+    problems.add([...path, 'below'], `${label}: "below" needs the number beside it.`);
   problems.number([...path, 'insideBy'], limit.insideBy, `${label}, margin`, 0);
   problems.number([...path, 'aimWeight'], limit.aimWeight, `${label}, weight of the aim`, 0);
   problems.number([...path, 'celsius'], limit.celsius, `${label}, temperature`, -100, 300);
@@ -101,7 +108,7 @@ function checkDose(dose: Dose, place: number, order: Order, problems: Problems):
   const path: Path = ['doses', place];
   const stock = order.stocks.find((candidate) => candidate.id === dose.stockId);
   if (!stock) {
-    problems.add([...path, 'stockId'], `The dose names a stock that is not among the stocks of this order.`);
+    problems.add([...path, 'stockId'], `The dose names a stock ("${dose.stockId}") that is not in this order.`);
     return;
   }
   for (const key of ['exactly', 'min', 'max'] as const) {
@@ -145,8 +152,11 @@ function checkShare(rule: ShareRule, place: number, order: Order, problems: Prob
 function checkBatch(order: Order, problems: Problems): void {
   const { batchTonnes } = order;
   if (typeof batchTonnes === 'object') {
-    problems.number(['batchTonnes', 'min'], batchTonnes.min, 'Smallest batch', 1e-6);
-    problems.number(['batchTonnes', 'max'], batchTonnes.max, 'Largest batch', 1e-6);
+    for (const end of ['min', 'max'] as const) {
+      const label = end === 'min' ? 'Smallest batch' : 'Largest batch';
+      if (batchTonnes[end] === undefined) problems.add(['batchTonnes', end], `${label} is missing. Enter it.`);
+      problems.number(['batchTonnes', end], batchTonnes[end], label, 1e-6);
+    }
     problems.range(['batchTonnes'], batchTonnes.min, batchTonnes.max, 'Batch size');
   } else problems.number(['batchTonnes'], batchTonnes, 'Batch size', 1e-6);
   if (order.mostStocks !== undefined && !(Number.isInteger(order.mostStocks) && order.mostStocks >= 1)) {
@@ -157,6 +167,8 @@ function checkBatch(order: Order, problems: Problems): void {
 
 /** Everything that makes the order no valid question; empty where it can be solved. Never throws. */
 export function validateOrder(order: Order): OrderProblem[] {
+  const shape = checkShape(order);
+  if (shape.length > 0) return shape;
   const problems = new Problems();
   checkStocks(order, problems);
   order.limits.forEach((limit, place) => void checkLimit(limit, place, order, problems));

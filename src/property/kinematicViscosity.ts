@@ -95,6 +95,7 @@ function fallingPoints(points: readonly ViscosityPoint[]): ViscosityPoint[] {
     throw new RangeError('A viscosity-temperature line needs two measured points; give a second temperature.');
   }
   const sorted = [...points].sort((a, b) => a.celsius - b.celsius);
+  for (const { kv } of sorted) waltherIndex(kv);
   for (let i = 1; i < sorted.length; i++) {
     if (!(sorted[i].celsius > sorted[i - 1].celsius) || !(sorted[i].kv < sorted[i - 1].kv)) {
       throw new RangeError(

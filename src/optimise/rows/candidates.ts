@@ -4,6 +4,7 @@ import { propertyDefinition } from '../../property/propertyTable';
 import type { Stock } from '../../stock/stock';
 import type { Order } from '../order';
 import type { LeftOut, OrderProblem } from '../outcome';
+import { percent } from '../ruleInWords';
 import { limitCelsius, limitDefinition } from './limitEnds';
 
 /** The stocks the search may use, and the properties it needs of them. */
@@ -12,8 +13,8 @@ export interface Candidates {
   stocks: Stock[];
   /** The properties that limits need, by `quantityKey`; terms run along `stocks`. */
   quantities: Map<string, BlendQuantity>;
-  /** Stocks that take the value of the rest in some limited property. */
-  takingTheRest: Set<string>;
+  /** Stocks that take the value of the rest in some limited property, with the key of that property. */
+  takingTheRest: ReadonlyMap<string, string>;
   leftOut: LeftOut[];
   problems: OrderProblem[];
 }
@@ -66,20 +67,25 @@ function obstacle(stock: Stock, quantity: BlendQuantity, place: number): LeftOut
   return { stockId: stock.id, name: stock.name, reason, ...missing, message };
 }
 
-/** Viscosity must fall as temperature rises, whatever the blending rule. */
-function risingViscosity(
+/** Viscosity must fall as temperature rises, whatever the blending rule; a viscosity index needs it at both, or neither. */
+function unfitViscosity(
   stock: Stock,
   kv40: BlendQuantity | undefined,
   kv100: BlendQuantity | undefined,
   place: number,
-) {
+): LeftOut | undefined {
   const cold = kv40?.terms[place];
   const hot = kv100?.terms[place];
-  if (cold?.state !== 'term' || hot?.state !== 'term' || cold.value > hot.value) return undefined;
+  if (!cold || !hot) return undefined;
+  if (cold.state !== hot.state) {
+    const message = `${stock.name}: KV40 and KV100 must both be given, or both be taken from the rest.`;
+    return { stockId: stock.id, name: stock.name, reason: 'unknown figure', property: 'kv', celsius: 40, message };
+  }
+  if (cold.state !== 'term' || hot.state !== 'term' || cold.value > hot.value) return undefined;
   return {
     stockId: stock.id,
     name: stock.name,
-    reason: 'figure out of range' as const,
+    reason: 'figure out of range',
     property: 'kv',
     celsius: 40,
     message: `${stock.name}: KV40 (${cold.value} mm²/s) must be above KV100 (${hot.value} mm²/s). Check both figures.`,
@@ -108,7 +114,31 @@ function whyLeftOut(
     const found = obstacle(stock, quantity, place);
     if (found) return found;
   }
-  return risingViscosity(stock, quantities.get('kv@40'), quantities.get('kv@100'), place);
+  if (order.costBasis === 'cubic metre' && quantities.get('density@15')?.terms[place].state !== 'term') {
+    const message = `${stock.name}: Density at 15 °C is needed for a cost per m³. Enter the figure to use the stock.`;
+    return { stockId: stock.id, name: stock.name, reason: 'unknown figure', property: 'density', celsius: 15, message };
+  }
+  return unfitViscosity(stock, quantities.get('kv@40'), quantities.get('kv@100'), place);
+}
+
+/** Compulsory doses of stocks that take the value of the rest, above the dose that is allowed for that. */
+function dosesAboveTheRest(order: Order, takingTheRest: ReadonlyMap<string, string>): OrderProblem[] {
+  const most = greatestDoseAsTheRest(order);
+  return (order.doses ?? []).flatMap((dose) => {
+    const key = takingTheRest.get(dose.stockId);
+    const least = dose.exactly ?? dose.min ?? 0;
+    if (key === undefined || dose.required === false || dose.of === 'base oil' || least <= most) return [];
+    const name = order.stocks.find((stock) => stock.id === dose.stockId)?.name ?? dose.stockId;
+    const message =
+      `${name} takes the value of the rest of the mix in a limited property, which is allowed up to ${percent(most)}; ` +
+      `its dose is ${percent(least)}. Enter an in-blend figure, or raise the dose allowed "as the rest".`;
+    return [{ path: ['stocks', dose.stockId, key], message }];
+  });
+}
+
+/** The share up to which a stock may take the value of the rest. */
+export function greatestDoseAsTheRest(order: Order): number {
+  return order.greatestDoseAsTheRest ?? 0.02;
 }
 
 function requiredButLeftOut(entry: LeftOut): OrderProblem {
@@ -137,11 +167,14 @@ export function findCandidates(order: Order): Candidates {
     else kept.push(place);
   });
   const quantities = new Map<string, BlendQuantity>();
-  const takingTheRest = new Set<string>();
+  const takingTheRest = new Map<string, string>();
   for (const [key, quantity] of everyQuantity) {
     quantities.set(key, { ...quantity, terms: kept.map((place) => quantity.terms[place]) });
-    for (const place of kept) if (quantity.terms[place].state === 'as the rest') takingTheRest.add(all[place].id);
+    for (const place of kept) if (quantity.terms[place].state === 'as the rest') takingTheRest.set(all[place].id, key);
   }
-  const problems = leftOut.filter((entry) => isCompulsory(order, entry.stockId)).map(requiredButLeftOut);
+  const problems = [
+    ...leftOut.filter((entry) => isCompulsory(order, entry.stockId)).map(requiredButLeftOut),
+    ...dosesAboveTheRest(order, takingTheRest),
+  ];
   return { stocks: kept.map((place) => all[place]), quantities, takingTheRest, leftOut, problems };
 }

@@ -1,6 +1,6 @@
 import { isBaseOil } from '../../stock/family';
 import type { Dose, Order } from '../order';
-import { isCompulsory } from './candidates';
+import { greatestDoseAsTheRest, isCompulsory } from './candidates';
 import { LEAST_SHARE_THAT_COUNTS, type ModelBuilder } from './modelBuilder';
 
 /** Smallest batch of the order [t]: the one for which stock on hand lasts longest. */
@@ -9,14 +9,14 @@ function smallestBatch(order: Order): number | undefined {
 }
 
 /** Greatest shares of the stocks: by their own limit, the quantity on hand, and "as the rest". */
-export function addStockBounds(builder: ModelBuilder, order: Order, takingTheRest: ReadonlySet<string>): void {
+export function addStockBounds(builder: ModelBuilder, order: Order, takingTheRest: ReadonlyMap<string, string>): void {
   const batch = smallestBatch(order);
   builder.stocks.forEach((stock, place) => {
     if (stock.greatestDose !== undefined) builder.cutUpper(place, stock.greatestDose);
     if (stock.availableTonnes !== undefined && batch !== undefined) {
       builder.cutUpper(place, stock.availableTonnes / batch);
     }
-    if (takingTheRest.has(stock.id)) builder.cutUpper(place, order.greatestDoseAsTheRest ?? 0.02);
+    if (takingTheRest.has(stock.id)) builder.cutUpper(place, greatestDoseAsTheRest(order));
     const least = stock.leastDoseIfUsed ?? 0;
     if (least > 0) {
       if (isCompulsory(order, stock.id)) builder.raiseLower(place, least);
@@ -51,6 +51,12 @@ function addDoseOfBase(builder: ModelBuilder, place: number, dose: Dose, index: 
   if (most !== undefined) builder.addRow({ kind: 'dose', dose: index }, -Infinity, 0, row(most));
 }
 
+/** The share from which a stock counts as present: its least dose, or a trace, but no more than it may be. */
+function leastPresence(builder: ModelBuilder, place: number): number {
+  const least = builder.stocks[place].leastDoseIfUsed ?? 0;
+  return least > 0 ? least : Math.min(LEAST_SHARE_THAT_COUNTS, builder.upper(place));
+}
+
 /** The doses of the order. A dose of a stock that was left out (and is not compulsory) has nothing to say. */
 export function addDoses(builder: ModelBuilder, order: Order): void {
   order.doses?.forEach((dose, index) => {
@@ -59,7 +65,7 @@ export function addDoses(builder: ModelBuilder, order: Order): void {
     const compulsory = isCompulsory(order, dose.stockId);
     if (dose.of === 'base oil') addDoseOfBase(builder, place, dose, index);
     else addDoseOfMix(builder, place, dose, compulsory);
-    if (compulsory && dose.required)
-      builder.raiseLower(place, builder.stocks[place].leastDoseIfUsed || LEAST_SHARE_THAT_COUNTS);
+    const stated = (dose.exactly ?? dose.min ?? 0) > 0;
+    if (compulsory && !stated) builder.raiseLower(place, leastPresence(builder, place));
   });
 }

@@ -37,7 +37,8 @@ function addCount(builder: ModelBuilder, rule: Extract<ShareRule, { kind: 'count
   builder.stocks.forEach((stock, place) => {
     if (!isInSet(stock, rule.set)) return;
     const presence = builder.presenceOf(place);
-    if ((rule.min ?? 0) > 0) presence.least = Math.max(presence.least, LEAST_SHARE_THAT_COUNTS);
+    const counts = (rule.min ?? 0) > 0 && builder.lower(place) === 0;
+    if (counts) presence.least = Math.max(presence.least, Math.min(LEAST_SHARE_THAT_COUNTS, builder.upper(place)));
     entries.push([presence.column, 1]);
   });
   builder.addRow(source, rule.min ?? -Infinity, rule.max ?? Infinity, entries);

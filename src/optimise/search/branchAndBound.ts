@@ -8,7 +8,7 @@ import { splitPoints } from './kv100Split';
 import { mixViscosity } from './mixViscosity';
 import { NodeHeap, type SearchNode } from './nodeHeap';
 import { loadPart, type RecipeCheck, RecipeFinder } from './recipeFinder';
-import { SearchProgram, type ShadowPrices } from './searchProgram';
+import { SearchProgram, type ShadowPrices, type StockBound } from './searchProgram';
 import { viCurve } from './viCurve';
 import { offsetAbove } from './viLine';
 import { isNarrow, type Kv100Interval } from './viRows';
@@ -20,8 +20,8 @@ export interface SearchResult {
   best?: { values: Float64Array; cost: number };
   /** Proven lower bound of the cost; +Infinity where it is proven that there is no recipe. */
   lowerBound: number;
-  /** Rows that the proofs of impossibility lean on, and whether the viscosity index is among them. */
-  conflict: { rows: ModelRow[]; usesVi: boolean };
+  /** What the proofs of impossibility lean on: rows, bounds of stocks, the viscosity index. */
+  conflict: { rows: ModelRow[]; usesVi: boolean; bounds: StockBound[] };
   nodes: number;
   linearPrograms: number;
 }
@@ -40,6 +40,7 @@ export class BranchAndBound {
   readonly #finder: RecipeFinder;
   readonly #open = new NodeHeap();
   readonly #conflictRows = new Set<number>();
+  readonly #conflictBounds = new Map<string, StockBound>();
   #usesVi = false;
   /** Least bound among the parts that were closed by cost, or could not be settled. */
   #closedBound = Infinity;
@@ -181,8 +182,9 @@ export class BranchAndBound {
   }
 
   #isCertified(ray: Float64Array): boolean {
-    const { proven, rows, usesVi } = this.#program.certifies(ray);
+    const { proven, rows, usesVi, bounds } = this.#program.certifies(ray);
     if (!proven) return false;
+    for (const bound of bounds) this.#conflictBounds.set(`${bound.end} ${bound.stock}`, bound);
     for (const row of rows) this.#conflictRows.add(row);
     this.#usesVi ||= usesVi;
     return true;
@@ -245,7 +247,11 @@ export class BranchAndBound {
       stopped,
       ...(best ? { best: { values: best.values, cost: best.cost } } : {}),
       lowerBound: this.#lowerBound(),
-      conflict: { rows: [...this.#conflictRows].map((row) => this.model.rows[row]), usesVi: this.#usesVi },
+      conflict: {
+        rows: [...this.#conflictRows].map((row) => this.model.rows[row]),
+        usesVi: this.#usesVi,
+        bounds: [...this.#conflictBounds.values()],
+      },
       nodes: this.#nodes,
       linearPrograms: this.#program.solves,
     };

@@ -38,21 +38,25 @@ export async function leastCostPerCubicMetre(
   options: ResolvedOptions,
   isRecipe: RecipeCheck,
 ): Promise<SearchResult> {
-  const leastVolume = specificVolumes.reduce((least, volume) => Math.min(least, volume), Infinity);
+  const leastVolume = Math.min(...specificVolumes);
+  const greatestVolume = Math.max(...specificVolumes);
   const start = options.now();
-  let found = await leastCostPerTonne(engine, model, options, isRecipe);
-  let best = found.best;
-  if (!best || found.stopped !== 'finished')
-    return withoutBound(found, best && best.cost / volumeOf(specificVolumes, best.values));
+  // Costs and bounds of the single searches are not those of the whole: only its work is told.
+  const quiet: ResolvedOptions = {
+    ...options,
+    onProgress: ({ nodes }) => options.onProgress({ milliseconds: options.now() - start, nodes }),
+  };
+  let found = await leastCostPerTonne(engine, model, quiet, isRecipe);
+  let { best } = found;
+  let lowerBound = perCubicMetre(found.lowerBound, leastVolume, greatestVolume);
+  if (!best) return { ...found, lowerBound };
   let price = best.cost / volumeOf(specificVolumes, best.values);
-  let lowerBound = -Infinity;
-  let nodes = found.nodes;
-  let linearPrograms = found.linearPrograms;
-  for (let round = 0; round < MOST_ROUNDS; round++) {
+  let { nodes, linearPrograms } = found;
+  for (let round = 0; round < MOST_ROUNDS && found.stopped === 'finished'; round++) {
     const trial = price;
     const cost = model.cost.map((value, j) => value - (j < specificVolumes.length ? trial * specificVolumes[j] : 0));
     const gapReference = Math.max(1e-12, Math.abs(trial) * leastVolume) / 2;
-    const rest = { ...options, timeLimitMs: Math.max(0, options.timeLimitMs - (options.now() - start)) };
+    const rest = { ...quiet, timeLimitMs: Math.max(0, options.timeLimitMs - (options.now() - start)) };
     found = await leastCostPerTonne(engine, { ...model, cost, gapReference }, rest, isRecipe);
     nodes += found.nodes;
     linearPrograms += found.linearPrograms;
@@ -64,15 +68,21 @@ export async function leastCostPerCubicMetre(
       }
     }
     lowerBound = Math.max(lowerBound, trial + Math.min(0, found.lowerBound) / leastVolume);
-    const close = price - lowerBound <= options.relativeGap * Math.abs(price);
-    if (close || found.stopped !== 'finished' || price >= trial) break;
+    if (price - lowerBound <= options.relativeGap * Math.abs(price) || price >= trial) break;
   }
-  const values = best.values;
-  return { ...found, best: { values, cost: price }, lowerBound: Math.min(price, lowerBound), nodes, linearPrograms };
+  const { stopped, conflict } = found;
+  const { values } = best;
+  return {
+    stopped,
+    conflict,
+    best: { values, cost: price },
+    lowerBound: Math.min(price, lowerBound),
+    nodes,
+    linearPrograms,
+  };
 }
 
-/** A search that ended early says nothing of the cost per m³ below its recipe. */
-function withoutBound(found: SearchResult, price: number | undefined): SearchResult {
-  if (price === undefined || !found.best) return found;
-  return { ...found, best: { ...found.best, cost: price }, lowerBound: -Infinity };
+/** A bound of the cost per tonne as one per m³, with the volume that makes it least. */
+function perCubicMetre(perTonne: number, leastVolume: number, greatestVolume: number): number {
+  return perTonne / (perTonne >= 0 ? greatestVolume : leastVolume);
 }

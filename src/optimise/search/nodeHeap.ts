@@ -23,10 +23,6 @@ function before(a: SearchNode, b: SearchNode): boolean {
 export class NodeHeap {
   readonly #nodes: SearchNode[] = [];
 
-  get size(): number {
-    return this.#nodes.length;
-  }
-
   get leastBound(): number {
     return this.#nodes.length > 0 ? this.#nodes[0].bound : Infinity;
   }

@@ -25,6 +25,20 @@ export interface ShadowPrices {
   line?: { price: number; slope: number };
 }
 
+/** The least or greatest share of a stock in the model. */
+export interface StockBound {
+  stock: number;
+  end: 'least' | 'most';
+}
+
+/** A proof that nothing meets the rows: places of the rows, and bounds of stocks, that it leans on. */
+export interface Certificate {
+  proven: boolean;
+  rows: number[];
+  usesVi: boolean;
+  bounds: StockBound[];
+}
+
 /** The interval's lower and upper end, "VI at most", and two lines for "VI at least", in this order. */
 const DYNAMIC_ROWS = 5;
 const FIRST_ABOVE = 3;
@@ -258,25 +272,35 @@ export class SearchProgram {
     return priceOut({ cost: model.cost, lower, upper, rows: model.rows }, multipliers, this.#extra(duals, scale));
   }
 
-  /** True where a ray proves that nothing meets the rows at the present bounds and lines; the rows it leans on. */
-  certifies(ray: Float64Array): { proven: boolean; rows: number[]; usesVi: boolean } {
+  /** Whether a ray proves that nothing meets the rows at the present bounds and lines, and what the proof leans on. */
+  certifies(ray: Float64Array): Certificate {
     const { model, lower, upper } = this;
     const cost = new Float64Array(this.#columns);
     for (const sign of [1, -1]) {
       const turned = ray.map((value) => sign * value);
       const multipliers = turned.subarray(0, this.#staticRows);
-      if (safeBound({ cost, lower, upper, rows: model.rows }, multipliers, this.#extra(turned, 1)) > 0) {
-        const rows = [...multipliers.keys()].filter((row) => multipliers[row] !== 0);
-        const lines = [2, 3, 4].map((row) => turned[this.#staticRows + 1 + SUMS + row]);
-        return { proven: true, rows, usesVi: model.vi !== undefined && lines.some((dual) => dual !== 0) };
-      }
+      const program = { cost, lower, upper, rows: model.rows };
+      const { bound, reduced } = priceOut(program, multipliers, this.#extra(turned, 1));
+      if (!(bound > 0)) continue;
+      const rows = [...multipliers.keys()].filter((row) => multipliers[row] !== 0);
+      const lines = [2, 3, 4].map((row) => turned[this.#staticRows + 1 + SUMS + row]);
+      const usesVi = model.vi !== undefined && lines.some((dual) => dual !== 0);
+      const bounds = model.stocks.flatMap((_, stock) => leaningBound(stock, reduced[stock], model));
+      return { proven: true, rows, usesVi, bounds };
     }
-    return { proven: false, rows: [], usesVi: false };
+    return { proven: false, rows: [], usesVi: false, bounds: [] };
   }
 
   dispose(): void {
     this.#session.dispose();
   }
+}
+
+/** A bound of a stock that a proof leans on, where it is tighter than 0 to 1. */
+function leaningBound(stock: number, reduced: number, { lower, upper }: SearchModel): StockBound[] {
+  if (reduced > 0 && lower[stock] > 0) return [{ stock, end: 'least' }];
+  if (reduced < 0 && upper[stock] < 1) return [{ stock, end: 'most' }];
+  return [];
 }
 
 /** Scales at the middle of the reachable KV100: 0.01 mm²/s for the interval rows, one VI point for the lines. */

@@ -10,17 +10,21 @@ export interface Line {
 /** Absorbs rounding in the index functions; a thousand times this moves no cost anyone could see. */
 const ROUNDING = 4e-15;
 
+function allowance(offset: number): number {
+  return ROUNDING * Math.max(1, Math.abs(offset));
+}
+
 /** The lowest line of a slope that lies above all points. */
 function lineAbove(points: readonly CurvePoint[], slope: number): Line {
   let offset = -Infinity;
   for (const { u, g } of points) offset = Math.max(offset, g - slope * u);
-  return { offset: offset + ROUNDING, slope };
+  return { offset: offset + allowance(offset), slope };
 }
 
 function lineBelow(points: readonly CurvePoint[], slope: number): Line {
   let offset = Infinity;
   for (const { u, g } of points) offset = Math.min(offset, g - slope * u);
-  return { offset: offset - ROUNDING, slope };
+  return { offset: offset - allowance(offset), slope };
 }
 
 /** Slope of the line through the first point that has all others below it; -Infinity where there is but one. */
@@ -74,7 +78,8 @@ export function lowerLine(curve: ViCurve, from: number, to: number): Line {
   const points = lowerPoints(parts);
   const first = points[0];
   const last = points[points.length - 1];
-  return lineBelow(points, last.u > first.u ? (last.g - first.g) / (last.u - first.u) : parts[0].from.slope);
+  const slope = last.u > first.u ? (last.g - first.g) / (last.u - first.u) : parts[0].from.slope;
+  return lineBelow(points, withinSlopes(parts, slope));
 }
 
 /** The chord of the curve inside the piece of `from`: under it a recipe surely has the index where G is concave. */

@@ -117,7 +117,7 @@ test('caught: "unknown" read as infeasible', async () => {
         return result.status === 'unknown' ? { status: 'infeasible' as const, ray: new Float64Array(0) } : result;
       }
       override certifies(ray: Float64Array) {
-        return ray.length === 0 ? { proven: true, rows: [], usesVi: false } : super.certifies(ray);
+        return ray.length === 0 ? { proven: true, rows: [], usesVi: false, bounds: [] } : super.certifies(ray);
       }
     }
     return { ...original, SearchProgram: Believing };

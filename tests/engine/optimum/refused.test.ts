@@ -82,7 +82,7 @@ describe('refused: the order is no question, and the message says where', () => 
   test('a dose of a stock that is not there', async () => {
     const order = base();
     order.doses = [{ stockId: 'moonshine', exactly: 0.1 }];
-    await expectRefused(order, ['doses', 0], /not among the stocks/);
+    await expectRefused(order, ['doses', 0], /not in this order/);
   });
 
   test('options that are no numbers are the caller’s mistake', async () => {
