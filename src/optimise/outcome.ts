@@ -93,7 +93,8 @@ export interface BlendOutcome {
 export interface SolveProgress {
   milliseconds: number;
   nodes: number;
-  /** Cost of the best recipe so far, if any, and the proven lower bound so far. */
+  /** Cost per tonne of the best recipe so far, if any. Not told for a cost per m³, which takes several searches. */
   bestCost?: number;
+  /** Proven lower bound so far of the cost with what deviations from aims count, per tonne. */
   lowerBound?: number;
 }

@@ -116,7 +116,7 @@ export class BranchAndBound {
     return {
       milliseconds,
       nodes: this.#nodes,
-      ...(best ? { bestCost: best.cost } : {}),
+      ...(best ? { bestCost: priceOf(this.model, best.values) } : {}),
       ...(Number.isFinite(lowerBound) ? { lowerBound } : {}),
     };
   }
@@ -256,6 +256,11 @@ export class BranchAndBound {
       linearPrograms: this.#program.solves,
     };
   }
+}
+
+/** What the stocks of a solution cost, deviations from aims apart. */
+function priceOf({ stocks, cost }: SearchModel, values: Float64Array): number {
+  return stocks.reduce((sum, _, column) => sum + cost[column] * values[column], 0);
 }
 
 /** The KV100 a mix of the model can have; one point where limits and stocks leave none, for the rows to refute. */
