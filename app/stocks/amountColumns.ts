@@ -25,7 +25,7 @@ function amountColumn({ factor = 1, ...amount }: Amount): Column {
   const shown = (value: number) => Number((value / factor).toPrecision(12));
   function read(product: Product): CellView {
     const unread = product.unread?.[id];
-    if (unread !== undefined) return { text: unread, edit: unread, problem: reasonOf(unread, id) };
+    if (unread !== undefined) return { text: unread, edit: unread, problem: reasonOf(unread) };
     const value = amount.get(product);
     const isPrice = id === 'pricePerTonne';
     if (value === undefined) {
@@ -52,15 +52,16 @@ function amountColumn({ factor = 1, ...amount }: Amount): Column {
   return { id, label, unit, title, kind: 'number', read, write, locked: amount.locked };
 }
 
-function reasonOf(text: string, id: Amount['id']): string {
+/** A bound that cannot be read, or cannot be right, is not "no bound": the stock then stays out, as without a price. */
+const LEFT_OUT = 'Until then the stock is left out.';
+
+function reasonOf(text: string): string {
   const parsed = parseNumber(text);
-  const reason = 'problem' in parsed ? parsed.problem : `“${text}” was not taken.`;
-  return id === 'pricePerTonne'
-    ? `${reason} Until then the stock is left out.`
-    : `${reason} Until then it counts as not given.`;
+  return `${'problem' in parsed ? parsed.problem : `“${text}” was not taken.`} ${LEFT_OUT}`;
 }
 
-const outsideShare = (value: number) => (value < 0 || value > 1 ? 'A share lies between 0 and 100 %.' : undefined);
+const outsideShare = (value: number) =>
+  value < 0 || value > 1 ? `A share lies between 0 and 100 %. ${LEFT_OUT}` : undefined;
 
 export function priceColumn(currency: string): Column {
   return amountColumn({
@@ -94,7 +95,7 @@ export const ON_HAND_COLUMN = amountColumn({
     } else if (value === undefined) delete lot.availableTonnes;
     else lot.availableTonnes = value;
   },
-  problem: (value) => (value < 0 ? 'A quantity cannot be below zero.' : undefined),
+  problem: (value) => (value < 0 ? `A quantity cannot be below zero. ${LEFT_OUT}` : undefined),
   locked: ({ lots }) => (lots.length > 1 ? `The sum of ${lots.length} lots.` : undefined),
 });
 

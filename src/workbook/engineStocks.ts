@@ -1,5 +1,6 @@
 import type { Figure } from '../stock/figure';
 import type { Stock } from '../stock/stock';
+import { boundProblems, isAmount, notANumber, unreadAmount } from './amountProblems';
 import type { Lot, Product, Workbook, WorkbookOrder } from './workbook';
 
 /** A product that an order cannot use, and why. */
@@ -10,7 +11,7 @@ export interface OmittedProduct {
   message: string;
 }
 
-/** A cell whose text could not be read: its figure counts as unknown. */
+/** A cell whose text could not be read, in a product that is used all the same: the figure counts as unknown. */
 export interface UnreadCell {
   productId: string;
   /** Column, as in `Product.unread`: "pricePerTonne", "kv@40". */
@@ -34,7 +35,7 @@ function lotFigures(product: Product, lot: Lot): Figure[] {
   return [...lot.figures, ...readFigures(product).filter((figure) => !own.has(cellOf(figure)))];
 }
 
-/** Tonnes on hand: the sum over the lots where all are known [t]. */
+/** Tonnes on hand: the sum over the lots where all are known, since unknown is not zero [t]. */
 function tonnesOnHand(lots: readonly Lot[]): number | undefined {
   if (lots.length === 0) return undefined;
   let sum = 0;
@@ -60,11 +61,11 @@ function stockOf(
 const isPrice = (price: number | undefined): price is number => price !== undefined;
 
 function priceMessage(product: Product, lot?: Lot): string {
-  const typed = product.unread?.pricePerTonne;
+  const typed = unreadAmount(product, 'pricePerTonne');
   const name = lot ? `${product.name} · ${lot.name}` : product.name;
   return typed === undefined
     ? `${name} has no price: give one or exclude it.`
-    : `${name}: the price “${typed}” is not a number. Type it again or exclude the product.`;
+    : notANumber(name, 'pricePerTonne', typed);
 }
 
 /** One product as the engine's stocks: itself, or its lots. Empty where `trouble` says why. */
@@ -113,14 +114,20 @@ function lotStocks(product: Product): ProductStocks {
 export function productStocks({ products }: Workbook, order: WorkbookOrder): ProductStocks[] {
   const excluded = new Set(order.excludedProductIds);
   const usable = products.filter(({ id }) => !excluded.has(id));
-  return usable.map(order.solveOn === 'lots' ? lotStocks : typicalStock);
+  const asStocks = order.solveOn === 'lots' ? lotStocks : typicalStock;
+  return usable.map((product) => {
+    const trouble = boundProblems(product);
+    return trouble.length > 0 ? { product, stocks: [], trouble } : asStocks(product);
+  });
 }
 
-/** The unread cells of a product, each with what was typed. */
+/** The unread cells of a product's figures, each with what was typed. Amounts leave their product out, which says so. */
 export function unreadCells({ id, name, unread = {} }: Product): UnreadCell[] {
-  return Object.entries(unread).map(([cell, text]) => ({
-    productId: id,
-    cell,
-    message: `${name}: “${text}” is not a number, so the figure counts as unknown. Type it again.`,
-  }));
+  return Object.entries(unread)
+    .filter(([cell]) => !isAmount(cell))
+    .map(([cell, text]) => ({
+      productId: id,
+      cell,
+      message: `${name}: “${text}” is not a number, so the figure counts as unknown. Type it again.`,
+    }));
 }

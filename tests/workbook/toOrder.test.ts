@@ -110,6 +110,39 @@ describe('what cannot be used is named', () => {
     expect(omitted[0]?.message).toBe('A: the price “9oo” is not a number. Type it again or exclude the product.');
   });
 
+  test.each([
+    ['greatestDose', 'greatest dose', '1O'],
+    ['leastDoseIfUsed', 'least dose', '2 or 3'],
+    ['availableTonnes', 'quantity on hand', '4 0'],
+  ])(
+    'an unread %s is not “no bound”: the product stays out, and the message says what was typed',
+    (cell, name, typed) => {
+      const odd = product('a', { unread: { [cell]: typed }, lots: [lot('1')] });
+      for (const solveOn of ['products', 'lots'] as const) {
+        const { order, omitted, unread } = convert([odd, product('b', { lots: [lot('2')] })], { solveOn });
+        expect(order.stocks).toHaveLength(1);
+        expect(omitted).toEqual([
+          {
+            productId: 'a',
+            name: 'A',
+            message: `A: the ${name} “${typed}” is not a number. Type it again or exclude the product.`,
+          },
+        ]);
+        expect(unread).toEqual([]);
+      }
+    },
+  );
+
+  test.each<[Partial<Product>, string]>([
+    [{ leastDoseIfUsed: 1.5 }, 'A: the least dose is 150 %, and must be 0 to 100 %.'],
+    [{ greatestDose: -0.07 }, 'A: the greatest dose is -7 %, and must be 0 to 100 %.'],
+    [{ lots: [lot('1', { availableTonnes: -2 })] }, 'A: the quantity on hand is -2 t, and must not be below zero.'],
+  ])('%j leaves that product out by name; the order is solved without it', async (fields, message) => {
+    const { order, omitted } = convert([product('a', fields), product('b')]);
+    expect(omitted).toEqual([{ productId: 'a', name: 'A', message: `${message} Correct it or exclude the product.` }]);
+    expect((await solveBlend(order)).stopped).toBe('finished');
+  });
+
   test('a cell that is not a number: its figure is unknown, and the message says what was typed', () => {
     const { order, unread } = convert([product('a', { unread: { 'kv@40': '3o,4' } })]);
     expect(order.stocks[0]?.figures).toEqual([kv(100, 5)]);

@@ -77,6 +77,19 @@ describe('the table of stocks', () => {
     expect(cellAt(0, 'Least dose')).toBeInvalid();
   });
 
+  it.each([
+    ['Greatest dose', '1O', '“1O” is not a number. Until then the stock is left out.'],
+    ['Least dose', '150', 'A share lies between 0 and 100 %. Until then the stock is left out.'],
+    ['On hand', '-3', 'A quantity cannot be below zero. Until then the stock is left out.'],
+  ])('says at %s “%s” that the stock is left out', async (heading, typed, message) => {
+    const user = setUp();
+    act(() => cellAt(0, heading).focus());
+    await user.keyboard(`${typed}{Enter}`);
+    act(() => cellAt(0, heading).focus());
+    expect(cellAt(0, heading)).toBeInvalid();
+    expect(cellAt(0, heading)).toHaveAccessibleDescription(message);
+  });
+
   it('shows the share of each stock in the recipe, of its lots too', () => {
     setUp([inventedStock('a', { lots: [LOT] }), inventedStock('b')]);
     const recipe = [
