@@ -19,29 +19,35 @@ function reproducibility(property: string, value: number): number {
   return 'relative' in found ? found.relative * Math.abs(value) : found.absolute;
 }
 
-/** Rules that put the mix outside a limit by more than the method's reproducibility. */
-function disagreeing(check: LimitCheck, predicted: PredictedProperties): string[] {
+/** Beyond so many reproducibilities the rules disagree about the mix, not about a mix that sits on its limit. */
+const WIDE_DISAGREEMENT = 2;
+
+/** Rules that put the mix outside a limit, and by how many reproducibilities of the method. */
+function disagreeing(check: LimitCheck, predicted: PredictedProperties): { rule: ViscosityRule; times: number }[] {
   const spread = predicted.spread.find((entry) => entry.property === check.property && entry.celsius === check.celsius);
   const slack = reproducibility(check.property, check.value);
   return (spread?.byRule ?? []).flatMap(({ rule, value }) => {
     if (value === undefined || !RULES_THAT_COUNT.has(rule)) return [];
     const outside = Math.max((check.min ?? -Infinity) - value, value - (check.max ?? Infinity));
-    return outside > slack ? [rule] : [];
+    return outside > slack ? [{ rule: rule as ViscosityRule, times: outside / slack }] : [];
   });
 }
 
+/**
+ * Where another rule puts the mix outside a limit: prominent where it does so by far, quiet where the mix merely sits
+ * on the limit, as the cheapest mix mostly does.
+ */
 function trialBlend(order: Order, checks: readonly LimitCheck[], predicted: PredictedProperties): Caution[] {
-  const parts = checks.flatMap((check) => {
+  return checks.flatMap((check): Caution[] => {
     const rules = disagreeing(check, predicted);
     if (rules.length === 0) return [];
-    const names = rules.map((rule) => VISCOSITY_RULE_TABLE[rule as ViscosityRule].short).join(' and ');
-    return [
-      `by the ${names} rule${rules.length > 1 ? 's' : ''} ${limitInWords(order.limits[check.limit], order)} is outside its limit`,
-    ];
+    const shorts = rules.map(({ rule }) => VISCOSITY_RULE_TABLE[rule].short).join(' and ');
+    const where = limitInWords(order.limits[check.limit], order);
+    const what = `by the ${shorts} blending rule${rules.length > 1 ? 's' : ''} ${where} is outside its limit.`;
+    return rules.some(({ times }) => times > WIDE_DISAGREEMENT)
+      ? [{ kind: 'trial blend', message: `Make a trial blend first: ${what}` }]
+      : [{ kind: 'model', message: `On the limit: ${what}` }];
   });
-  if (parts.length === 0) return [];
-  const message = `Make a trial blend first. The blending rules disagree on pass or fail: ${parts.join('; ')}.`;
-  return [{ kind: 'trial blend', message }];
 }
 
 function names(stocks: readonly Stock[]): string {

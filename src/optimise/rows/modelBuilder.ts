@@ -80,12 +80,12 @@ export class ModelBuilder {
   #tiePresences(): void {
     for (const { stock, column, least } of this.presences) {
       if (this.#lower[stock] > 0) this.#lower[column] = 1;
-      this.addRow({ kind: 'presence', stock }, -Infinity, 0, [
+      this.addRow({ kind: 'presence', stock, end: 'most' }, -Infinity, 0, [
         [stock, 1],
         [column, -this.#upper[stock]],
       ]);
       if (least > 0) {
-        this.addRow({ kind: 'presence', stock }, 0, Infinity, [
+        this.addRow({ kind: 'presence', stock, end: 'least' }, 0, Infinity, [
           [stock, 1],
           [column, -least],
         ]);

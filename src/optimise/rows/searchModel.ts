@@ -9,7 +9,8 @@ export type RowSource =
   | { kind: 'dose'; dose: number }
   | { kind: 'share'; share: number }
   | { kind: 'most stocks' }
-  | { kind: 'presence'; stock: number };
+  /** share ≤ greatest · presence; share ≥ least · presence. */
+  | { kind: 'presence'; stock: number; end: 'least' | 'most' };
 
 /** A linear row over the structural columns. */
 export interface ModelRow extends LinearRow {

@@ -170,8 +170,9 @@ export class BranchAndBound {
     for (const prices of this.#finder.prices) {
       const bound = this.#program.shadowBound(prices, this.#offsetAbove(prices, node), lower, upper);
       node.bound = Math.max(node.bound, bound);
+      if (this.#isClosed(node)) return true;
     }
-    return this.#isClosed(node);
+    return false;
   }
 
   /** How high a line of the prices' slope must lie to be above the curve over a part. */
