@@ -10,17 +10,15 @@ export function SaveNotice() {
   const { exportWorkbook, exportSetAside } = useCommands();
   return (
     <>
-      {message && message !== setAside?.message && (
+      {message && (
         <Notice tone={state === 'saved' || state === 'saving' ? 'info' : 'bad'} live className={styles.notice}>
           <span>{message}</span>
           {state !== 'saved' && <Button onClick={() => exportWorkbook.run()}>{exportWorkbook.label}</Button>}
         </Notice>
       )}
-      {setAside && (
+      {setAside?.message && (
         <Notice tone="warn" live className={styles.notice}>
-          <span>
-            The workbook kept in this browser could not be read and was set aside; the demo is open. {setAside.message}
-          </span>
+          <span>{setAside.message}</span>
           <Button onClick={() => exportSetAside.run()}>{exportSetAside.label}</Button>
         </Notice>
       )}

@@ -4,15 +4,15 @@ import { create } from 'zustand';
 export interface SaveState {
   state: 'saved' | 'saving' | 'failed' | 'unavailable';
   message?: string;
-  /** A stored workbook that could not be read: kept, and to be had as a file. `message` where that is news. */
+  /** A stored workbook that could not be read: kept, and to be had as a file. `message` where it has just happened. */
   setAside?: { text: string; message?: string };
 }
 
 export const useSave = create<SaveState>(() => ({ state: 'saved' }));
 
-/** Says how saving goes. That a workbook was set aside stays in sight as long as nothing worse is to be said. */
+/** Says how saving goes. */
 export function setSave({ state, message }: Omit<SaveState, 'setAside'>): void {
-  useSave.setState(({ setAside }) => ({ state, message: message ?? setAside?.message }));
+  useSave.setState({ state, message });
 }
 
 export function setSetAside(setAside: SaveState['setAside']): void {

@@ -16,6 +16,10 @@ import { openWorkbook, useWorkbook } from './workbookStore';
 export const NO_STORAGE =
   'This browser keeps nothing for this page (storage refused or not there). Export the workbook before you leave.';
 
+export const UNREAD =
+  'Your workbook could not be read from this browser; it is still there, untouched. The demo is open, and nothing is ' +
+  'saved now: reload the page to try again, export the workbook to keep what you do here.';
+
 async function openStorage(): Promise<WorkbookStorage | undefined> {
   const { indexedDB, today } = environment();
   try {
@@ -27,22 +31,25 @@ async function openStorage(): Promise<WorkbookStorage | undefined> {
 
 const freshDemo = () => demoWorkbook(environment().newId());
 
-/** The workbook the page was left with; the demo where there is none, or where it cannot be read. */
-async function lastWorkbook(storage: WorkbookStorage | undefined): Promise<Workbook> {
-  const loaded = await storage?.loadCurrent();
-  if (loaded?.kind === 'workbook') {
-    if (loaded.notes.length > 0) announce(loaded.notes.join(' '));
-  }
-  if (loaded?.kind === 'set aside') {
+/** A workbook set aside at an earlier start is still to be had from the menu, which is no news. */
+async function offerSetAside(storage: WorkbookStorage): Promise<void> {
+  const earlier = (await storage.setAside().catch(() => [])).at(-1);
+  if (earlier) setSetAside({ text: earlier.text });
+}
+
+/** The workbook the page was left with; the demo where there is none, or where its text is damaged. */
+async function lastWorkbook(storage: WorkbookStorage): Promise<Workbook> {
+  const loaded = await storage.loadCurrent();
+  if (loaded.kind === 'set aside') {
     const { text, message } = loaded.setAside;
     const news = `The workbook kept in this browser could not be read. It is set aside as it was (menu: export it); the demo is open. ${message}`;
     setSetAside({ text, message: news });
-    announce(news);
-  } else {
-    const earlier = (await storage?.setAside())?.at(-1);
-    if (earlier) setSetAside({ text: earlier.text });
+    return freshDemo();
   }
-  return loaded?.kind === 'workbook' ? loaded.workbook : freshDemo();
+  await offerSetAside(storage);
+  if (loaded.kind === 'nothing') return freshDemo();
+  if (loaded.notes.length > 0) announce(loaded.notes.join(' '));
+  return loaded.workbook;
 }
 
 /** Shows the order that was on screen, or the first; and a neighbour where the one on screen goes away. */
@@ -74,8 +81,8 @@ function keepSaved(storage: WorkbookStorage): () => void {
   };
 }
 
-function sayNotSaved(): () => void {
-  setSave({ state: 'unavailable', message: NO_STORAGE });
+function sayNotSaved(message: string): () => void {
+  setSave({ state: 'unavailable', message });
   return () => {};
 }
 
@@ -94,13 +101,19 @@ function keepSolved(createSolver: () => SolverClient): () => void {
 
 const solveInWorkers = (): SolverClient => createSolverClient({ createWorker });
 
-/** The last workbook; the demo, with a word, where storage opens but does not answer. */
-async function workbookToOpen(storage: WorkbookStorage | undefined): Promise<Workbook> {
+/** Puts the last workbook (or the demo) on the page. Returns what keeps it saved from now on. */
+async function openLast(storage: WorkbookStorage | undefined): Promise<() => () => void> {
+  if (!storage) {
+    openWorkbook(freshDemo());
+    return () => sayNotSaved(NO_STORAGE);
+  }
   try {
-    return await lastWorkbook(storage);
+    openWorkbook(await lastWorkbook(storage));
+    return () => keepSaved(storage);
   } catch {
-    announce('The workbook kept in this browser could not be reached; the demo is open. Reload the page to try again.');
-    return freshDemo();
+    // What is kept could not be had: a save would put the demo in its place.
+    openWorkbook(freshDemo());
+    return () => sayNotSaved(UNREAD);
   }
 }
 
@@ -113,12 +126,12 @@ export async function startApp(createSolver: () => SolverClient = solveInWorkers
   useView.setState(loadView(localStorage));
   const storage = await openStorage();
   setEarlierStates(storage);
-  openWorkbook(await workbookToOpen(storage));
+  const save = await openLast(storage);
   keepOrderInSight();
   const ends = [
     useWorkbook.subscribe(keepOrderInSight),
     useView.subscribe((view) => saveView(localStorage, view)),
-    storage ? keepSaved(storage) : sayNotSaved(),
+    save(),
     keepSolved(createSolver),
   ];
   return () => {

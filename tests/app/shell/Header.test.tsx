@@ -2,7 +2,7 @@ import { act, render, screen } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { afterEach, describe, expect, it } from 'vitest';
 import { Header } from '../../../app/shell/Header';
-import { setSave } from '../../../app/state/saveStore';
+import { setSave, setSetAside } from '../../../app/state/saveStore';
 import { setTheme } from '../../../app/state/viewStore';
 import { editWorkbook, openWorkbook, useWorkbook } from '../../../app/state/workbookStore';
 import { emptyWorkbook, serialiseWorkbook } from '../../../src';
@@ -24,6 +24,7 @@ const name = () => useWorkbook.getState().workbook.name;
 afterEach(() => {
   setTheme('system');
   setSave({ state: 'saved' });
+  setSetAside(undefined);
 });
 
 describe('the header', () => {
@@ -59,6 +60,16 @@ describe('the header', () => {
     expect(screen.getByText('Not saved')).toBeVisible();
     expect(screen.getByRole('alert')).toHaveTextContent('The disk is full.');
     expect(screen.getByRole('button', { name: 'Export workbook' })).toBeEnabled();
+  });
+
+  it('tells of a workbook set aside where it has just happened, and not at every start after', () => {
+    setUp();
+    act(() => setSetAside({ text: '{', message: 'The workbook was set aside; the demo is open.' }));
+    expect(screen.getByRole('status')).toHaveTextContent('set aside');
+    act(() => setSetAside({ text: '{' }));
+    expect(screen.queryByRole('status')).toBeNull();
+    expect(screen.queryByText(/set aside|the demo is open/)).toBeNull();
+    expect(screen.getByText('Export the workbook that could not be read')).toBeInTheDocument();
   });
 
   it('goes from the system’s colours to light, dark and back', async () => {

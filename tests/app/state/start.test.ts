@@ -1,4 +1,4 @@
-import { IDBFactory } from 'fake-indexeddb';
+import { IDBFactory, IDBObjectStore } from 'fake-indexeddb';
 import { afterEach, beforeEach, describe, expect, test, vi } from 'vitest';
 import { demoWorkbook } from '../../../app/demo/demoWorkbook';
 import { answerOf } from '../../../app/state/answerStore';
@@ -6,7 +6,7 @@ import { COMMANDS } from '../../../app/state/commands';
 import { bringBack, earlierStates } from '../../../app/state/earlierStates';
 import type { Environment } from '../../../app/state/environment';
 import { useSave } from '../../../app/state/saveStore';
-import { NO_STORAGE, startApp } from '../../../app/state/start';
+import { NO_STORAGE, startApp, UNREAD } from '../../../app/state/start';
 import { selectOrder, setTheme, useView } from '../../../app/state/viewStore';
 import { editWorkbook, undo, useWorkbook } from '../../../app/state/workbookStore';
 import { openDatabase } from '../../../app/storage/database';
@@ -156,7 +156,7 @@ describe('trouble with storage', () => {
     const surroundings = await open();
     expect(workbook().invented).toBe(true);
     await saved();
-    expect(useSave.getState().message).toMatch(
+    expect(useSave.getState().setAside?.message).toMatch(
       /could not be read\. It is set aside .* settings\.currency must be a text; it is 7\./,
     );
     COMMANDS.exportSetAside.run();
@@ -164,8 +164,45 @@ describe('trouble with storage', () => {
     // At the next start it is no news any more, but still to be had.
     await open();
     await saved();
-    expect(useSave.getState().message).toBeUndefined();
+    expect(useSave.getState().setAside?.message).toBeUndefined();
     expect(COMMANDS.exportSetAside.enabled()).toBe(true);
+  });
+
+  test('a read that fails once leaves the kept workbook in its place: nothing is saved over it', async () => {
+    const first = await open();
+    editWorkbook('name', (draft) => {
+      draft.name = 'My plant';
+    });
+    first.leave();
+    await saved();
+    const get = vi.spyOn(IDBObjectStore.prototype, 'get').mockImplementationOnce(() => {
+      throw new DOMException('Internal error.', 'UnknownError');
+    });
+    const second = await open();
+    expect(get).toHaveBeenCalledOnce();
+    expect(workbook().invented).toBe(true);
+    expect(useSave.getState()).toMatchObject({ state: 'unavailable', message: UNREAD });
+    editWorkbook('name', (draft) => {
+      draft.name = 'Typed meanwhile';
+    });
+    second.leave();
+    await new Promise((resolve) => setTimeout(resolve, 600));
+    expect(useSave.getState().state).toBe('unavailable');
+    await open();
+    expect(workbook().name).toBe('My plant');
+  });
+
+  test('what was set aside earlier may be unreadable too: the workbook opens all the same', async () => {
+    const first = await open();
+    const { id } = workbook();
+    first.leave();
+    await saved();
+    vi.spyOn(IDBObjectStore.prototype, 'getAll').mockImplementationOnce(() => {
+      throw new DOMException('Internal error.', 'UnknownError');
+    });
+    await open();
+    expect(workbook().id).toBe(id);
+    await saved();
   });
 
   test.each([
