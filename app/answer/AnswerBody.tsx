@@ -35,6 +35,7 @@ export function AnswerBody({
         proof={proof.text}
         order={order}
         outcome={outcome}
+        omitted={omitted}
         laboratoryOnly={workbookOrder.laboratoryOnly}
         currency={currency}
       />

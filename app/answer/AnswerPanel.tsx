@@ -1,11 +1,11 @@
 import { classNames } from '../parts/classNames';
-import { formatMoney } from '../parts/money';
 import { Notice } from '../parts/Notice';
 import { Section } from '../parts/Section';
 import { type Answer, useAnswer, useDelay500 } from '../state/answerStore';
 import { useWorkbook } from '../state/workbookStore';
 import { AnswerBody } from './AnswerBody';
 import styles from './AnswerPanel.module.css';
+import { costInWords } from './costInWords';
 import { Progress } from './Progress';
 import { type ProofWords, proofInWords } from './proofInWords';
 import { useSettledAnnouncement } from './useSettledAnnouncement';
@@ -16,7 +16,8 @@ export function AnswerPanel({ orderId }: { orderId: string }) {
   const currency = useWorkbook(({ workbook }) => workbook.settings.currency);
   const workbookOrder = useWorkbook(({ workbook }) => workbook.orders.find(({ id }) => id === orderId));
   const slow = useDelay500(answer);
-  const proof = answer.outcome && proofInWords(answer.outcome, answer.order);
+  const { outcome, order } = answer;
+  const proof = outcome && order && proofInWords(outcome, order, answer);
   useSettledAnnouncement(answer, settledWords(answer, proof, currency));
   if (!workbookOrder) return null;
   const solving = answer.phase === 'solving';
@@ -56,8 +57,8 @@ function Message({ answer: { phase, outcome, message } }: { answer: Answer }) {
 }
 
 /** The answer in a sentence, for those who hear it. */
-function settledWords({ outcome }: Answer, proof: ProofWords | undefined, currency: string): string | undefined {
-  if (!outcome || !proof) return undefined;
-  if (!outcome.recipe || outcome.costPerTonne === undefined) return proof.text;
-  return `New recipe: ${formatMoney(outcome.costPerTonne, currency)} per tonne. ${proof.text}`;
+function settledWords({ outcome, order }: Answer, proof: ProofWords | undefined, currency: string): string | undefined {
+  if (!outcome || !order || !proof) return undefined;
+  const cost = outcome.recipe && costInWords(outcome, order, currency);
+  return cost ? `New recipe: ${cost.main} ${cost.mainUnit}. ${proof.text}` : proof.text;
 }

@@ -1,6 +1,7 @@
 import type { BlendOutcome, Order } from '../../src';
 import { formatMoney } from '../parts/money';
 import styles from './AnswerPanel.module.css';
+import { costInWords } from './costInWords';
 import type { Batch } from './recipeRows';
 
 /** What the mix costs: per tonne, per m³, and the batch. The figure the order minimises comes first. */
@@ -15,24 +16,17 @@ export function Cost({
   batch: Batch;
   currency: string;
 }) {
-  const { costPerTonne, costPerCubicMetre } = outcome;
-  if (costPerTonne === undefined) return null;
-  const perTonne = { amount: formatMoney(costPerTonne, currency), unit: 'per tonne' };
-  const perCubicMetre = costPerCubicMetre !== undefined && {
-    amount: formatMoney(costPerCubicMetre, currency),
-    unit: 'per m³ at 15 °C',
-  };
-  const byVolume = order.costBasis === 'cubic metre' && perCubicMetre;
-  const main = byVolume || perTonne;
-  const second = byVolume ? perTonne : perCubicMetre;
+  const words = costInWords(outcome, order, currency);
+  if (!words) return null;
+  const ofBatch = ((outcome.costPerTonne ?? 0) * batch.kilograms) / 1000;
   return (
     <div className={styles.cost}>
       <p className={styles.mainCost}>
-        {main.amount} <span className={styles.costUnit}>{main.unit}</span>
+        {words.main} <span className={styles.costUnit}>{words.mainUnit}</span>
       </p>
       <p className={styles.soft}>
-        {second ? `${second.amount} ${second.unit}` : 'per m³ unknown: a density is missing'}
-        {batch.given && ` · ${formatMoney((costPerTonne * batch.kilograms) / 1000, currency, 0)} ${batch.words}`}
+        {words.second}
+        {batch.given && ` · ${formatMoney(ofBatch, currency, 0)} ${batch.words}`}
       </p>
     </div>
   );

@@ -1,6 +1,7 @@
 import type { LeftOut, OmittedProduct, UnreadCell } from '../../src';
 import styles from './AnswerPanel.module.css';
 import { Disclosure } from './Disclosure';
+import { leftOutCount } from './leftOut';
 
 /** Stocks the search could not use, each with its reason and what to do; and cells that could not be read. */
 export function LeftOutList({
@@ -10,19 +11,25 @@ export function LeftOutList({
   notes,
   open,
 }: {
-  leftOut: readonly LeftOut[];
-  omitted: readonly OmittedProduct[];
-  unread: readonly UnreadCell[];
+  leftOut: LeftOut[];
+  omitted: OmittedProduct[];
+  unread: UnreadCell[];
   notes: readonly string[];
   open?: boolean;
 }) {
-  const messages = [...omitted.map(({ message }) => message), ...leftOut.map(({ message }) => message)];
-  const names = new Set([...omitted.map(({ name }) => name), ...leftOut.map(({ name }) => name)]);
+  const ruledOut = leftOut.filter(({ reason }) => reason === 'missing flag');
+  const unknown = leftOut.filter(({ reason }) => reason !== 'missing flag');
+  const count = leftOutCount({ leftOut }, { omitted, unread });
   return (
     <>
-      {messages.length > 0 && (
-        <Disclosure title={names.size === 1 ? 'One stock left out' : `${names.size} stocks left out`} open={open}>
-          <List messages={messages} />
+      {count > 0 && (
+        <Disclosure title={count === 1 ? 'One stock left out' : `${count} stocks left out`} open={open}>
+          <List messages={[...omitted, ...unknown].map(({ message }) => message)} />
+        </Disclosure>
+      )}
+      {ruledOut.length > 0 && (
+        <Disclosure title="Stocks that do not carry the flag asked for" open={open}>
+          <List messages={ruledOut.map(({ message }) => message)} />
         </Disclosure>
       )}
       {unread.length > 0 && (

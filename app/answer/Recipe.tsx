@@ -1,5 +1,5 @@
 import { memo, useDeferredValue } from 'react';
-import type { BlendOutcome, Order } from '../../src';
+import type { BlendOutcome, OmittedProduct, Order } from '../../src';
 import { LazyViscosityChart } from '../chart/LazyViscosityChart';
 import { Section } from '../parts/Section';
 import { ErrorBoundary } from '../shell/ErrorBoundary';
@@ -20,6 +20,7 @@ export const Recipe = memo(function Recipe({
   proof,
   order,
   outcome,
+  omitted,
   laboratoryOnly,
   currency,
 }: {
@@ -28,6 +29,7 @@ export const Recipe = memo(function Recipe({
   proof: string;
   order: Order;
   outcome: BlendOutcome;
+  omitted: readonly OmittedProduct[];
   laboratoryOnly: readonly string[];
   currency: string;
 }) {
@@ -36,15 +38,17 @@ export const Recipe = memo(function Recipe({
   const chartedOrder = useDeferredValue(order);
   if (!outcome.recipe) return null;
   const { rows, totals, batch } = recipeRows(order, outcome);
+  const { cautions, leftOut } = outcome;
+  const remarks = [...cautions, ...omitted, ...leftOut].map(({ message }) => message);
   return (
     <>
       <Cost outcome={outcome} order={order} batch={batch} currency={currency} />
-      <Cautions cautions={outcome.cautions} />
+      <Cautions cautions={cautions} />
       <RecipeTable
         rows={rows}
         totals={totals}
         batch={batch}
-        text={() => recipeText({ title, proof, cautions: outcome.cautions, rows, totals, batch })}
+        text={() => recipeText({ title, proof, remarks, rows, totals, batch })}
       />
       <Section title="Viscosity and temperature" level={3} className={styles.part}>
         <ErrorBoundary what="The chart">

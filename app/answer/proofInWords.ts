@@ -1,5 +1,6 @@
 import type { BlendOutcome, Order, Stopped } from '../../src';
 import { formatNumber } from '../parts/numberText';
+import { countedStocks, leftOutCount, NOTHING_OMITTED, type NotCounted, unreadCount } from './leftOut';
 
 /** What an outcome proves, in the words of a planner. */
 export interface ProofWords {
@@ -24,27 +25,43 @@ export function percentUp(fraction: number): string {
   return `${formatNumber(up, String(up).split('.')[1]?.length ?? 0)} %`;
 }
 
-/** What a claim rests on: said with every claim about the cheapest. */
-function leftOutInWords({ leftOut }: BlendOutcome): string {
-  const missing = leftOut.filter(({ reason }) => reason !== 'missing flag').length;
-  if (missing === 0) return '';
-  return missing === 1
-    ? ' One stock was left out because figures are missing or cannot be used.'
-    : ` ${missing} stocks were left out because figures are missing or cannot be used.`;
+/** "the 6 stocks that can be counted (1 left out)": whom a claim speaks of, where it is not all of them. */
+function ofStocks(outcome: BlendOutcome, order: Pick<Order, 'stocks'>, notCounted: NotCounted): string {
+  const left = leftOutCount(outcome, notCounted);
+  if (left === 0) return '';
+  const counted = countedStocks(outcome, order);
+  const whom = counted === 1 ? 'the one stock that can be counted' : `the ${counted} stocks that can be counted`;
+  return `${whom} (${left} left out)`;
+}
+
+function unreadInWords(notCounted: NotCounted): string {
+  const cells = unreadCount(notCounted);
+  if (cells === 0) return '';
+  return cells === 1 ? ' One cell of the stocks was not read.' : ` ${cells} cells of the stocks were not read.`;
 }
 
 /**
  * Why the search ended, whether there is a recipe and what is proven are three facts; the sentence says no more than
  * all three allow.
  */
-export function proofInWords(outcome: BlendOutcome, order?: Pick<Order, 'limits' | 'costBasis'>): ProofWords {
+export function proofInWords(
+  outcome: BlendOutcome,
+  order: Pick<Order, 'stocks' | 'limits' | 'costBasis'>,
+  notCounted: NotCounted = NOTHING_OMITTED,
+): ProofWords {
   const { stopped, proof, recipe } = outcome;
+  const left = leftOutCount(outcome, notCounted);
+  if (!recipe && left > 0 && countedStocks(outcome, order) === 0) return noStockCounts(left);
   if (stopped === 'refused') return { text: 'The order cannot be solved as written:', tone: 'bad' };
   if (stopped === 'engine failed') return { text: 'The search failed; there is no answer.', tone: 'bad' };
-  const left = leftOutInWords(outcome);
-  if (proof.kind === 'impossible') return { text: 'No mix of these stocks can meet the order: proven.', tone: 'bad' };
-  if (proof.kind === 'impossible with known figures') {
-    return { text: `No mix of the stocks whose figures are known can meet the order: proven.${left}`, tone: 'bad' };
+  const whom = ofStocks(outcome, order, notCounted);
+  const unread = unreadInWords(notCounted);
+  if (proof.kind === 'impossible' || proof.kind === 'impossible with known figures') {
+    const ofAll = proof.kind === 'impossible';
+    // Proven of all stocks with a price, those without the figures too: then only a missing price bears on it.
+    const spoken = ofAll && notCounted.omitted.length === 0 ? '' : whom;
+    const these = ofAll ? 'these stocks' : 'the stocks whose figures are known';
+    return { text: `No mix of ${spoken || these} can meet the order: proven.${unread}`, tone: 'bad' };
   }
   const why = WHY_STOPPED[stopped];
   if (!recipe) return { text: `No recipe found, and nothing proven yet (${why}).`, tone: 'warn' };
@@ -54,13 +71,26 @@ export function proofInWords(outcome: BlendOutcome, order?: Pick<Order, 'limits'
       tone: 'warn',
     };
   }
-  const hasAim = order?.limits.some(({ aim, aimWeight }) => aim !== undefined && aimWeight !== 0) ?? false;
-  const measure = order?.costBasis === 'cubic metre' ? ' per m³' : '';
+  const hasAim = order.limits.some(({ aim, aimWeight }) => aim !== undefined && aimWeight !== 0);
+  const measure = order.costBasis === 'cubic metre' ? ' per m³' : '';
+  const of = whom && ` of ${whom}`;
   if (proof.kind === 'least cost') {
     const best = hasAim ? `Best in cost${measure} and aims together` : `Cheapest${measure}`;
-    const text = `${best} under these figures and this blending rule, proven to ${percentUp(proof.gap)}.${left}`;
-    return { text, tone: 'good' };
+    const gap = percentUp(proof.gap);
+    return {
+      text: `${best}${of} under these figures and this blending rule, proven to ${gap}.${unread}`,
+      tone: 'good',
+    };
   }
   const best = hasAim ? `the best in cost${measure} and aims together` : `the cheapest${measure}`;
-  return { text: `At most ${percentUp(proof.gap)} above ${best} (${why}).${left}`, tone: 'warn' };
+  return { text: `At most ${percentUp(proof.gap)} above ${best}${of} (${why}).${unread}`, tone: 'warn' };
+}
+
+/** Nothing to choose from is no proof: it is said as what is missing. */
+function noStockCounts(left: number): ProofWords {
+  const text =
+    left === 1
+      ? 'No stock can be counted: the only one is left out. Below stands what it lacks.'
+      : `No stock can be counted: all ${left} are left out. Below stands what each of them lacks.`;
+  return { text, tone: 'warn' };
 }

@@ -1,4 +1,3 @@
-import type { Caution } from '../../src';
 import { formatNumber } from '../parts/numberText';
 import { amountDigits, type Batch, type RecipeRow, type RecipeTotals } from './recipeRows';
 
@@ -6,14 +5,15 @@ export interface RecipeToCopy {
   title: string;
   /** What is proven: a recipe that leaves the screen says so. */
   proof: string;
-  cautions: readonly Caution[];
+  /** Cautions, and what was left out with its reason. */
+  remarks: readonly string[];
   rows: readonly RecipeRow[];
   totals: RecipeTotals;
   batch: Batch;
 }
 
-/** The recipe as a block for a spreadsheet: tabs between cells, headings with units, proof and cautions above. */
-export function recipeText({ title, proof, cautions, rows, totals, batch }: RecipeToCopy): string {
+/** The recipe as a block for a spreadsheet: tabs between cells, headings with units, proof and remarks above. */
+export function recipeText({ title, proof, remarks, rows, totals, batch }: RecipeToCopy): string {
   const digits = amountDigits(batch.kilograms);
   const number = (value: number | undefined, decimals: number) =>
     value === undefined ? '' : formatNumber(value, decimals);
@@ -30,7 +30,7 @@ export function recipeText({ title, proof, cautions, rows, totals, batch }: Reci
   const lines = [
     [plain(title)],
     [plain(`${proof} A prediction: passing is for the laboratory.`)],
-    ...cautions.map(({ message }) => [plain(message)]),
+    ...[...new Set(remarks)].map((remark) => [plain(remark)]),
     ['Stock', 'Family', '% m/m', '% v/v', `kg ${batch.words}`, `L at 15 °C ${batch.words}`, '% of cost', 'left [t]'],
     ...rows.map((row) => [plain(row.name), row.family, ...figures(row)]),
     ['Total', '', ...figures(totals)],

@@ -55,6 +55,17 @@ describe('the answer with a recipe', () => {
     expect(screen.getByText(message)).toBeVisible();
   });
 
+  it('says with the proof, below it and in the copied recipe what a missing price left out', async () => {
+    const message = 'SN 150 has no price: give one or exclude it.';
+    const user = userEvent.setup();
+    show({ ...answered(), omitted: [{ productId: 'sn-150', name: 'SN 150', message }] });
+    expect(screen.getByText(/^Cheapest of the 2 stocks that can be counted \(1 left out\)/)).toBeVisible();
+    await user.click(screen.getByText('One stock left out'));
+    expect(screen.getByText(message)).toBeVisible();
+    await user.click(screen.getByRole('button', { name: 'Copy recipe' }));
+    expect(await navigator.clipboard.readText()).toMatch(/\(1 left out\)[\s\S]*\nSN 150 has no price/);
+  });
+
   it('gives the recipe to the clipboard, and says when the browser refuses', async () => {
     const user = userEvent.setup();
     show(answered());
@@ -139,5 +150,15 @@ describe('a new recipe', () => {
     }
     act(() => void vi.advanceTimersByTime(2000));
     expect(useView.getState().announcement).toMatch(/^New recipe: €1,200.00 per tonne. Cheapest/);
+  });
+
+  it('is announced in the measure that the order makes least', () => {
+    vi.useFakeTimers();
+    const order = orderOf({ costBasis: 'cubic metre' });
+    show(answered(mixOf(), order));
+    act(() => void vi.advanceTimersByTime(2000));
+    act(() => setAnswer(ID, { outcome: mixOf({ costPerCubicMetre: 1111 }) }));
+    act(() => void vi.advanceTimersByTime(2000));
+    expect(useView.getState().announcement).toMatch(/^New recipe: €1,111.00 per m³ at 15 °C. Cheapest per m³/);
   });
 });

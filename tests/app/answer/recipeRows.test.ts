@@ -65,8 +65,8 @@ describe('the sums', () => {
 describe('the recipe as a block for a spreadsheet', () => {
   const copied = (name = LIGHT.name) => {
     const order = orderOf({ batchTonnes: 8, stocks: [{ ...LIGHT, name }, HEAVY] });
-    const cautions = [{ kind: 'trial blend' as const, message: 'Make a trial blend first.' }];
-    return recipeText({ title: 'Gear oil', proof: 'Cheapest.', cautions, ...recipeRows(order, mixOf()) }).split('\n');
+    const remarks = ['Make a trial blend first.'];
+    return recipeText({ title: 'Gear oil', proof: 'Cheapest.', remarks, ...recipeRows(order, mixOf()) }).split('\n');
   };
 
   it('says above the figures what they are for, what is proven and what to do first', () => {

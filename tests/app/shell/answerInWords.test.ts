@@ -50,6 +50,16 @@ describe('an answer in two or three words', () => {
     });
   });
 
+  it('names products without a price with every claim', () => {
+    const omitted = [{ productId: 'sn-150', name: 'SN 150', message: 'SN 150 has no price.' }];
+    expect(say({ omitted }).remark).toBe('proven cheapest, 1 left out');
+    const impossible = { ...FOUND, proof: { kind: 'impossible' as const } };
+    expect(say({ omitted, outcome: impossible }).remark).toBe('with the stocks counted, 1 left out');
+    const { recipe: _recipe, ...refused } = { ...FOUND, stopped: 'refused' as const, proof: { kind: 'none' as const } };
+    const order = { stocks: [], limits: [] };
+    expect(say({ omitted, order, outcome: refused })).toMatchObject({ text: 'no stock counts', tone: 'warn' });
+  });
+
   it('asks for attention where the question could not be put', () => {
     expect(say({ outcome: { ...FOUND, stopped: 'refused', proof: { kind: 'none' } } }).text).toBe('needs attention');
     expect(say({ outcome: undefined, phase: 'failed' }).text).toBe('needs attention');
