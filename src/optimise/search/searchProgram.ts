@@ -285,8 +285,7 @@ export class SearchProgram {
       const rows = [...multipliers.keys()].filter((row) => multipliers[row] !== 0);
       const lines = [2, 3, 4].map((row) => turned[this.#staticRows + 1 + SUMS + row]);
       const usesVi = model.vi !== undefined && lines.some((dual) => dual !== 0);
-      const bounds = model.stocks.flatMap((_, stock) => leaningBound(stock, reduced[stock], model));
-      return { proven: true, rows, usesVi, bounds };
+      return { proven: true, rows, usesVi, bounds: neededBounds(bound, reduced, model) };
     }
     return { proven: false, rows: [], usesVi: false, bounds: [] };
   }
@@ -296,11 +295,22 @@ export class SearchProgram {
   }
 }
 
-/** A bound of a stock that a proof leans on, where it is tighter than 0 to 1. */
-function leaningBound(stock: number, reduced: number, { lower, upper }: SearchModel): StockBound[] {
-  if (reduced > 0 && lower[stock] > 0) return [{ stock, end: 'least' }];
-  if (reduced < 0 && upper[stock] < 1) return [{ stock, end: 'most' }];
-  return [];
+/** Bounds of stocks that a proof needs: those that cannot all be loosened to 0 or 1 with the proof still standing. */
+function neededBounds(proof: number, reduced: Float64Array, { stocks, lower, upper }: SearchModel): StockBound[] {
+  const losses = stocks.flatMap((_, stock): { bound: StockBound; loss: number }[] => {
+    const price = reduced[stock];
+    if (price > 0 && lower[stock] > 0) return [{ bound: { stock, end: 'least' }, loss: price * lower[stock] }];
+    if (price < 0 && upper[stock] < 1) return [{ bound: { stock, end: 'most' }, loss: -price * (1 - upper[stock]) }];
+    return [];
+  });
+  let slack = proof;
+  return losses
+    .sort((a, b) => a.loss - b.loss)
+    .flatMap(({ bound, loss }) => {
+      if (slack - loss <= 0) return [bound];
+      slack -= loss;
+      return [];
+    });
 }
 
 /** Scales at the middle of the reachable KV100: 0.01 mm²/s for the interval rows, one VI point for the lines. */
