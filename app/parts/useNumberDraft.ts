@@ -29,13 +29,14 @@ export function useNumberDraft(options: NumberDraftOptions) {
   const [draft, setDraft] = useState<string>();
   const [problem, setProblem] = useState<string>();
   const [seenValue, setSeenValue] = useState(value);
+  const [restored, setRestored] = useState<{ value: number | undefined }>();
   const atFocus = useRef<{ value: number | undefined }>(undefined);
   const stepped = useRef(false);
 
   // An undo or a drag elsewhere changed the value: what was left unread no longer speaks of it.
   if (!Object.is(seenValue, value)) {
     setSeenValue(value);
-    if (problem !== undefined) {
+    if (problem !== undefined && !(restored && Object.is(restored.value, value))) {
       setProblem(undefined);
       setDraft(undefined);
     }
@@ -56,7 +57,17 @@ export function useNumberDraft(options: NumberDraftOptions) {
   }
 
   function withLastGood(text: string): string {
-    return value === undefined || onUnread ? text : `${text} Until then ${formatForEditing(value, digits)} counts.`;
+    const counting = onDraft && atFocus.current ? atFocus.current.value : value;
+    if (counting === undefined || onUnread) return text;
+    return `${text} Until then ${formatForEditing(counting, digits)} counts.`;
+  }
+
+  /** Numbers that were only on the way to a text that is not taken ("4" of "4O.5") count for nothing. */
+  function restore(put: (value: number | undefined) => void) {
+    const start = atFocus.current;
+    if (!onDraft || !start || Object.is(start.value, value)) return;
+    setRestored(start);
+    put(start.value);
   }
 
   function commit() {
@@ -68,6 +79,7 @@ export function useNumberDraft(options: NumberDraftOptions) {
     const reading = read(draft);
     if ('problem' in reading) {
       setProblem(reading.problem);
+      restore(onCommit);
       onUnread?.(draft);
       return;
     }
@@ -118,7 +130,8 @@ export function useNumberDraft(options: NumberDraftOptions) {
     setDraft(text);
     setProblem(undefined);
     const reading = read(text);
-    if (onDraft && 'value' in reading && reading.value !== undefined) onDraft(reading.value);
+    if ('problem' in reading) restore((start) => start !== undefined && onDraft?.(start));
+    else if (onDraft && reading.value !== undefined) onDraft(reading.value);
   }
 
   return {

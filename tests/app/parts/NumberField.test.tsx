@@ -10,24 +10,27 @@ type Options = Partial<NumberFieldProps> & { start?: number };
 function Keeper({ start, onDraft, onCommit, ...options }: Options) {
   const [value, setValue] = useState(start);
   return (
-    <NumberField
-      label="least"
-      unit="mm²/s"
-      digits={2}
-      {...options}
-      value={value}
-      onCommit={(next) => {
-        onCommit?.(next);
-        setValue(next);
-      }}
-      onDraft={
-        onDraft &&
-        ((next) => {
-          onDraft(next);
+    <>
+      <NumberField
+        label="least"
+        unit="mm²/s"
+        digits={2}
+        {...options}
+        value={value}
+        onCommit={(next) => {
+          onCommit?.(next);
           setValue(next);
-        })
-      }
-    />
+        }}
+        onDraft={
+          onDraft &&
+          ((next) => {
+            onDraft(next);
+            setValue(next);
+          })
+        }
+      />
+      <output data-testid="kept">{value}</output>
+    </>
   );
 }
 
@@ -36,7 +39,11 @@ function setUp({ live, ...options }: Options & { live?: boolean } = {}) {
   const onDraft = vi.fn<(value: number) => void>();
   render(<Keeper {...options} onCommit={onCommit} onDraft={live ? onDraft : undefined} />);
   const field = screen.getByRole('textbox', { name: /least, mm²\/s/ });
-  return { field, onCommit, onDraft, user: userEvent.setup() };
+  const kept = () => {
+    const text = screen.getByTestId('kept').textContent;
+    return text === '' ? undefined : Number(text);
+  };
+  return { field, kept, onCommit, onDraft, user: userEvent.setup() };
 }
 
 describe('NumberField', () => {
@@ -111,6 +118,34 @@ describe('NumberField', () => {
     await user.keyboard('{Escape}');
     expect(onCommit).toHaveBeenCalledExactlyOnceWith(44.6);
     expect(field).toHaveValue('44.60');
+  });
+
+  it.each([
+    ['4O.5', '“4O.5” is not a number. Until then 41.40 counts.'],
+    ['4150', '4150 cannot be right: expected 0 to 100. Until then 41.40 counts.'],
+  ])(
+    'goes back to the number it had on entering where %s is not taken, and says that it counts',
+    async (typed, said) => {
+      const { field, kept, user } = setUp({ start: 41.4, live: true, sense: { min: 0, max: 100 } });
+      await user.clear(field);
+      await user.type(field, typed);
+      expect(kept()).toBe(41.4);
+      await user.tab();
+      expect(field).toHaveValue(typed);
+      expect(field).toHaveAccessibleDescription(said);
+      expect(kept()).toBe(41.4);
+    },
+  );
+
+  it('is without a number again where it had none on entering', async () => {
+    const { field, kept, user } = setUp({ live: true });
+    await user.type(field, '4O{Enter}');
+    expect(field).toHaveAccessibleDescription('“4O” is not a number.');
+    expect(kept()).toBeUndefined();
+    await user.clear(field);
+    await user.type(field, '40{Enter}');
+    expect(field).toBeValid();
+    expect(kept()).toBe(40);
   });
 
   it('steps by the reporting unit, ten of them with Shift, and commits once on leaving', async () => {
