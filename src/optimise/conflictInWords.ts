@@ -2,7 +2,7 @@ import type { Order } from './order';
 import type { ModelRow, SearchModel } from './rows/searchModel';
 import { doseInWords, percent, ruleInWords } from './ruleInWords';
 import type { SearchResult } from './search/branchAndBound';
-import type { StockBound } from './search/searchProgram';
+import type { StockBound } from './search/certificate';
 
 /** What stands in the way of an impossible order, as far as the proofs tell. */
 export interface Conflict {

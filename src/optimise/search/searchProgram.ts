@@ -1,10 +1,10 @@
-import { viscosityIndex } from '../../property/viscosityIndex';
 import type { LinearEngine, LinearProgram, LinearResult, LinearRow, LinearSession } from '../linear/linearEngine';
 import type { SearchModel, ViLimits } from '../rows/searchModel';
 import type { Box } from './box';
+import { type Certificate, neededBounds } from './certificate';
 import { type ExtraTerms, priceOut, safeBound } from './safeBound';
 import type { Line } from './viLine';
-import { knot, pieceOf, viKv40 } from './viPieces';
+import { viScales } from './viScales';
 
 /** Lines that hold the viscosity index over an interval of KV100: above the mix's KV40 index, and below it. */
 export interface ViRows {
@@ -23,20 +23,6 @@ export interface ViRows {
 export interface ShadowPrices {
   multipliers: Float64Array;
   line?: { price: number; slope: number };
-}
-
-/** The least or greatest share of a stock in the model. */
-export interface StockBound {
-  stock: number;
-  end: 'least' | 'most';
-}
-
-/** A proof that nothing meets the rows: places of the rows, and bounds of stocks, that it leans on. */
-export interface Certificate {
-  proven: boolean;
-  rows: number[];
-  usesVi: boolean;
-  bounds: StockBound[];
 }
 
 /** The interval's lower and upper end, "VI at most", and two lines for "VI at least", in this order. */
@@ -293,35 +279,4 @@ export class SearchProgram {
   dispose(): void {
     this.#session.dispose();
   }
-}
-
-/** Bounds of stocks that a proof needs: those that cannot all be loosened to 0 or 1 with the proof still standing. */
-function neededBounds(proof: number, reduced: Float64Array, { stocks, lower, upper }: SearchModel): StockBound[] {
-  const losses = stocks.flatMap((_, stock): { bound: StockBound; loss: number }[] => {
-    const price = reduced[stock];
-    if (price > 0 && lower[stock] > 0) return [{ bound: { stock, end: 'least' }, loss: price * lower[stock] }];
-    if (price < 0 && upper[stock] < 1) return [{ bound: { stock, end: 'most' }, loss: -price * (1 - upper[stock]) }];
-    return [];
-  });
-  let slack = proof;
-  return losses
-    .sort((a, b) => a.loss - b.loss)
-    .flatMap(({ bound, loss }) => {
-      if (slack - loss <= 0) return [bound];
-      slack -= loss;
-      return [];
-    });
-}
-
-/** Scales at the middle of the reachable KV100: 0.01 mm²/s for the interval rows, one VI point for the lines. */
-function viScales({ index, kv100, weights, min, max }: ViLimits): { sums: number; kv100: number; vi: number } {
-  const middle = Math.sqrt(kv100.from * Math.max(kv100.from, kv100.to));
-  const used = weights.filter((weight) => weight > 0);
-  const meanWeight = used.reduce((sum, weight) => sum + weight, 0) / Math.max(1, used.length) || 1;
-  const target = min?.value ?? max?.value ?? 100;
-  const kv40 = viKv40(target, pieceOf(Math.max(knot(0), middle)), middle).value;
-  const perPoint = Math.abs(viscosityIndex(kv40 * 1.001, middle) - viscosityIndex(kv40, middle)) / (0.001 * kv40);
-  const kvScale = 1 / (index.slope(middle) * 0.01 * meanWeight);
-  const viScale = perPoint / (index.slope(kv40) * meanWeight);
-  return { sums: Math.max(kvScale, viScale), kv100: kvScale, vi: viScale };
 }
