@@ -6,12 +6,13 @@ const WORDS = { saved: 'Saved on this computer', saving: 'Saving …', failed: '
 
 /** Whether the workbook is safe, in a few words; the reason and the way out stand in a notice below the header. */
 export function SaveState() {
-  const { state } = useSave();
+  const { state, unguarded } = useSave();
   const bad = state === 'failed' || state === 'unavailable';
   return (
     <span className={bad ? styles.saveBad : styles.save}>
       {bad && <Icon name="error" />}
       {WORDS[state]}
+      {!bad && unguarded && '; keep it open in one tab only: two tabs are not guarded here'}
     </span>
   );
 }

@@ -34,10 +34,16 @@ function downloadText(fileName: string, text: string): void {
   setTimeout(() => URL.revokeObjectURL(url), 10_000);
 }
 
+/** 128 random bits in hexadecimal. `crypto.randomUUID` is not there on a page served over plain http. */
+function randomId(): string {
+  const bytes = crypto.getRandomValues(new Uint8Array(16));
+  return Array.from(bytes, (byte) => byte.toString(16).padStart(2, '0')).join('');
+}
+
 /** The browser the page runs in. */
 export function browserEnvironment(): Environment {
   return {
-    newId: () => crypto.randomUUID(),
+    newId: randomId,
     now: () => performance.now(),
     today: () => new Date().toISOString(),
     indexedDB: attempt(() => window.indexedDB),

@@ -8,7 +8,7 @@ import { createWorker } from '../worker/createWorker';
 import { createSolverClient, type SolverClient } from '../worker/solverClient';
 import { setEarlierStates } from './earlierStates';
 import { environment } from './environment';
-import { setSave, setSetAside } from './saveStore';
+import { setSave, setSetAside, useSave } from './saveStore';
 import { startSolving } from './solving';
 import { announce, selectOrder, useView } from './viewStore';
 import { openWorkbook, useWorkbook } from './workbookStore';
@@ -63,6 +63,7 @@ function keepOrderInSight(): void {
 function keepSaved(storage: WorkbookStorage): () => void {
   const { locks, onLeaving } = environment();
   const lock = locks ? webLock(locks) : unguarded();
+  useSave.setState({ unguarded: !locks });
   const saver = createSaver({ storage, lock, report: setSave });
   const end = useWorkbook.subscribe(({ workbook }, before) => {
     if (workbook !== before.workbook) saver.schedule(workbook);

@@ -67,6 +67,7 @@ export const SAVE_FIELDS: Classified<SaveState> = {
   state: PASSING,
   message: PASSING,
   setAside: PASSING,
+  unguarded: PASSING,
 };
 
 /** The fields that survive a reload. */

@@ -2,7 +2,7 @@ import { act, render, screen } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { afterEach, describe, expect, it } from 'vitest';
 import { Header } from '../../../app/shell/Header';
-import { setSave, setSetAside } from '../../../app/state/saveStore';
+import { setSave, setSetAside, useSave } from '../../../app/state/saveStore';
 import { setTheme } from '../../../app/state/viewStore';
 import { editWorkbook, openWorkbook, useWorkbook } from '../../../app/state/workbookStore';
 import { emptyWorkbook, serialiseWorkbook } from '../../../src';
@@ -60,6 +60,14 @@ describe('the header', () => {
     expect(screen.getByText('Not saved')).toBeVisible();
     expect(screen.getByRole('alert')).toHaveTextContent('The disk is full.');
     expect(screen.getByRole('button', { name: 'Export workbook' })).toBeEnabled();
+  });
+
+  it('says beside the save state that two tabs are not guarded, where they are not', () => {
+    setUp();
+    expect(screen.getByText('Saved on this computer')).toBeVisible();
+    act(() => useSave.setState({ unguarded: true }));
+    expect(screen.getByText(/^Saved on this computer; .* two tabs are not guarded/)).toBeVisible();
+    act(() => useSave.setState({ unguarded: false }));
   });
 
   it('tells of a workbook set aside where it has just happened, and not at every start after', () => {

@@ -146,6 +146,13 @@ test('a second tab of the same workbook says that it does not save', async () =>
   stillOpen();
 });
 
+test('without Web Locks the page knows that two tabs are not guarded; with them it does not say so', async () => {
+  await open();
+  expect(useSave.getState().unguarded).toBe(true);
+  await open({ locks: fakeLocks() });
+  expect(useSave.getState().unguarded).toBe(false);
+});
+
 describe('trouble with storage', () => {
   test('a kept workbook that cannot be read is set aside, the demo opens, and both are said', async () => {
     const database = await openDatabase(factory);

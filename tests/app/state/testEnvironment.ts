@@ -41,5 +41,5 @@ export function resetStores(): void {
   openWorkbook(emptyWorkbook('w', 'W'));
   useView.setState({ orderId: undefined, theme: 'system', announcement: '' });
   useAnswers.setState({ answers: {} });
-  useSave.setState({ state: 'saved', message: undefined, setAside: undefined });
+  useSave.setState({ state: 'saved', message: undefined, setAside: undefined, unguarded: undefined });
 }
