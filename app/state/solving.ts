@@ -1,5 +1,5 @@
 import { toOrder, type Workbook } from '../../src';
-import type { SolverClient } from '../worker/solverClient';
+import type { SolveListener, SolverClient } from '../worker/solverClient';
 import { answerOf, markAllStale, setAnswer, useAnswers } from './answerStore';
 import { environment } from './environment';
 import { useView } from './viewStore';
@@ -33,7 +33,7 @@ function ask(workbook: Workbook, orderId: string): void {
     sinceMs,
   });
   const isNewest = () => asked.get(orderId) === question;
-  client.solve(order, {
+  const listener: SolveListener = {
     onProgress: (progress) => isNewest() && setAnswer(orderId, { progress }),
     onOutcome(outcome, message) {
       // Not the newest: a newer question is on its way, unless it was cancelled.
@@ -43,13 +43,19 @@ function ask(workbook: Workbook, orderId: string): void {
     onFailed(message) {
       if (isNewest()) setAnswer(orderId, { phase: 'failed', stale: true, message, progress: undefined });
     },
-    onDropped() {
-      // Dropped for another order: asked again when its own turn comes.
+    onDropped(why) {
       if (!isNewest()) return;
       asked.delete(orderId);
       setAnswer(orderId, { phase: answerOf(orderId).outcome ? 'answered' : 'idle', stale: true, progress: undefined });
+      // Dropped for another order: asked again when its own turn comes, which may be now.
+      if (why === 'for a newer order') queueMicrotask(() => askIfUnasked(orderId));
     },
-  });
+  };
+  client.solve(order, listener, orderId);
+}
+
+function askIfUnasked(orderId: string): void {
+  if (useView.getState().orderId === orderId && !asked.has(orderId)) askForSelected();
 }
 
 function askForSelected(): void {
@@ -89,7 +95,7 @@ export function startSolving(solver: SolverClient): () => void {
   };
 }
 
-/** Ends the running solve; the best recipe so far is shown, and said to be no more than that. */
+/** Ends the solve of the order on screen; the best recipe so far is shown, and said to be no more than that. */
 export function cancelSolve(): void {
-  client?.cancel();
+  client?.cancel(useView.getState().orderId);
 }

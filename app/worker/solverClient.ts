@@ -10,8 +10,8 @@ export interface SolveListener {
   /** `notice`: something about the way of the answer that the user should know, e.g. the slower engine. */
   onOutcome(outcome: BlendOutcome, notice?: string): void;
   onFailed(message: string): void;
-  /** A newer order took its place. */
-  onDropped?(): void;
+  /** A newer order took its place, or the user gave it up before its turn. */
+  onDropped?(why: 'for a newer order' | 'by the user'): void;
 }
 
 export interface SolverClientOptions {
@@ -29,10 +29,13 @@ export interface SolverClientOptions {
 }
 
 export interface SolverClient {
-  /** Solves the order; one that waits already is dropped for it, one that runs may still end first. */
-  solve(order: Order, listener: SolveListener): void;
-  /** Ends the running solve with what it has, and forgets the one that waits. */
-  cancel(): void;
+  /**
+   * Solves the order; one that waits already is dropped for it, one that runs may still end first. `subject`: what it
+   * is solved for, by which it can be cancelled.
+   */
+  solve(order: Order, listener: SolveListener, subject?: string): void;
+  /** Ends the running solve with what it has, and forgets the one that waits, where they are for this subject. */
+  cancel(subject?: string): void;
   dispose(): void;
 }
 
@@ -40,6 +43,7 @@ interface Job {
   id: number;
   order: Order;
   listener: SolveListener;
+  subject: string | undefined;
   cancelled?: 'by the user' | 'for a newer order';
   /** Set once it was sent again after a breakdown. */
   notice?: string;
@@ -95,7 +99,7 @@ export function createSolverClient(options: SolverClientOptions): SolverClient {
   /** Ends the job in hand without an answer. */
   function endLost(message: string): void {
     const why = running?.cancelled;
-    if (why === 'for a newer order') end((listener) => listener.onDropped?.());
+    if (why === 'for a newer order') end((listener) => listener.onDropped?.(why));
     else end(({ onFailed }) => onFailed(why === 'by the user' ? WORDS.cancelled : message));
   }
 
@@ -124,7 +128,8 @@ export function createSolverClient(options: SolverClientOptions): SolverClient {
     }
     kind = 'javascript';
     engineNotice = WORDS.secondEngine(reason);
-    if (running) send(running);
+    if (running?.cancelled) endLost('');
+    else if (running) send(running);
   }
 
   /** The order in hand once more, in a new worker; given up where that was done already. */
@@ -159,25 +164,29 @@ export function createSolverClient(options: SolverClientOptions): SolverClient {
   }
 
   return {
-    solve(order, listener) {
+    solve(order, listener, subject) {
       lastId += 1;
-      const job: Job = { id: lastId, order, listener };
+      const job: Job = { id: lastId, order, listener, subject };
       if (!running) {
         send(job);
         return;
       }
       const before = waiting;
       waiting = job;
-      before?.listener.onDropped?.();
+      before?.listener.onDropped?.('for a newer order');
       if (!before && !running.cancelled) {
         patience = setTimeout(() => cancelRunning('for a newer order'), settings.patienceMs);
       }
     },
-    cancel() {
-      const before = waiting;
-      waiting = undefined;
-      before?.listener.onDropped?.();
-      cancelRunning('by the user');
+    cancel(subject) {
+      if (waiting && waiting.subject === subject) {
+        const { listener } = waiting;
+        waiting = undefined;
+        // Nothing newer waits any more: the one that runs may take its time.
+        clearTimeout(patience);
+        listener.onDropped?.('by the user');
+      }
+      if (running && running.subject === subject) cancelRunning('by the user');
     },
     dispose() {
       clearTimeout(patience);

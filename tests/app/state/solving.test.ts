@@ -149,7 +149,35 @@ describe('several orders', () => {
   });
 });
 
+describe('an order left and come back to within a moment', () => {
+  test('is asked again where its solve was dropped meanwhile, and so comes to an answer', async () => {
+    vi.useFakeTimers();
+    workers.last.say({ kind: 'ready' });
+    selectOrder(SECOND);
+    selectOrder(FIRST);
+    // The order that waits makes the client lose patience with the one that runs.
+    await vi.advanceTimersByTimeAsync(400);
+    workers.last.answer(999, 'cancelled');
+    await vi.advanceTimersByTimeAsync(0);
+    expect(answerOf(FIRST).phase).toBe('solving');
+    workers.last.answer(1182);
+    workers.last.answer(913);
+    expect(answerOf(FIRST)).toMatchObject({ phase: 'answered', stale: false, outcome: { costPerTonne: 913 } });
+    vi.useRealTimers();
+  });
+});
+
 describe('cancelling', () => {
+  test('concerns the order on screen, not one left behind that still runs', () => {
+    workers.last.say({ kind: 'ready' });
+    selectOrder(SECOND);
+    cancelSolve();
+    expect(workers.last.heard.map(({ kind }) => kind)).toEqual(['solve']);
+    workers.last.answer(913);
+    expect(answerOf(FIRST)).toMatchObject({ phase: 'answered', outcome: { costPerTonne: 913 } });
+    expect(answerOf(SECOND).phase).toBe('idle');
+  });
+
   test('shows what there was, said to be cancelled', () => {
     cancelSolve();
     expect(workers.last.heard.at(-1)).toEqual({ kind: 'cancel', id: 1 });

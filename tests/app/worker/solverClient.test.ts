@@ -106,6 +106,34 @@ describe('cancelling', () => {
   });
 });
 
+describe('cancelling by subject', () => {
+  const quiet = { onOutcome: () => {}, onFailed: () => {} };
+
+  test('leaves the solve of another subject alone, with all the time it needs', () => {
+    client.solve(orderOf(1), quiet, 'a');
+    workers.last.say({ kind: 'ready' });
+    const dropped: string[] = [];
+    client.solve(orderOf(2), { ...quiet, onDropped: (why) => void dropped.push(why) }, 'b');
+    client.cancel('b');
+    vi.advanceTimersByTime(5_000);
+    expect(dropped).toEqual(['by the user']);
+    expect(workers.last.heard.map(({ kind }) => kind)).toEqual(['solve']);
+    client.cancel('a');
+    expect(workers.last.heard.at(-1)).toEqual({ kind: 'cancel', id: 1 });
+  });
+});
+
+test('an order cancelled while the engine loads is not sent to the second engine when that fails', () => {
+  const said = solve(1);
+  client.cancel();
+  workers.last.say({ kind: 'no engine', message: 'blocked' });
+  expect(said).toEqual([expect.stringMatching(/^failed: Cancelled/)]);
+  expect(batches()).toEqual([[1]]);
+  solve(2);
+  expect(workers.last.kind).toBe('javascript');
+  expect(batches()).toEqual([[1], [2]]);
+});
+
 describe('a worker in trouble', () => {
   test('one that breaks down is replaced, the order sent once more, and the user told', () => {
     const said = solve(1);
