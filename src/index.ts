@@ -51,6 +51,7 @@ export type { OmittedProduct, UnreadCell } from './workbook/engineStocks';
 export { type Restored, restoreWorkbook } from './workbook/restoreWorkbook';
 export { serialiseWorkbook } from './workbook/serialiseWorkbook';
 export { type EngineOrder, toOrder } from './workbook/toOrder';
+export { missingInRule } from './workbook/unfinishedRule';
 export {
   type Lot,
   type Product,

@@ -30,7 +30,7 @@ export function DoseList({ order }: { order: WorkbookOrder }) {
             dose={dose}
             name={nameOf(dose.stockId)}
             known={products.some(({ id }) => id === dose.stockId)}
-            problems={doseProblems(answer, dose.stockId)}
+            problems={doseProblems(answer, dose)}
             onChange={(next: Dose) =>
               editOrder(order.id, `change the dose of ${nameOf(dose.stockId)}`, ({ doses }) => {
                 doses[index] = next;

@@ -1,3 +1,4 @@
+import { useRef } from 'react';
 import { FAMILIES, type Product, type StockSet } from '../../src';
 import { IconButton } from '../parts/IconButton';
 import { Select } from '../parts/Select';
@@ -15,6 +16,7 @@ export function StockSetField({
   products: readonly Product[];
   onChange(set: StockSet): void;
 }) {
+  const field = useRef<HTMLFieldSetElement>(null);
   const members = membersOf(value, products);
   const taken = new Set(members.map(({ key }) => key));
   const flags = [...new Set(products.flatMap((product) => product.flags ?? []))];
@@ -23,16 +25,19 @@ export function StockSetField({
     { label: 'Products', options: products.map(({ id, name }) => ({ value: `stock:${id}`, label: name })) },
     { label: 'Flags', options: flags.map((flag) => ({ value: `flag:${flag}`, label: `carrying “${flag}”` })) },
   ];
+
+  function takeOut(key: string) {
+    // The button that was pressed goes with its stock: the focus must not fall off the page.
+    field.current?.querySelector('select')?.focus();
+    onChange(without(value, key));
+  }
+
   return (
-    <fieldset className={styles.set} aria-label={label}>
+    <fieldset ref={field} className={styles.set} aria-label={label}>
       {members.map(({ key, name }) => (
         <span key={key} className={styles.chip}>
           {name}
-          <IconButton
-            icon="remove"
-            label={`Take ${name} out of the set`}
-            onClick={() => onChange(without(value, key))}
-          />
+          <IconButton icon="remove" label={`Take ${name} out of the set`} onClick={() => takeOut(key)} />
         </span>
       ))}
       <Select
@@ -84,9 +89,4 @@ function without(set: StockSet, key: string): StockSet {
 function splitKey(key: string): [kind: string, name: string] {
   const colon = key.indexOf(':');
   return [key.slice(0, colon), key.slice(colon + 1)];
-}
-
-/** True where the set names nothing yet. */
-export function isEmptySet({ families, stockIds, flag }: StockSet): boolean {
-  return !families?.length && !stockIds?.length && flag === undefined;
 }

@@ -1,6 +1,7 @@
 import type { Dose, ShareRule, StockSet } from '../optimise/order';
 import type { Stock } from '../stock/stock';
 import type { ProductStocks } from './engineStocks';
+import { missingInRule } from './unfinishedRule';
 import type { WorkbookOrder } from './workbook';
 
 /** Doses and shares in terms of the engine's stocks, with a word where they had to be put differently. */
@@ -93,10 +94,11 @@ export function engineRules(order: WorkbookOrder, products: readonly ProductStoc
   const known: StocksOf = new Map(products.map((entry) => [entry.product.id, entry]));
   const rules: EngineRules = { doses: [], shares: [], notes: [] };
   for (const dose of order.doses) addDose(dose, known, rules);
-  rules.shares.push(
-    ...order.shares.flatMap((rule) => engineShares(rule, known)),
-    ...products.flatMap(greatestOverLots),
-  );
+  const whole = order.shares.filter((rule) => missingInRule(rule) === undefined);
+  const unfinished = order.shares.length - whole.length;
+  if (unfinished === 1) rules.notes.push('One rule of the order is not finished: it asks for nothing yet.');
+  if (unfinished > 1) rules.notes.push(`${unfinished} rules of the order are not finished: they ask for nothing yet.`);
+  rules.shares.push(...whole.flatMap((rule) => engineShares(rule, known)), ...products.flatMap(greatestOverLots));
   if (order.mostStocks !== undefined && products.some(({ stocks }) => stocks.length > 1)) {
     rules.notes.push('The greatest number of stocks counts lots: two lots of a product count as two.');
   }

@@ -55,7 +55,8 @@ const RULES: { readonly [Kind in ShareRule['kind']]: Reader<RuleOf<Kind>> } = {
   share: record<RuleOf<'share'>>({ kind: oneOf('share'), set: readSet, ...ends, of: readBasis }),
   ratio: record<RuleOf<'ratio'>>({ kind: oneOf('ratio'), set: readSet, to: readSet, ...ends }),
   count: record<RuleOf<'count'>>({ kind: oneOf('count'), set: readSet, ...ends }),
-  excludes: record<RuleOf<'excludes'>>({ kind: oneOf('excludes'), stockId: identity, set: readSet }),
+  // A rule may be unfinished: no stock chosen yet, no set, no ends.
+  excludes: record<RuleOf<'excludes'>>({ kind: oneOf('excludes'), stockId: text, set: readSet }),
   flag: record<RuleOf<'flag'>>({ kind: oneOf('flag'), flag: text }),
 };
 

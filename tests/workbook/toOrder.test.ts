@@ -6,6 +6,9 @@ import {
   type Figure,
   type Lot,
   type Product,
+  restoreWorkbook,
+  type ShareRule,
+  serialiseWorkbook,
   solveBlend,
   toOrder,
   type Workbook,
@@ -341,4 +344,29 @@ test('changes neither the workbook nor the order, whatever they hold, and names 
       }
     }),
   );
+});
+
+describe('rules that are not finished', () => {
+  const whole: ShareRule = { kind: 'share', set: { stockIds: ['a'] }, max: 0.5 };
+  const unfinished: ShareRule[] = [
+    { kind: 'share', set: {}, max: 0.5 },
+    { kind: 'share', set: { stockIds: ['a'] } },
+    { kind: 'ratio', set: { stockIds: ['a'] }, to: { stockIds: [] }, max: 1 },
+    { kind: 'count', set: { families: [] }, max: 1 },
+    { kind: 'excludes', stockId: '', set: { stockIds: ['a'] } },
+    { kind: 'flag', flag: '' },
+  ];
+
+  test('stay out of the engine order, and a note says so', () => {
+    const { order, notes } = convert([product('a')], { shares: [...unfinished, whole] });
+    expect(order.shares).toEqual([whole]);
+    expect(notes).toEqual(['6 rules of the order are not finished: they ask for nothing yet.']);
+    expect(convert([product('a')], { shares: [whole] }).notes).toEqual([]);
+  });
+
+  test('are kept in the file and read back', () => {
+    const order = { ...emptyOrder('o', 'Order'), shares: unfinished };
+    const workbook: Workbook = { ...emptyWorkbook('w', 'W'), orders: [order] };
+    expect(restoreWorkbook(serialiseWorkbook(workbook))).toMatchObject({ ok: true, workbook, notes: [] });
+  });
 });

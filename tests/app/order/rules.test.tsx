@@ -1,12 +1,13 @@
 import { act, render, screen, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
-import { beforeEach, describe, expect, it } from 'vitest';
+import { describe, expect, it } from 'vitest';
 import { DoseList } from '../../../app/order/DoseList';
 import { ShareRuleList } from '../../../app/order/ShareRuleList';
-import { useUnfinishedRules } from '../../../app/order/unfinishedRules';
 import { useOrder } from '../../../app/order/useOrder';
+import { setAnswer } from '../../../app/state/answerStore';
+import { undo } from '../../../app/state/workbookStore';
 import type { Dose, ShareRule, WorkbookOrder } from '../../../src';
-import { answerWith, ORDER_ID, orderOnPage, putOrderOnPage } from './orderOnPage';
+import { answerWith, ORDER_ID, orderOnPage, putOrderOnPage, STOCKS } from './orderOnPage';
 
 function Page() {
   const order = useOrder(ORDER_ID);
@@ -28,10 +29,6 @@ function setUp(change: Partial<WorkbookOrder> = {}) {
 
 const field = (name: RegExp) => screen.getByRole('textbox', { name });
 const choose = (name: string) => screen.getByRole('combobox', { name });
-
-beforeEach(() => {
-  useUnfinishedRules.setState({ byOrder: {} });
-});
 
 describe('doses', () => {
   it('adds a dose, says that no number stands yet, and takes one in per cent', async () => {
@@ -74,6 +71,20 @@ describe('doses', () => {
     expect(within(gone).getByText(/no longer in the workbook/)).toBeVisible();
   });
 
+  it('says at the dose of a product without a price that it has none', () => {
+    const doses: Dose[] = [{ stockId: 'thin', exactly: 0.1 }];
+    setUp({ doses });
+    const problems = [{ path: ['doses', 0, 'stockId'], message: 'The dose names a stock that is not in this order.' }];
+    act(() => {
+      answerWith({ stopped: 'refused', problems }, { doses, stocks: STOCKS.filter(({ id }) => id !== 'thin') });
+      setAnswer(ORDER_ID, {
+        omitted: [{ productId: 'thin', name: 'Thin stock', message: 'Thin stock has no price: give one.' }],
+      });
+    });
+    expect(screen.getByText('Thin stock has no price: give one.')).toBeVisible();
+    expect(screen.queryByText(/not in this order/)).toBeNull();
+  });
+
   it('removes a dose', async () => {
     const user = setUp({ doses: [{ stockId: 'thin', exactly: 0.1 }] });
     await user.click(screen.getByRole('button', { name: 'Remove the dose of Thin stock' }));
@@ -82,24 +93,53 @@ describe('doses', () => {
 });
 
 describe('rules', () => {
-  it('keeps half a rule out of the order until it is whole', async () => {
+  it('keeps half a rule in the order, says what it lacks, and takes it up', async () => {
     const user = setUp();
     await user.selectOptions(choose('Add a rule'), 'share of some stocks');
+    expect(screen.getByText('Choose the stocks; until then the rule asks for nothing.')).toBeVisible();
     await user.selectOptions(choose('Add to: Stocks counted'), 'ester');
     expect(screen.getByText('Give a least or a most; until then the rule asks for nothing.')).toBeVisible();
-    expect(orderOnPage().shares).toEqual([]);
+    expect(orderOnPage().shares).toEqual([{ kind: 'share', set: { families: ['ester'] } }]);
     await user.type(field(/Share, to/), '15{Enter}');
     expect(orderOnPage().shares).toEqual([{ kind: 'share', set: { families: ['ester'] }, max: 0.15 }]);
     expect(screen.queryByText(/asks for nothing/)).toBeNull();
   });
 
-  it('takes a rule that lost its stocks out of the order, but keeps it in sight', async () => {
-    const user = setUp({ shares: [{ kind: 'share', set: { families: ['ester'] }, max: 0.15 }] });
+  it('keeps a rule that lost its stocks in its place; undo gives them back, and nothing is doubled', async () => {
+    const rule: ShareRule = { kind: 'share', set: { families: ['ester'] }, max: 0.15 };
+    const user = setUp({ shares: [rule, { kind: 'count', set: { families: ['PAO'] }, max: 2 }] });
     await user.click(screen.getByRole('button', { name: 'Take ester out of the set' }));
-    expect(orderOnPage().shares).toEqual([]);
     expect(screen.getByText('Choose the stocks; until then the rule asks for nothing.')).toBeVisible();
-    await user.selectOptions(choose('Add to: Stocks counted'), 'Thick stock');
-    expect(orderOnPage().shares).toEqual([{ kind: 'share', set: { stockIds: ['thick'] }, max: 0.15 }]);
+    expect(orderOnPage().shares[0]).toEqual({ kind: 'share', set: {}, max: 0.15 });
+    expect(screen.getAllByRole('combobox', { name: 'Add to: Stocks counted' })[0]).toHaveFocus();
+    act(() => undo());
+    expect(orderOnPage().shares[0]).toEqual(rule);
+    expect(screen.getAllByRole('listitem')).toHaveLength(2);
+  });
+
+  it('keeps a rule whose ends are emptied', async () => {
+    const user = setUp({ shares: [{ kind: 'share', set: { families: ['ester'] }, min: 0.1 }] });
+    await user.clear(field(/Share, from/));
+    await user.tab();
+    expect(orderOnPage().shares).toEqual([{ kind: 'share', set: { families: ['ester'] } }]);
+    expect(screen.getByText(/^Give a least or a most/)).toBeVisible();
+  });
+
+  it('shows what the engine says of a rule beside it, though unfinished ones stand before it', () => {
+    const rule: ShareRule = { kind: 'share', set: { stockIds: ['thin'] }, min: 0.5, max: 0.2 };
+    setUp({ shares: [{ kind: 'share', set: {} }, rule] });
+    const problems = [{ path: ['shares', 0, 'min'], message: 'The least is above the most.' }];
+    act(() => answerWith({ stopped: 'refused', problems }, { shares: [rule] }));
+    const [unfinished, whole] = screen.getAllByRole('listitem');
+    if (!unfinished || !whole) throw new Error('Two rules should be listed.');
+    expect(within(whole).getByText('The least is above the most.')).toBeVisible();
+    expect(within(unfinished).queryByText('The least is above the most.')).toBeNull();
+  });
+
+  it('leaves the focus on the page when a rule is removed', async () => {
+    const user = setUp({ shares: [{ kind: 'flag', flag: 'food contact' }] });
+    await user.click(screen.getByRole('button', { name: 'Remove this rule' }));
+    expect(choose('Add a rule')).toHaveFocus();
   });
 
   it('edits a ratio', async () => {
