@@ -1,5 +1,6 @@
 import { AnswerPanel } from '../answer/AnswerPanel';
 import { OrderEditor } from '../order/OrderEditor';
+import { ErrorBoundary } from '../parts/ErrorBoundary';
 import { useCommandKeys } from '../parts/useCommandKeys';
 import { keyedCommands } from '../state/commands';
 import { useView } from '../state/viewStore';
@@ -7,9 +8,9 @@ import { StocksTable } from '../stocks/StocksTable';
 import { Announcer } from './Announcer';
 import { AnswerBar } from './AnswerBar';
 import styles from './App.module.css';
-import { ErrorBoundary } from './ErrorBoundary';
 import { Footer } from './Footer';
 import { Header } from './Header';
+import { MessageLine } from './MessageLine';
 import { OrderList } from './OrderList';
 import { PageNav } from './PageNav';
 
@@ -20,6 +21,7 @@ export function App() {
   return (
     <div className={styles.page}>
       <Header />
+      <MessageLine />
       <PageNav />
       <main className={styles.sheet}>
         <div className={styles.orders}>

@@ -16,7 +16,7 @@ export function ImportNotice({
     <Notice tone={result.ok ? 'good' : 'bad'} live className={styles.notice}>
       <span>
         {result.ok
-          ? `${result.fileName} imported. ${result.notes.join(' ')}`
+          ? `${result.fileName} imported. ${result.notes.join(' ')} Undo brings the former workbook back.`
           : `${result.fileName} was not imported; the workbook on the page is as it was. ${result.message}`}
       </span>
       <IconButton icon="remove" label="Hide this message" onClick={onHide} />

@@ -6,7 +6,7 @@ import { environment } from './environment';
 import { deleteOrder, duplicateOrder, newOrder } from './orderEdits';
 import { useSave } from './saveStore';
 import { cancelSolve } from './solving';
-import { announce, selectOrder, useView } from './viewStore';
+import { selectOrder, tell, useView } from './viewStore';
 import { exportWorkbook, importWorkbook } from './workbookFile';
 import { redo, replaceWorkbook, undo, useWorkbook } from './workbookStore';
 
@@ -29,14 +29,14 @@ const orderOnScreen = () => workbook().orders.find(({ id }) => id === useView.ge
 function newEmptyWorkbook(): void {
   replaceWorkbook(emptyWorkbook(environment().newId(), 'New workbook'), 'new empty workbook');
   selectOrder(undefined);
-  announce('A new empty workbook. Undo brings the former one back.');
+  tell('A new empty workbook. Undo brings the former one back.');
 }
 
 function openDemo(): void {
   const demo = demoWorkbook(environment().newId());
   replaceWorkbook(demo, 'opening the demo');
   selectOrder(demo.orders[0]?.id);
-  announce('The demo workbook. Its figures are invented. Undo brings the former workbook back.');
+  tell('The demo workbook. Its figures are invented. Undo brings the former workbook back.');
 }
 
 function exportSetAside(): void {

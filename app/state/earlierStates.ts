@@ -1,6 +1,6 @@
 import { restoreWorkbook } from '../../src';
 import type { WorkbookStorage } from '../storage/workbookStorage';
-import { announce, selectOrder } from './viewStore';
+import { selectOrder, tell } from './viewStore';
 import { replaceWorkbook, useWorkbook } from './workbookStore';
 
 /** An earlier state of the workbook on the page. */
@@ -32,11 +32,11 @@ export async function earlierStates(): Promise<EarlierState[]> {
 export function bringBack({ text, savedAt }: EarlierState): string | undefined {
   const restored = restoreWorkbook(text);
   if (!restored.ok) {
-    announce(`That state cannot be brought back. ${restored.message}`);
+    tell(`That state cannot be brought back. ${restored.message}`);
     return restored.message;
   }
   replaceWorkbook(restored.workbook, `return to the state of ${savedAt.slice(0, 16).replace('T', ' ')} UTC`);
   selectOrder(restored.workbook.orders[0]?.id);
-  announce('An earlier state is on the page. Undo leads back.');
+  tell('An earlier state is on the page. Undo leads back.');
   return undefined;
 }

@@ -1,6 +1,6 @@
 import { emptyOrder, type WorkbookOrder } from '../../src';
 import { environment } from './environment';
-import { announce, selectOrder, useView } from './viewStore';
+import { selectOrder, tell, useView } from './viewStore';
 import { editWorkbook, useWorkbook } from './workbookStore';
 
 const orders = () => useWorkbook.getState().workbook.orders;
@@ -43,5 +43,5 @@ export function deleteOrder(): void {
     draft.orders.splice(at, 1);
   });
   selectOrder((orders()[at] ?? orders()[at - 1])?.id);
-  announce(`${gone.name} deleted. Undo brings it back.`);
+  tell(`${gone.name} deleted. Undo brings it back.`);
 }

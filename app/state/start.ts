@@ -10,7 +10,7 @@ import { setEarlierStates } from './earlierStates';
 import { environment } from './environment';
 import { setSave, setSetAside, useSave } from './saveStore';
 import { startSolving } from './solving';
-import { announce, selectOrder, useView } from './viewStore';
+import { selectOrder, tell, useView } from './viewStore';
 import { openWorkbook, useWorkbook } from './workbookStore';
 
 export const NO_STORAGE =
@@ -48,7 +48,7 @@ async function lastWorkbook(storage: WorkbookStorage): Promise<Workbook> {
   }
   await offerSetAside(storage);
   if (loaded.kind === 'nothing') return freshDemo();
-  if (loaded.notes.length > 0) announce(loaded.notes.join(' '));
+  if (loaded.notes.length > 0) tell(loaded.notes.join(' '));
   return loaded.workbook;
 }
 

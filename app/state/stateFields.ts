@@ -47,6 +47,7 @@ export const VIEW_FIELDS: Classified<ViewState> = {
   orderId: OF_THIS_WINDOW,
   theme: OF_THIS_WINDOW,
   announcement: PASSING,
+  message: PASSING,
 };
 
 /** Answers are worked out anew. */

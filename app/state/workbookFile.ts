@@ -1,6 +1,6 @@
 import { restoreWorkbook, serialiseWorkbook } from '../../src';
 import { environment } from './environment';
-import { announce, selectOrder } from './viewStore';
+import { selectOrder, tell } from './viewStore';
 import { replaceWorkbook, useWorkbook } from './workbookStore';
 
 /** Largest file read [bytes]; the text inside has its own bound. */
@@ -18,8 +18,9 @@ function fileName(name: string): string {
 /** Hands the workbook to the user as a file. */
 export function exportWorkbook(): void {
   const { workbook } = useWorkbook.getState();
-  environment().download(fileName(workbook.name), serialiseWorkbook(workbook));
-  announce('Workbook exported.');
+  const name = fileName(workbook.name);
+  environment().download(name, serialiseWorkbook(workbook));
+  tell(`Workbook exported as ${name}.`);
 }
 
 /** What a chosen file holds: a text, or why it cannot be read. */
@@ -35,16 +36,15 @@ async function fileText(file: File): Promise<{ text: string } | { message: strin
 /** How an import went. On trouble the workbook is as it was. */
 export type Imported = { ok: true; notes: string[] } | { ok: false; message: string };
 
-/** Puts the workbook of a file on the page, as a step that can be undone. */
+/** Puts the workbook of a file on the page, as a step that can be undone. Whoever asks for it shows how it went. */
 export async function importWorkbook(file: File): Promise<Imported> {
   const read = await fileText(file);
   const restored = 'text' in read ? restoreWorkbook(read.text) : { ok: false as const, message: read.message };
   if (!restored.ok) {
-    announce(`${file.name} was not imported. ${restored.message}`);
     return { ok: false, message: restored.message };
   }
   replaceWorkbook(restored.workbook, `import of ${file.name}`);
   selectOrder(restored.workbook.orders[0]?.id);
-  announce([`${file.name} imported.`, ...restored.notes].join(' '));
+  tell('');
   return { ok: true, notes: restored.notes };
 }

@@ -2,7 +2,7 @@ import { produceWithPatches } from 'immer';
 import { create } from 'zustand';
 import { emptyWorkbook, type Workbook } from '../../src';
 import { applyChanges, changesNothing, type HistoryStep, joinSteps, pushStep } from './history';
-import { announce } from './viewStore';
+import { announce, tell } from './viewStore';
 
 export interface WorkbookState {
   workbook: Workbook;
@@ -71,6 +71,12 @@ export function replaceWorkbook(workbook: Workbook, label: string): void {
   useWorkbook.setState(withHistory(workbook, pushStep(past, step), []), true);
 }
 
+/** What a step back or forward came to. The last message may speak of a state that is gone now: it goes too. */
+function say(done: string | undefined, failed: string): void {
+  if (done) announce(done);
+  tell(done ? '' : failed);
+}
+
 /** Takes the last step back. A step that no longer fits is dropped with a word to the user, never in the way. */
 export function undo(): void {
   endEdit();
@@ -79,7 +85,7 @@ export function undo(): void {
   if (!step) return;
   const before = applyChanges(workbook, step.inverse);
   useWorkbook.setState(withHistory(before ?? workbook, past.slice(0, -1), before ? [...future, step] : future), true);
-  announce(before ? `Undone: ${step.label}` : `“${step.label}” could not be undone; the workbook is as it was.`);
+  say(before && `Undone: ${step.label}`, `“${step.label}” could not be undone; the workbook is as it was.`);
 }
 
 /** Makes the last undone step again. */
@@ -89,5 +95,5 @@ export function redo(): void {
   if (!step) return;
   const after = applyChanges(workbook, step.forward);
   useWorkbook.setState(withHistory(after ?? workbook, after ? pushStep(past, step) : past, future.slice(0, -1)), true);
-  announce(after ? `Done again: ${step.label}` : `“${step.label}” could not be done again; the workbook is as it was.`);
+  say(after && `Done again: ${step.label}`, `“${step.label}” could not be done again; the workbook is as it was.`);
 }

@@ -39,7 +39,7 @@ export function testEnvironment(surroundings: Partial<Environment> = {}): TestEn
 /** Every store as it is when the page opens. */
 export function resetStores(): void {
   openWorkbook(emptyWorkbook('w', 'W'));
-  useView.setState({ orderId: undefined, theme: 'system', announcement: '' });
+  useView.setState({ orderId: undefined, theme: 'system', announcement: '', message: '' });
   useAnswers.setState({ answers: {} });
   useSave.setState({ state: 'saved', message: undefined, setAside: undefined, unguarded: undefined });
 }

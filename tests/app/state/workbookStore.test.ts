@@ -147,7 +147,7 @@ describe('the history', () => {
     useWorkbook.setState({ past: [...past, broken] });
     undo();
     expect(workbook().name).toBe('B');
-    expect(useView.getState().announcement).toBe('“broken” could not be undone; the workbook is as it was.');
+    expect(useView.getState().message).toBe('“broken” could not be undone; the workbook is as it was.');
     undo();
     expect(workbook().name).toBe('A');
   });

@@ -18,7 +18,7 @@ const refusing: Storage = {
 beforeEach(() => localStorage.clear());
 
 test('the view comes back as it was left', () => {
-  saveView(localStorage, { theme: 'light', orderId: 'a', announcement: '' });
+  saveView(localStorage, { theme: 'light', orderId: 'a', announcement: '', message: '' });
   expect(loadView(localStorage)).toEqual({ theme: 'light', orderId: 'a' });
 });
 
@@ -32,7 +32,7 @@ test.each(['not json', 'null', '[]', '{"theme": "loud", "orderId": 7}'])(
 
 test('no storage, or one that refuses, is no trouble', () => {
   for (const storage of [undefined, refusing]) {
-    saveView(storage, { theme: 'light', announcement: '' });
+    saveView(storage, { theme: 'light', announcement: '', message: '' });
     expect(loadView(storage)).toEqual({});
   }
 });
