@@ -1,5 +1,5 @@
 import { type ChangeEvent, type FocusEvent, type KeyboardEvent, useRef, useState } from 'react';
-import { formatForEditing, formatNumber, parseNumber } from './numberText';
+import { formatForEditing, formatNumber, parseNumber, unreadInWords } from './numberText';
 
 export interface NumberDraftOptions {
   value?: number;
@@ -135,7 +135,7 @@ export function useNumberDraft(options: NumberDraftOptions) {
   }
 
   return {
-    problem: problem ?? (draft === undefined && unreadText !== undefined ? unreadProblem(unreadText) : undefined),
+    problem: problem ?? (draft === undefined && unreadText !== undefined ? unreadInWords(unreadText) : undefined),
     dirty: draft !== undefined && problem === undefined,
     inputProps: {
       value: shown,
@@ -148,11 +148,6 @@ export function useNumberDraft(options: NumberDraftOptions) {
       onBlur: commit,
     },
   };
-}
-
-function unreadProblem(text: string): string {
-  const parsed = parseNumber(text);
-  return 'problem' in parsed ? parsed.problem : `“${text}” was not taken. Type the number again.`;
 }
 
 function rangeText(sense: { min: number; max: number }, digits: number): string {

@@ -27,7 +27,8 @@ export function CellEditor({
   const field = useRef<HTMLInputElement & HTMLSelectElement>(null);
   const done = useRef(false);
   const label = `${column.title}, ${product.name}`;
-  const changed = draft === start ? undefined : draft;
+  // A text that stands unread may be meant after all: typed again as it is, it is read again.
+  const changed = draft === start && product.unread?.[column.id] === undefined ? undefined : draft;
 
   useLayoutEffect(() => {
     field.current?.focus();

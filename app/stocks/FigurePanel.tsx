@@ -8,6 +8,7 @@ import {
   propertyDefinition,
 } from '../../src';
 import { NumberField } from '../parts/NumberField';
+import { exactText } from '../parts/numberText';
 import { Select } from '../parts/Select';
 import { TextField } from '../parts/TextField';
 import type { Column } from './column';
@@ -107,7 +108,7 @@ function Value({
       step={10 ** -definition.digits}
       value={figure?.value}
       unreadText={product.unread?.[column.id]}
-      onCommit={(value) => writeCell(product, column, value === undefined ? '' : String(value))}
+      onCommit={(value) => writeCell(product, column, value === undefined ? '' : exactText(value))}
       onUnread={(text) => writeCell(product, column, text)}
     />
   );

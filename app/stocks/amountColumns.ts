@@ -1,5 +1,5 @@
 import type { Product } from '../../src';
-import { formatForEditing, parseNumber } from '../parts/numberText';
+import { type DecimalSign, formatForEditing, parseNumber, unreadInWords } from '../parts/numberText';
 import { environment } from '../state/environment';
 import { type CellView, type Column, dropUnread, keepUnread } from './column';
 
@@ -25,7 +25,7 @@ function amountColumn({ factor = 1, ...amount }: Amount): Column {
   const shown = (value: number) => Number((value / factor).toPrecision(12));
   function read(product: Product): CellView {
     const unread = product.unread?.[id];
-    if (unread !== undefined) return { text: unread, edit: unread, problem: reasonOf(unread) };
+    if (unread !== undefined) return { text: unread, edit: unread, problem: `${unreadInWords(unread)} ${LEFT_OUT}` };
     const value = amount.get(product);
     const isPrice = id === 'pricePerTonne';
     if (value === undefined) {
@@ -40,9 +40,9 @@ function amountColumn({ factor = 1, ...amount }: Amount): Column {
       ...(caution && { caution }),
     };
   }
-  function write(product: Product, text: string): void {
+  function write(product: Product, text: string, sign?: DecimalSign): void {
     dropUnread(product, id);
-    const parsed = parseNumber(factor === 1 ? text : text.replace(/%\s*$/, ''));
+    const parsed = parseNumber(factor === 1 ? text : text.replace(/%\s*$/, ''), sign);
     if ('problem' in parsed) {
       amount.set(product, undefined);
       keepUnread(product, id, text);
@@ -54,11 +54,6 @@ function amountColumn({ factor = 1, ...amount }: Amount): Column {
 
 /** A bound that cannot be read, or cannot be right, is not "no bound": the stock then stays out, as without a price. */
 const LEFT_OUT = 'Until then the stock is left out.';
-
-function reasonOf(text: string): string {
-  const parsed = parseNumber(text);
-  return `${'problem' in parsed ? parsed.problem : `“${text}” was not taken.`} ${LEFT_OUT}`;
-}
 
 const outsideShare = (value: number) =>
   value < 0 || value > 1 ? `A share lies between 0 and 100 %. ${LEFT_OUT}` : undefined;

@@ -1,4 +1,5 @@
 import type { Figure, Product } from '../../src';
+import type { DecimalSign } from '../parts/numberText';
 
 /** What a cell shows. */
 export interface CellView {
@@ -27,8 +28,11 @@ export interface Column {
   figure?: Pick<Figure, 'property' | 'celsius'>;
   choices?: readonly string[];
   read(product: Product): CellView;
-  /** Takes a text as typed or pasted; an empty one clears the cell. Absent: the column is calculated. */
-  write?(product: Product, text: string): void;
+  /**
+   * Takes a text as typed or pasted, a number by the user's own decimal sign or the one given; an empty text clears
+   * the cell. Absent: the column is calculated.
+   */
+  write?(product: Product, text: string, sign?: DecimalSign): void;
   /** Why this product's cell cannot be typed over, or nothing. */
   locked?(product: Product): string | undefined;
 }

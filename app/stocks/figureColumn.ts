@@ -1,5 +1,5 @@
 import type { Figure, FigureOrigin, Product, PropertyDefinition } from '../../src';
-import { formatForEditing, parseNumber } from '../parts/numberText';
+import { type DecimalSign, formatForEditing, parseNumber } from '../parts/numberText';
 import { type CellView, type Column, dropUnread, keepUnread } from './column';
 import { figureProblem, unreadReason } from './figureProblem';
 import { enteredText, figureText } from './figureText';
@@ -31,7 +31,7 @@ export function figureColumn(definition: PropertyDefinition, celsius?: number): 
     kind: 'number',
     figure: at,
     read: (product) => viewOf(product, definition, at),
-    write: (product, text) => writeFigure(product, at, text),
+    write: (product, text, sign) => writeFigure(product, at, text, sign),
   };
 }
 
@@ -81,7 +81,7 @@ function renewed(old: Figure | undefined, at: FigureAt, value: number): Figure {
   return { ...at, value, origin: keeps ? old.origin : 'typical', ...method };
 }
 
-export function writeFigure(product: Product, at: FigureAt, text: string): void {
+export function writeFigure(product: Product, at: FigureAt, text: string, sign?: DecimalSign): void {
   const id = figureKey(at);
   const old = figureOf(product, at);
   const wasUnread = product.unread?.[id] !== undefined;
@@ -90,7 +90,7 @@ export function writeFigure(product: Product, at: FigureAt, text: string): void 
     if (old?.origin !== 'as the rest') putFigure(product, { ...at, origin: 'as the rest' });
     return;
   }
-  const parsed = parseNumber(text);
+  const parsed = parseNumber(text, sign);
   if ('empty' in parsed) product.figures = product.figures.filter((figure) => figureKey(figure) !== id);
   else if ('problem' in parsed) keepUnread(product, id, text);
   else if (wasUnread || old?.value !== parsed.value) putFigure(product, renewed(old, at, parsed.value));

@@ -1,12 +1,10 @@
 import type { Product, PropertyDefinition } from '../../src';
-import { formatNumber, parseNumber } from '../parts/numberText';
+import { formatNumber, unreadInWords } from '../parts/numberText';
 import { countingValue, type FigureAt } from './productFigures';
 
 /** Why a text in a figure's cell is not taken. */
 export function unreadReason(text: string): string {
-  const parsed = parseNumber(text);
-  const reason = 'problem' in parsed ? parsed.problem : `“${text}” was not taken.`;
-  return `${reason} Until then the figure is unknown.`;
+  return `${unreadInWords(text)} Until then the figure is unknown.`;
 }
 
 /** Why a figure cannot be right, or nothing. */

@@ -1,4 +1,5 @@
 import type { Product } from '../../src';
+import { commonSign, type DecimalSign } from '../parts/numberText';
 import { editWorkbook } from '../state/workbookStore';
 import type { Column } from './column';
 import { columnOfHeading, isHeadingRow } from './headings';
@@ -60,12 +61,13 @@ export interface Pasted {
 export function paste({ rows, columns, firstRow, leftOut }: PastePlan): Pasted {
   const beyond = leftOut.length > 0 ? 0 : columns.filter((column) => !column).length;
   const result: Pasted = { changed: 0, added: 0, unread: 0, strangeFamilies: [], locked: [], leftOut, beyond };
+  const sign = commonSign(rows.flatMap((cells) => cells.filter((_, place) => columns[place]?.kind === 'number')));
   editWorkbook('paste', (draft) => {
     for (const [offset, cells] of rows.entries()) {
       const place = firstRow + offset;
       const there = draft.products[place];
       const product = there ?? emptyProduct(`Stock ${draft.products.length + 1}`);
-      fillRow(product, cells, columns, result);
+      fillRow(product, cells, columns, sign, result);
       if (!there) draft.products.push(product);
       result[there ? 'changed' : 'added'] += 1;
     }
@@ -83,6 +85,7 @@ function fillRow(
   product: Product,
   cells: readonly string[],
   columns: readonly (Column | undefined)[],
+  sign: DecimalSign | undefined,
   result: Pasted,
 ): void {
   for (const [place, column] of inOrderOfWriting(columns)) {
@@ -92,7 +95,7 @@ function fillRow(
       if (text !== '' && !result.locked.includes(column.label)) result.locked.push(column.label);
       continue;
     }
-    column.write(product, text);
+    column.write(product, text, sign);
     if (product.unread?.[column.id] !== undefined) result.unread += 1;
     if (column.id === 'family' && !readFamily(text)) result.strangeFamilies.push(text);
   }

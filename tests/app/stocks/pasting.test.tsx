@@ -66,6 +66,25 @@ describe('pasting into an empty table', () => {
     expect(products()).toEqual([]);
   });
 
+  it('reads a whole block by the decimal sign it shows, and refuses what that leaves open', async () => {
+    setUp();
+    pasteOn(
+      screen.getByRole('textbox', { name: 'Paste stocks here' }),
+      block([
+        ['Name', 'Price', 'KV40', 'KV100'],
+        ['Priced', '1.182', '46,25', '6,872'],
+      ]),
+    );
+    const [priced] = products();
+    expect(priced?.pricePerTonne).toBeUndefined();
+    expect(priced?.unread).toEqual({ pricePerTonne: '1.182' });
+    expect(priced?.figures).toEqual([kv(40, 46.25), kv(100, 6.872)]);
+    act(() => cellAt(0, 'Price').focus());
+    expect(cellAt(0, 'Price')).toHaveAccessibleDescription(/“1.182” can be read in two ways. Write 1182 or 1.182/);
+    await userEvent.setup().keyboard('1.182{Enter}');
+    expect(products()[0]?.pricePerTonne).toBe(1.182);
+  });
+
   it('names families it does not know and takes them as “other”', () => {
     setUp();
     const rows = [
