@@ -2,7 +2,6 @@ import { memo, useDeferredValue } from 'react';
 import type { BlendOutcome, OmittedProduct, Order } from '../../src';
 import { LazyViscosityChart } from '../chart/LazyViscosityChart';
 import { Section } from '../parts/Section';
-import { ErrorBoundary } from '../shell/ErrorBoundary';
 import styles from './AnswerPanel.module.css';
 import { apiGroupsInWords } from './apiGroups';
 import { Cautions } from './Cautions';
@@ -51,9 +50,7 @@ export const Recipe = memo(function Recipe({
         text={() => recipeText({ title, proof, remarks, rows, totals, batch })}
       />
       <Section title="Viscosity and temperature" level={3} className={styles.part}>
-        <ErrorBoundary what="The chart">
-          <LazyViscosityChart order={chartedOrder} outcome={charted} />
-        </ErrorBoundary>
+        <LazyViscosityChart order={chartedOrder} outcome={charted} />
       </Section>
       <Section title="Predicted properties" level={3} className={styles.part}>
         <p className={styles.grades}>{gradesInWords(outcome)}</p>

@@ -1,7 +1,7 @@
-import { lazy, memo, Suspense, useMemo } from 'react';
+import { type ComponentProps, lazy, memo, Suspense, useMemo } from 'react';
 import type { BlendOutcome, Order } from '../../src';
+import { ErrorBoundary } from '../parts/ErrorBoundary';
 import { useWidth } from '../parts/useWidth';
-import { ErrorBoundary } from '../shell/ErrorBoundary';
 import { ChartTable } from './ChartTable';
 import { CHART_HEIGHT, plotSize } from './chartLayout';
 import { chartScene } from './chartScene';
@@ -10,7 +10,18 @@ import { viscosityLines } from './viscosityLines';
 import { viscosityWindows } from './viscosityWindows';
 
 /** Recharts is a third of the page's weight: it is fetched when the rest is already on screen. */
-const ViscosityChart = lazy(() => import('./ViscosityChart'));
+const fetched = () => lazy(() => import('./ViscosityChart'));
+
+let Fetched = fetched();
+
+/** React keeps a download that failed for good: another try needs a new one. */
+function fetchAgain(): void {
+  Fetched = fetched();
+}
+
+function Drawn(props: ComponentProps<typeof Fetched>) {
+  return <Fetched {...props} />;
+}
 
 interface ChartProps {
   order: Order;
@@ -21,7 +32,15 @@ interface ChartProps {
  * The viscosity-temperature chart of a recipe, its table, and what not to read into it. Memoised, so that the page can
  * let it lag behind its numbers.
  */
-export const LazyViscosityChart = memo(function LazyViscosityChart({ order, outcome }: ChartProps) {
+export const LazyViscosityChart = memo(function LazyViscosityChart(props: ChartProps) {
+  return (
+    <ErrorBoundary what="The chart" onRetry={fetchAgain}>
+      <Chart {...props} />
+    </ErrorBoundary>
+  );
+});
+
+function Chart({ order, outcome }: ChartProps) {
   const [frame, width] = useWidth<HTMLDivElement>(400);
   const lines = useMemo(() => viscosityLines(order, outcome), [order, outcome]);
   const windows = useMemo(() => viscosityWindows(order, outcome), [order, outcome]);
@@ -30,17 +49,15 @@ export const LazyViscosityChart = memo(function LazyViscosityChart({ order, outc
   const grade = windows.find(({ kind }) => kind === 'grade');
   return (
     <div ref={frame} className={styles.frame}>
-      <ErrorBoundary what="The chart">
-        <Suspense fallback={<Placeholder width={width} />}>
-          <div
-            className={styles.chart}
-            role="img"
-            aria-label="Viscosity against temperature on ASTM D341 axes. The table below it says the same."
-          >
-            <ViscosityChart scene={scene} width={width} />
-          </div>
-        </Suspense>
-      </ErrorBoundary>
+      <Suspense fallback={<Placeholder width={width} />}>
+        <div
+          className={styles.chart}
+          role="img"
+          aria-label="Viscosity against temperature on ASTM D341 axes. The table below it says the same."
+        >
+          <Drawn scene={scene} width={width} />
+        </div>
+      </Suspense>
       <p className={styles.key}>
         <span>mm²/s on ASTM D341 axes</span>
         {windows.some(({ kind }) => kind === 'limit') && <span className={styles.limitKey}>limit</span>}
@@ -52,7 +69,7 @@ export const LazyViscosityChart = memo(function LazyViscosityChart({ order, outc
       <ChartTable lines={lines} windows={windows} />
     </div>
   );
-});
+}
 
 function Placeholder({ width }: { width: number }) {
   return (
