@@ -93,14 +93,22 @@ function predictOne(parts: readonly Part[], at: PropertyAt, options: PredictionO
   return mean(blendQuantity(stocks, at, options), parts);
 }
 
-/** The same viscosity under every rule: the spread hints at the model's own error. */
-function spreadOf(parts: readonly Part[], at: PropertyAt, options: PredictionOptions): RuleSpread {
-  const byRule = VISCOSITY_RULES.map((rule) => {
-    const { value } = predictOne(parts, at, { ...options, viscosityRule: rule });
-    return value === undefined ? { rule } : { rule, value };
-  });
-  const property = at.property === 'vi' ? 'vi' : 'kv';
-  return at.celsius === undefined ? { property, byRule } : { property, celsius: at.celsius, byRule };
+/** The same viscosities, and the index that follows, under every rule: the spread hints at the model's own error. */
+function spreadOf(parts: readonly Part[], options: PredictionOptions): RuleSpread[] {
+  const cold: RuleSpread = { property: 'kv', celsius: 40, byRule: [] };
+  const hot: RuleSpread = { property: 'kv', celsius: 100, byRule: [] };
+  const index: RuleSpread = { property: 'vi', byRule: [] };
+  for (const rule of VISCOSITY_RULES) {
+    const under = { ...options, viscosityRule: rule };
+    const kv40 = predictOne(parts, { property: 'kv', celsius: 40 }, under);
+    const kv100 = predictOne(parts, { property: 'kv', celsius: 100 }, under);
+    const add = (spread: RuleSpread, { value }: PredictedProperty) =>
+      spread.byRule.push(value === undefined ? { rule } : { rule, value });
+    add(cold, kv40);
+    add(hot, kv100);
+    add(index, viscosityIndexOf(kv40, kv100));
+  }
+  return [cold, hot, index];
 }
 
 function same(a: PropertyAt, b: PropertyAt): boolean {
@@ -159,9 +167,7 @@ export function predictBlend(
 ): PredictedProperties {
   const parts = partsOf(stocks, recipe);
   const properties = propertiesToPredict(parts, options).map((at) => predictOne(parts, at, options));
-  const spread = [{ property: 'kv', celsius: 40 }, { property: 'kv', celsius: 100 }, { property: 'vi' }].map((at) =>
-    spreadOf(parts, at, options),
-  );
+  const spread = spreadOf(parts, options);
   const volumes = volumeFractions(parts, recipe, options);
   return volumes ? { properties, volumeFractions: volumes, spread } : { properties, spread };
 }

@@ -129,12 +129,16 @@ export class RecipeFinder {
   /** Moves the tangent of the curve to where the solution goes, until it stays; undefined where it does not. */
   #followTangents(vi: ViLimits, interval: Kv100Interval, start: number): number | undefined {
     let kv100 = start;
+    let before = 1;
     for (let round = 0; round < MOST_TANGENTS; round++) {
       const found = this.#solutionUnder(vi, tangentRows(vi, interval, kv100));
       if (found === undefined) return undefined;
       const moved = Math.abs(found / kv100 - 1);
       kv100 = found;
-      if (moved <= NEAR) return kv100;
+      // Steps shrink as their squares (Newton's method), so the next one is known without taking it.
+      const next = round === 0 ? moved : (moved * moved) / before;
+      if (moved <= NEAR || next <= NEAR / 10) return kv100;
+      before = moved;
     }
     return undefined;
   }
