@@ -28,7 +28,7 @@ export function AnswerPanel({ orderId }: { orderId: string }) {
         title="Answer"
         actions={outdated && <span className={styles.again}>{solving ? 'recomputing …' : 'out of date'}</span>}
       >
-        {slow && <Progress progress={answer.progress} currency={currency} costBasis={workbookOrder.costBasis} />}
+        {slow && <Progress progress={answer.progress} currency={currency} order={workbookOrder} />}
         <Message answer={answer} />
         {proof && (
           <div className={classNames(styles.body, answer.stale && styles.stale)}>

@@ -1,25 +1,25 @@
-import type { SolveProgress, WorkbookOrder } from '../../src';
+import type { Order, SolveProgress } from '../../src';
 import { Button } from '../parts/Button';
 import { formatMoney } from '../parts/money';
 import { formatNumber } from '../parts/numberText';
 import { useCommands } from '../state/commands';
 import styles from './AnswerPanel.module.css';
-import { percentUp } from './proofInWords';
+import { hasAim } from './proofInWords';
 
 /** How far a long search has come, and the way to end it. */
 export function Progress({
   progress,
   currency,
-  costBasis,
+  order,
 }: {
   progress: SolveProgress | undefined;
   currency: string;
-  costBasis: WorkbookOrder['costBasis'];
+  order: SearchedOrder;
 }) {
   const { cancelSolve } = useCommands();
   return (
     <div className={styles.progress}>
-      <span>{progressInWords(progress, currency, costBasis === 'cubic metre' ? 'per m³' : 'per tonne')}</span>
+      <span>{progressInWords(progress, currency, order)}</span>
       <Button disabled={!cancelSolve.enabled()} onClick={() => cancelSolve.run()}>
         {cancelSolve.label}
       </Button>
@@ -27,15 +27,29 @@ export function Progress({
   );
 }
 
-/** "Searching, 3 s: best so far €1,182.00 per tonne, no recipe below €1,180.10: at most 0.17 % to gain." */
-export function progressInWords(progress: SolveProgress | undefined, currency: string, measure: string): string {
+type SearchedOrder = Pick<Order, 'costBasis' | 'limits'>;
+
+/**
+ * "Searching, 3 s: best so far €1,182.00 per tonne; proven: none below €1,180.10 per tonne." The best cost is plain
+ * and per tonne; the bound is one on what the search makes least, so the two are not subtracted.
+ */
+export function progressInWords(
+  progress: SolveProgress | undefined,
+  currency: string,
+  { costBasis, limits }: SearchedOrder,
+): string {
   if (!progress) return 'Searching …';
   const { milliseconds, bestCost, lowerBound } = progress;
+  const perVolume = costBasis === 'cubic metre';
+  const parts: string[] = [];
+  if (bestCost !== undefined) parts.push(`best so far ${formatMoney(bestCost, currency)} per tonne`);
+  // Per m³ the search does not tell what it has found yet.
+  else if (!perVolume) parts.push('no recipe yet');
+  if (lowerBound !== undefined && Number.isFinite(lowerBound)) {
+    const withAims = hasAim(limits) ? ', aims counted in' : '';
+    const bound = `${formatMoney(lowerBound, currency)} per ${perVolume ? 'm³' : 'tonne'}${withAims}`;
+    parts.push(`proven: none below ${bound}`);
+  } else if (bestCost !== undefined) parts.push('nothing proven yet');
   const start = `Searching, ${formatNumber(milliseconds / 1000, 0)} s`;
-  if (bestCost === undefined) return `${start}: no recipe yet.`;
-  const best = `${start}: best so far ${formatMoney(bestCost, currency)} ${measure}`;
-  if (lowerBound === undefined || !Number.isFinite(lowerBound)) return `${best}; nothing proven yet.`;
-  const gap = bestCost === 0 ? undefined : (bestCost - lowerBound) / Math.abs(bestCost);
-  const left = gap === undefined ? '' : `, at most ${percentUp(gap)} to gain`;
-  return `${best}; proven: none below ${formatMoney(lowerBound, currency)}${left}.`;
+  return parts.length > 0 ? `${start}: ${parts.join('; ')}.` : `${start} …`;
 }

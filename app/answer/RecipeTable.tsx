@@ -3,10 +3,8 @@ import { CopyRecipe } from './CopyRecipe';
 import { looksOf } from './familyTone';
 import { ProportionBar, Swatch } from './ProportionBar';
 import styles from './RecipeTable.module.css';
-import { amountDigits, type Batch, type RecipeRow, type RecipeTotals } from './recipeRows';
-
-const percent = (share: number | undefined, digits: number) =>
-  share === undefined ? '–' : formatNumber(share * 100, digits);
+import type { Batch, RecipeRow, RecipeTotals } from './recipeRows';
+import { type AmountTexts, recipeTexts } from './recipeTexts';
 
 /** What goes into the kettle: shares, kilograms, litres, cost and what stays in the tank; each name above its figures. */
 export function RecipeTable({
@@ -22,7 +20,7 @@ export function RecipeTable({
   text(): string;
 }) {
   const looks = looksOf(rows.map(({ family }) => family));
-  const digits = amountDigits(batch.kilograms);
+  const texts = recipeTexts(rows, totals, batch, { percent: 2, costPercent: 1 }, '–');
   const showsLeft = rows.some(({ leftTonnes }) => leftTonnes !== undefined);
   const showsCost = rows.some(({ costShare }) => costShare !== undefined);
   const width = 4 + Number(showsCost) + Number(showsLeft);
@@ -54,11 +52,7 @@ export function RecipeTable({
                 </th>
               </tr>
               <tr>
-                <td>{percent(row.massFraction, 2)}</td>
-                <td>{percent(row.volumeFraction, 2)}</td>
-                <td>{formatNumber(row.kilograms, digits)}</td>
-                <td>{formatNumber(row.litres, digits)}</td>
-                {showsCost && <td>{percent(row.costShare, 1)}</td>}
+                <Amounts texts={texts.rows[place]} showsCost={showsCost} />
                 {showsLeft && <td>{formatNumber(row.leftTonnes, 1)}</td>}
               </tr>
             </tbody>
@@ -70,11 +64,7 @@ export function RecipeTable({
               </th>
             </tr>
             <tr>
-              <td>{percent(totals.massFraction, 2)}</td>
-              <td>{percent(totals.volumeFraction, 2)}</td>
-              <td>{formatNumber(totals.kilograms, digits)}</td>
-              <td>{formatNumber(totals.litres, digits)}</td>
-              {showsCost && <td>{percent(totals.costShare, 1)}</td>}
+              <Amounts texts={texts.total} showsCost={showsCost} />
               {showsLeft && <td />}
             </tr>
           </tfoot>
@@ -87,6 +77,18 @@ export function RecipeTable({
         </span>
         <CopyRecipe text={text} />
       </p>
+    </>
+  );
+}
+
+function Amounts({ texts, showsCost }: { texts: AmountTexts | undefined; showsCost: boolean }) {
+  return (
+    <>
+      <td>{texts?.massPercent}</td>
+      <td>{texts?.volumePercent}</td>
+      <td>{texts?.kilograms}</td>
+      <td>{texts?.litres}</td>
+      {showsCost && <td>{texts?.costPercent}</td>}
     </>
   );
 }

@@ -71,19 +71,24 @@ export function proofInWords(
       tone: 'warn',
     };
   }
-  const hasAim = order.limits.some(({ aim, aimWeight }) => aim !== undefined && aimWeight !== 0);
+  const aims = hasAim(order.limits);
   const measure = order.costBasis === 'cubic metre' ? ' per m³' : '';
   const of = whom && ` of ${whom}`;
   if (proof.kind === 'least cost') {
-    const best = hasAim ? `Best in cost${measure} and aims together` : `Cheapest${measure}`;
+    const best = aims ? `Best in cost${measure} and aims together` : `Cheapest${measure}`;
     const gap = percentUp(proof.gap);
     return {
       text: `${best}${of} under these figures and this blending rule, proven to ${gap}.${unread}`,
       tone: 'good',
     };
   }
-  const best = hasAim ? `the best in cost${measure} and aims together` : `the cheapest${measure}`;
+  const best = aims ? `the best in cost${measure} and aims together` : `the cheapest${measure}`;
   return { text: `At most ${percentUp(proof.gap)} above ${best}${of} (${why}).${unread}`, tone: 'warn' };
+}
+
+/** True where aims count beside the cost. */
+export function hasAim(limits: Order['limits']): boolean {
+  return limits.some(({ aim, aimWeight }) => aim !== undefined && aimWeight !== 0);
 }
 
 /** Nothing to choose from is no proof: it is said as what is missing. */

@@ -98,9 +98,3 @@ function totalsOf(rows: readonly RecipeRow[]): RecipeTotals {
     ...(costShare !== undefined && { costShare }),
   };
 }
-
-/** Decimals of kilograms and litres: what a scale of that batch can show. */
-export function amountDigits(batchKilograms: number): number {
-  if (batchKilograms >= 10_000) return 0;
-  return batchKilograms >= 500 ? 1 : 2;
-}

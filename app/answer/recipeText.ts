@@ -1,5 +1,6 @@
 import { formatNumber } from '../parts/numberText';
-import { amountDigits, type Batch, type RecipeRow, type RecipeTotals } from './recipeRows';
+import type { Batch, RecipeRow, RecipeTotals } from './recipeRows';
+import { type AmountTexts, recipeTexts } from './recipeTexts';
 
 export interface RecipeToCopy {
   title: string;
@@ -14,28 +15,19 @@ export interface RecipeToCopy {
 
 /** The recipe as a block for a spreadsheet: tabs between cells, headings with units, proof and remarks above. */
 export function recipeText({ title, proof, remarks, rows, totals, batch }: RecipeToCopy): string {
-  const digits = amountDigits(batch.kilograms);
-  const number = (value: number | undefined, decimals: number) =>
-    value === undefined ? '' : formatNumber(value, decimals);
-  const percent = (share: number | undefined, decimals: number) =>
-    share === undefined ? '' : formatNumber(share * 100, decimals);
-  const figures = (of: RecipeTotals & Pick<RecipeRow, 'leftTonnes'>) => [
-    percent(of.massFraction, 3),
-    percent(of.volumeFraction, 3),
-    number(of.kilograms, digits),
-    number(of.litres, digits),
-    percent(of.costShare, 1),
-    number(of.leftTonnes, 2),
-  ];
+  const texts = recipeTexts(rows, totals, batch, { percent: 3, costPercent: 1 }, '');
+  const cells = (of: AmountTexts | undefined) =>
+    of ? [of.massPercent, of.volumePercent, of.kilograms, of.litres, of.costPercent] : [];
+  const left = ({ leftTonnes }: RecipeRow) => (leftTonnes === undefined ? '' : formatNumber(leftTonnes, 2));
   const lines = [
     [plain(title)],
     [plain(`${proof} A prediction: passing is for the laboratory.`)],
     ...[...new Set(remarks)].map((remark) => [plain(remark)]),
     ['Stock', 'Family', '% m/m', '% v/v', `kg ${batch.words}`, `L at 15 °C ${batch.words}`, '% of cost', 'left [t]'],
-    ...rows.map((row) => [plain(row.name), row.family, ...figures(row)]),
-    ['Total', '', ...figures(totals)],
+    ...rows.map((row, place) => [plain(row.name), row.family, ...cells(texts.rows[place]), left(row)]),
+    ['Total', '', ...cells(texts.total), ''],
   ];
-  return lines.map((cells) => cells.join('\t')).join('\n');
+  return lines.map((line) => line.join('\t')).join('\n');
 }
 
 /** A text that stays one cell, and that no spreadsheet takes for a formula. */

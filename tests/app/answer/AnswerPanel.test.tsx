@@ -131,7 +131,7 @@ describe('a long search', () => {
     expect(screen.queryByRole('button', { name: 'Cancel' })).toBeNull();
     act(() => void vi.advanceTimersByTime(600));
     expect(
-      screen.getByText(/3 s: best so far €1,000.00 per tonne; proven: none below €990.00, at most 1 % to gain/),
+      screen.getByText(/3 s: best so far €1,000.00 per tonne; proven: none below €990.00 per tonne\./),
     ).toBeVisible();
     expect(screen.getByRole('button', { name: 'Cancel' })).toBeEnabled();
   });

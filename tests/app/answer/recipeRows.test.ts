@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { recipeRows } from '../../../app/answer/recipeRows';
 import { recipeText } from '../../../app/answer/recipeText';
+import { recipeTexts } from '../../../app/answer/recipeTexts';
 import { HEAVY, LIGHT, mixOf, orderOf, outcomeOf } from './answers';
 
 describe('the rows of a recipe', () => {
@@ -62,6 +63,32 @@ describe('the sums', () => {
   });
 });
 
+describe('amounts as shown', () => {
+  const shown = (heavy: number, batchTonnes: number) => {
+    const recipe = [
+      { stockId: 'heavy', massFraction: heavy },
+      { stockId: 'light', massFraction: 1 - heavy },
+    ];
+    const { rows, totals, batch } = recipeRows(orderOf({ batchTonnes }), mixOf({ recipe, properties: undefined }));
+    return recipeTexts(rows, totals, batch, { percent: 2, costPercent: 1 }, '–');
+  };
+
+  it('keep three significant figures of the smallest dose, whatever the batch', () => {
+    // By hand: 0.025 % of 10 t is 2.5 kg, and 9997.5 kg are left for the other.
+    const { rows, total } = shown(0.00025, 10);
+    expect(rows[1]).toMatchObject({ kilograms: '2.50', massPercent: '0.0250' });
+    expect(rows[0]).toMatchObject({ kilograms: '9998', massPercent: '99.98' });
+    expect(total).toMatchObject({ kilograms: '10000', massPercent: '100.00' });
+  });
+
+  it('show no more than a scale of that batch can where every share is large', () => {
+    const { rows, total } = shown(0.25, 20);
+    expect(rows.map(({ kilograms }) => kilograms)).toEqual(['15000', '5000']);
+    expect(total.kilograms).toBe('20000');
+    expect(total.litres).toBe('–');
+  });
+});
+
 describe('the recipe as a block for a spreadsheet', () => {
   const copied = (name = LIGHT.name) => {
     const order = orderOf({ batchTonnes: 8, stocks: [{ ...LIGHT, name }, HEAVY] });
@@ -83,6 +110,17 @@ describe('the recipe as a block for a spreadsheet', () => {
     expect(new Set(lines.map((line) => line.split('\t').length))).toEqual(new Set([8]));
     expect(lines[1]).toBe('Light oil\tGroup III\t75.000\t77.143\t6000.0\t7500.0\t50.0\t14.00');
     expect(lines[3]).toBe('Total\t\t100.000\t100.000\t8000.0\t9722.2\t100.0\t');
+  });
+
+  it('copies a small dose with its significant figures', () => {
+    const order = orderOf({ batchTonnes: 10 });
+    const recipe = [
+      { stockId: 'heavy', massFraction: 0.00025 },
+      { stockId: 'light', massFraction: 0.99975 },
+    ];
+    const of = recipeRows(order, mixOf({ recipe }));
+    const text = recipeText({ title: 'Gear oil', proof: 'Cheapest.', remarks: [], ...of });
+    expect(text).toMatch(/\nHeavy oil\tPAO\t0\.0250\t[\d.]+\t2\.50\t/);
   });
 
   it('gives a spreadsheet no formula and no stray cells', () => {
