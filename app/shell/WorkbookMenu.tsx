@@ -1,13 +1,15 @@
-import { type ChangeEvent, useRef } from 'react';
+import { type ChangeEvent, useRef, useState } from 'react';
 import { keysInWords } from '../parts/keysInWords';
 import { Menu, MenuItem } from '../parts/Menu';
 import { type Command, useCommands } from '../state/commands';
 import type { Imported } from '../state/workbookFile';
+import { OtherWorkbooks } from './OtherWorkbooks';
 
 /** What is done with the workbook as a whole. Nothing here is final: opening another one can be undone. */
 export function WorkbookMenu({ onImported }: { onImported(result: Imported & { fileName: string }): void }) {
   const commands = useCommands();
   const file = useRef<HTMLInputElement>(null);
+  const [others, setOthers] = useState(false);
 
   async function importChosen(event: ChangeEvent<HTMLInputElement>) {
     const input = event.currentTarget;
@@ -26,8 +28,10 @@ export function WorkbookMenu({ onImported }: { onImported(result: Imported & { f
         <CommandItem command={commands.openDemo} />
         <MenuItem onSelect={() => file.current?.click()}>Import a workbook file …</MenuItem>
         <CommandItem command={commands.exportWorkbook} />
+        <MenuItem onSelect={() => setOthers(true)}>Other workbooks and earlier states …</MenuItem>
         {commands.exportSetAside.enabled() && <CommandItem command={commands.exportSetAside} />}
       </Menu>
+      <OtherWorkbooks open={others} onClose={() => setOthers(false)} />
       <input
         ref={file}
         type="file"

@@ -8,6 +8,8 @@ export interface Environment {
   indexedDB?: IDBFactory;
   locks?: LockManager;
   localStorage?: Storage;
+  /** Of this window alone; survives a reload. */
+  sessionStorage?: Storage;
   /** Hands a text to the user as a file. */
   download(fileName: string, text: string): void;
   /** Calls back when the page is hidden or left. */
@@ -49,6 +51,7 @@ export function browserEnvironment(): Environment {
     indexedDB: attempt(() => window.indexedDB),
     locks: attempt(() => navigator.locks),
     localStorage: attempt(() => window.localStorage),
+    sessionStorage: attempt(() => window.sessionStorage),
     download: downloadText,
     onLeaving(callback) {
       window.addEventListener('pagehide', callback);

@@ -1,14 +1,14 @@
 import type { Workbook } from '../../src';
 import { demoWorkbook } from '../demo/demoWorkbook';
 import { createSaver } from '../storage/saver';
-import { loadView, saveView } from '../storage/viewStorage';
+import { loadView, loadWorkbookId, saveView, saveWorkbookId } from '../storage/viewStorage';
 import { openWorkbookStorage, type WorkbookStorage } from '../storage/workbookStorage';
 import { unguarded, webLock } from '../storage/writerLock';
 import { createWorker } from '../worker/createWorker';
 import { createSolverClient, type SolverClient } from '../worker/solverClient';
-import { setEarlierStates } from './earlierStates';
 import { environment } from './environment';
 import { setSave, setSetAside, useSave } from './saveStore';
+import { setShelf } from './shelf';
 import { startSolving } from './solving';
 import { selectOrder, tell, useView } from './viewStore';
 import { openWorkbook, useWorkbook } from './workbookStore';
@@ -39,7 +39,7 @@ async function offerSetAside(storage: WorkbookStorage): Promise<void> {
 
 /** The workbook the page was left with; the demo where there is none, or where its text is damaged. */
 async function lastWorkbook(storage: WorkbookStorage): Promise<Workbook> {
-  const loaded = await storage.loadCurrent();
+  const loaded = await storage.loadCurrent(loadWorkbookId(environment().sessionStorage));
   if (loaded.kind === 'set aside') {
     const { text, message } = loaded.setAside;
     const news = `The workbook kept in this browser could not be read. It is set aside as it was (menu: export it); the demo is open. ${message}`;
@@ -61,16 +61,20 @@ function keepOrderInSight(): void {
 
 /** Saves every change from now on. Returns the function that ends it. */
 function keepSaved(storage: WorkbookStorage): () => void {
-  const { locks, onLeaving } = environment();
+  const { locks, onLeaving, sessionStorage } = environment();
   const lock = locks ? webLock(locks) : unguarded();
   useSave.setState({ unguarded: !locks });
   const saver = createSaver({ storage, lock, report: setSave });
   const end = useWorkbook.subscribe(({ workbook }, before) => {
-    if (workbook !== before.workbook) saver.schedule(workbook);
+    if (workbook === before.workbook) return;
+    saver.schedule(workbook);
+    saveWorkbookId(sessionStorage, workbook.id);
   });
+  setShelf({ storage, settle: saver.flush });
   onLeaving(() => void saver.flush());
   const { workbook } = useWorkbook.getState();
   saver.schedule(workbook);
+  saveWorkbookId(sessionStorage, workbook.id);
   // Asked for early: a save that must wait for the lock may come too late on a page that is being left.
   void lock.hold(workbook.id).catch(() => {});
   return () => {
@@ -126,7 +130,7 @@ export async function startApp(createSolver: () => SolverClient = solveInWorkers
   const { localStorage } = environment();
   useView.setState(loadView(localStorage));
   const storage = await openStorage();
-  setEarlierStates(storage);
+  setShelf(storage && { storage, settle: async () => {} });
   const save = await openLast(storage);
   keepOrderInSight();
   const ends = [

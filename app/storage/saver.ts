@@ -64,6 +64,8 @@ export function createSaver({ storage, lock, report, delayMs = DELAY_MS }: Saver
   return {
     schedule(workbook) {
       clearTimeout(timer);
+      // The last change to the workbook that is being replaced must not get lost.
+      if (waiting && waiting.id !== workbook.id) void flush();
       if (elsewhere.has(workbook.id)) {
         waiting = undefined;
         report({ state: 'unavailable', message: OTHER_TAB });

@@ -2,6 +2,7 @@ import { storedFields, VIEW_FIELDS } from '../state/stateFields';
 import type { Theme, ViewState } from '../state/viewStore';
 
 const KEY = 'basewright.view';
+const WORKBOOK_KEY = 'basewright.workbook';
 const THEMES: readonly Theme[] = ['system', 'light', 'dark'];
 
 type StoredView = Pick<ViewState, 'orderId' | 'theme'>;
@@ -26,5 +27,22 @@ export function saveView(storage: Storage | undefined, view: ViewState): void {
     storage?.setItem(KEY, JSON.stringify(Object.fromEntries(kept)));
   } catch {
     // Storage refused or full: the workbook's own saving says so.
+  }
+}
+
+/** Id of the workbook this window showed last, also before a reload; other windows have their own. */
+export function loadWorkbookId(storage: Storage | undefined): string | undefined {
+  try {
+    return storage?.getItem(WORKBOOK_KEY) ?? undefined;
+  } catch {
+    return undefined;
+  }
+}
+
+export function saveWorkbookId(storage: Storage | undefined, id: string): void {
+  try {
+    storage?.setItem(WORKBOOK_KEY, id);
+  } catch {
+    // Storage refused or full: the workbook saved last opens instead.
   }
 }

@@ -10,8 +10,16 @@ export type Loaded =
   /** The stored text could not be read; it is kept aside, never overwritten. */
   | { kind: 'set aside'; setAside: SetAside };
 
+/** A stored workbook, as far as a list of them tells. */
+export type StoredEntry = Pick<StoredWorkbook, 'id' | 'name' | 'savedAt'>;
+
 export interface WorkbookStorage {
-  loadCurrent(): Promise<Loaded>;
+  /** The workbook with this id; where there is none, the one saved last. */
+  loadCurrent(id?: string): Promise<Loaded>;
+  /** All stored workbooks, the one saved last first. */
+  list(): Promise<StoredEntry[]>;
+  /** Undefined where there is none of this id (any more). */
+  read(id: string): Promise<Restored | undefined>;
   /** Keeps the workbook and makes it the current one; an earlier state stays among its versions. */
   save(workbook: Workbook): Promise<void>;
   /** Earlier states of a workbook, newest first. */
@@ -63,23 +71,41 @@ async function setAsideCurrent(
   const transaction = database.transaction(['setAside', 'workbooks', 'meta'], 'readwrite');
   await transaction.objectStore('setAside').add(setAside);
   await transaction.objectStore('workbooks').delete(id);
-  await transaction.objectStore('meta').delete(CURRENT);
+  const meta = transaction.objectStore('meta');
+  if ((await meta.get(CURRENT)) === id) await meta.delete(CURRENT);
   await transaction.done;
   return setAside;
 }
+
+async function findStored(database: Database, wanted: string | undefined): Promise<StoredWorkbook | undefined> {
+  const found = wanted === undefined ? undefined : await database.get('workbooks', wanted);
+  if (found) return found;
+  const id = await database.get('meta', CURRENT);
+  return id === undefined ? undefined : database.get('workbooks', id);
+}
+
+/** Newest first. */
+const byDate = (a: { savedAt: string }, b: { savedAt: string }) => (a.savedAt < b.savedAt ? 1 : -1);
 
 /** The browser's storage of workbooks. Rejects where the browser refuses it. */
 export async function openWorkbookStorage(factory: IDBFactory, now: () => string): Promise<WorkbookStorage> {
   const database = await openDatabase(factory);
   return {
-    async loadCurrent() {
-      const id = await database.get('meta', CURRENT);
-      const stored = id === undefined ? undefined : await database.get('workbooks', id);
+    async loadCurrent(id) {
+      const stored = await findStored(database, id);
       if (!stored) return { kind: 'nothing' };
       const text = String(stored.text);
       const restored: Restored = restoreWorkbook(text);
       if (restored.ok) return { kind: 'workbook', workbook: restored.workbook, notes: restored.notes };
       return { kind: 'set aside', setAside: await setAsideCurrent(database, stored.id, text, restored.message, now()) };
+    },
+    async list() {
+      const stored = await database.getAll('workbooks');
+      return stored.map(({ id, name, savedAt }) => ({ id, name, savedAt })).sort(byDate);
+    },
+    async read(id) {
+      const stored = await database.get('workbooks', id);
+      return stored && restoreWorkbook(String(stored.text));
     },
     async save(workbook) {
       const stored = { id: workbook.id, name: workbook.name, text: readableText(workbook), savedAt: now() };
@@ -97,7 +123,7 @@ export async function openWorkbookStorage(factory: IDBFactory, now: () => string
     },
     async versions(workbookId) {
       const kept = await database.getAllFromIndex('versions', 'workbookId', workbookId);
-      return kept.sort((a, b) => (a.savedAt < b.savedAt ? 1 : -1));
+      return kept.sort(byDate);
     },
     setAside: () => database.getAll('setAside'),
     close: () => database.close(),

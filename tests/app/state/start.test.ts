@@ -3,9 +3,9 @@ import { afterEach, beforeEach, describe, expect, test, vi } from 'vitest';
 import { demoWorkbook } from '../../../app/demo/demoWorkbook';
 import { answerOf } from '../../../app/state/answerStore';
 import { COMMANDS } from '../../../app/state/commands';
-import { bringBack, earlierStates } from '../../../app/state/earlierStates';
 import type { Environment } from '../../../app/state/environment';
 import { useSave } from '../../../app/state/saveStore';
+import { bringBack, earlierStates, openStored, storedWorkbooks } from '../../../app/state/shelf';
 import { NO_STORAGE, startApp, UNREAD } from '../../../app/state/start';
 import { selectOrder, setTheme, useView } from '../../../app/state/viewStore';
 import { editWorkbook, undo, useWorkbook } from '../../../app/state/workbookStore';
@@ -37,6 +37,7 @@ async function open(surroundings: Partial<Environment> = {}) {
 beforeEach(() => {
   factory = new IDBFactory();
   localStorage.clear();
+  sessionStorage.clear();
 });
 
 afterEach(() => {
@@ -119,7 +120,7 @@ test('an earlier state can be brought back, and that undone', async () => {
   await saved();
   const states = await vi.waitFor(async () => {
     const found = await earlierStates();
-    expect(found).toHaveLength(2);
+    expect(found).toHaveLength(1);
     return found;
   });
   const oldest = states.find(({ text }) => !text.includes('My plant'));
@@ -130,6 +131,46 @@ test('an earlier state can be brought back, and that undone', async () => {
   expect(workbook().name).toBe('My plant');
   expect(bringBack({ savedAt: '2026-03-01', text: '{' })).toMatch(/not JSON/);
   expect(workbook().name).toBe('My plant');
+});
+
+test('a workbook that was replaced is there again after a reload, last change and all', async () => {
+  const first = await open();
+  editWorkbook('name', (draft) => {
+    draft.name = 'My plant';
+  });
+  // At once, before the change had time to be saved.
+  COMMANDS.openDemo.run();
+  first.leave();
+  await saved();
+  await open();
+  expect(workbook().name).not.toBe('My plant');
+  const entries = await storedWorkbooks();
+  expect(entries).toHaveLength(2);
+  const mine = entries.find(({ name }) => name === 'My plant');
+  if (!mine) throw new Error('The workbook that was replaced is not kept.');
+  expect(await openStored(mine)).toBeUndefined();
+  expect(workbook().name).toBe('My plant');
+  undo();
+  expect(workbook().name).not.toBe('My plant');
+  expect(await openStored({ id: 'gone', name: 'Gone', savedAt: '' })).toBe('It is not kept here any more.');
+});
+
+test('each window reloads its own workbook, not the one another window saved last', async () => {
+  const mine = await open({ sessionStorage });
+  editWorkbook('name', (draft) => {
+    draft.name = 'Mine';
+  });
+  mine.leave();
+  await saved();
+  // Another window has a session of its own.
+  const other = await open({ newId: () => 'of-the-other' });
+  COMMANDS.newEmptyWorkbook.run();
+  other.leave();
+  await saved();
+  await open();
+  expect(workbook().name).toBe('New workbook');
+  await open({ sessionStorage });
+  expect(workbook().name).toBe('Mine');
 });
 
 test('a second tab of the same workbook says that it does not save', async () => {
