@@ -208,6 +208,25 @@ describe('the list of limits', () => {
 });
 
 describe('limits from a grade', () => {
+  it('keeps margin and aim of a limit it replaces, and says so', async () => {
+    const own = { insideBy: 0.5, aim: 46, aimWeight: 2 };
+    const user = setUp([{ property: 'kv', celsius: 40, min: 28.8, below: 35.2, ...own }]);
+    await user.selectOptions(screen.getByRole('combobox', { name: 'Set limits from a grade' }), 'ISO VG 46');
+    expect(orderOnPage().limits).toEqual([{ property: 'kv', celsius: 40, min: 41.4, max: 50.6, ...own }]);
+    expect(screen.getByText(/Kept as it was: .*inside by 0\.50 mm²\/s; .*near 46\.00 mm²\/s\./)).toBeVisible();
+  });
+
+  it('names what an earlier grade left in the order', async () => {
+    const user = setUp([{ property: 'vi', min: 95 }]);
+    const grades = () => screen.getByRole('combobox', { name: 'Set limits from a grade' });
+    await user.selectOptions(grades(), 'SAE 5W');
+    await user.selectOptions(grades(), 'ISO VG 46');
+    // SAE J300: 5W is at most 6600 mPa·s cold cranking at −30 °C; its pumping test is for the laboratory.
+    const said = screen.getByText(/^ISO VG 46 set/).textContent;
+    expect(said).toMatch(/From another grade remain: .*at -30 °C at most 6600 mPa·s.*pump.*Remove them/i);
+    expect(said).not.toMatch(/index/);
+  });
+
   it('sets the limits, says what it set, and leaves other limits alone', async () => {
     const user = setUp([{ property: 'vi', min: 95 }]);
     await user.selectOptions(screen.getByRole('combobox', { name: 'Set limits from a grade' }), 'ISO VG 46');
