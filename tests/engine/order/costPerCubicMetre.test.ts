@@ -3,6 +3,7 @@ import { type BlendOutcome, type Order, type SolveProgress, solveBlend } from '.
 import { DISCRETE, randomOrder } from '../../oracle/randomOrder';
 import { sliceSearch } from '../../oracle/sliceSearch';
 import { demo, expectConsistent } from '../optimum/consistency';
+import { orderByVolume } from '../optimum/orderByVolume';
 import { asTheRest, plainOrder, shareOf, solved } from './plainOrder';
 
 function perCubicMetre(order: Order): Order {
@@ -49,10 +50,7 @@ function jumpingClock(calm: number): () => number {
 }
 
 describe('stopped by a time limit', () => {
-  const hard = [21, 24, 33].map((seed) => {
-    const order = perCubicMetre(randomOrder(seed, { ...DISCRETE, stocks: [8, 8] }));
-    return { name: `random ${seed}`, order };
-  });
+  const byVolume = [2, 5, 8].map((seed) => ({ order: orderByVolume(seed) }));
 
   function expectHonest(outcome: BlendOutcome, least: number): void {
     const { proof, costPerCubicMetre, stopped } = outcome;
@@ -64,7 +62,7 @@ describe('stopped by a time limit', () => {
 
   test('no bound above the least cost per m³, and no proof of what is dearer', async () => {
     const kinds = new Set<string>();
-    for (const { order } of [...ORDERS, ...hard]) {
+    for (const { order } of [...ORDERS, ...byVolume]) {
       const full = await solveBlend(order);
       const least = full.costPerCubicMetre ?? Infinity;
       for (let calm = 1; calm <= 60; calm += 2) {
