@@ -1,75 +1,114 @@
 import { parseNumber } from '../parts/numberText';
+import { ON_HAND_COLUMN } from './amountColumns';
 import type { Column } from './column';
+import { HEADING_NAMES } from './headingNames';
+import { type Conversion, conversionOf, SAME } from './units';
 
-/** What people write above a column, in lower case and without units: ids of columns of the stocks table. */
-const NAMES: readonly [columnId: string, names: readonly string[]][] = [
-  ['name', ['name', 'stock', 'product', 'base oil', 'base stock', 'material', 'component', 'grade']],
-  ['supplier', ['supplier', 'vendor', 'manufacturer', 'producer', 'source']],
-  ['family', ['family', 'group', 'api group', 'type', 'kind', 'class']],
-  ['pricePerTonne', ['price', 'price per tonne', 'cost', 'cost per tonne', 'price t', 'price/t']],
-  ['density@15', ['density', 'density 15', 'density15', 'd15', 'density at 15', 'rho', 'density at 15 c']],
-  [
-    'kv@40',
-    ['kv40', 'kv 40', 'v40', 'viscosity 40', 'kv at 40', 'viscosity at 40', 'visc 40', 'kinematic viscosity at 40'],
-  ],
-  [
-    'kv@100',
-    [
-      'kv100',
-      'kv 100',
-      'v100',
-      'viscosity 100',
-      'kv at 100',
-      'viscosity at 100',
-      'visc 100',
-      'kinematic viscosity at 100',
-    ],
-  ],
-  ['vi', ['vi', 'viscosity index']],
-  ['noack', ['noack', 'noack volatility', 'volatility', 'evaporation loss', 'noack loss']],
-  ['pourPoint', ['pour', 'pour point', 'pp', 'pour neat', 'pour point neat']],
-  [
-    'pourPointDepressed',
-    ['pour with depressant', 'pour point with depressant', 'pour depr', 'pour depressed', 'depressed pour point'],
-  ],
-  ['flashPoint', ['flash', 'flash point', 'fp', 'flash coc', 'flash point coc', 'coc', 'flash point open cup']],
-  ['sulphur', ['sulphur', 'sulfur', 's']],
-  ['availableTonnes', ['on hand', 'quantity', 'stock t', 'tonnes', 'available', 'quantity on hand']],
-  ['leastDoseIfUsed', ['least if used', 'least dose', 'min dose', 'minimum dose', 'least dose if used']],
-  ['greatestDose', ['greatest', 'greatest dose', 'max dose', 'maximum dose']],
-  ['flags', ['flags', 'tags']],
-];
+/** The column that a heading means, and how to turn its unit into the column's; without one, it cannot be done. */
+export interface Heading {
+  column: Column;
+  /** As it stands in the heading; empty: the column's own. */
+  unit: string;
+  conversion: Conversion | undefined;
+}
 
-/** "KV @ 40 °C [mm²/s]" → "kv at 40": units, brackets and signs do not count. */
-function plainHeading(text: string): string {
-  return text
+/** Words in brackets that are no unit: how a figure was found, or which. */
+const REMARK =
+  /^((astm|iso|din|en|ip|d)\b.*\d.*|d ?\d+|coc|open cup|cleveland.*|neat|typical|typ\.?|measured|average)$/;
+
+/** "KV @ 40 °C [mm²/s]" → "kv 40" and, in brackets, "mm²/s". A temperature belongs to the name, wherever it stands. */
+function takeApart(heading: string): { text: string; bracketed: string } {
+  const units: string[] = [];
+  const text = heading
     .toLowerCase()
-    .replace(/[([{].*?[)\]}]/g, ' ')
-    .replace(/@/g, ' at ')
-    .replace(/°\s*c?\b|(?<=\d)\s*c\b/g, ' ')
-    .replace(
-      /mm²?\/?s|mm2\/s|\bcst\b|kg\/m³?3?|mg\/kg|\bppm\b|%( ?m\/m)?|(€|\$|£|\beur\b|\busd\b|\bgbp\b)(\/ ?t\b)?/g,
-      ' ',
-    )
+    .replace(/[º˚]/g, '°')
+    .replace(/(\d)\s*°?\s*c\b/g, '$1')
+    .replace(/(@|\bat\b)\s*(?=\d)/g, ' ')
+    .replace(/\[([^\]]*)\]|\(([^)]*)\)|\{([^}]*)\}/g, (_, ...inside: (string | undefined)[]) => {
+      const [, unit = '', celsius = ''] = /^(.*?)(?:(?:^|\s+)(\d+))?$/.exec(inside.slice(0, 3).join('').trim()) ?? [];
+      const whole = `${unit} ${celsius}`.trim();
+      if (REMARK.test(whole)) return ' ';
+      if (unit !== '') units.push(unit);
+      return ` ${celsius} `;
+    })
+    .replace(/%/g, ' %')
+    .replace(/\bper\b(?!\s*cent)/g, ' / ')
+    .replace(/^(price|cost)\s*\//, '$1 / ');
+  return { text, bracketed: units.join(' ') };
+}
+
+const plain = (text: string) =>
+  text
     .replace(/[.,:;_/-]/g, ' ')
     .replace(/\s+/g, ' ')
     .trim();
+
+function columnOfName(name: string, columns: readonly Column[]): Column | undefined {
+  const known = HEADING_NAMES.find(([, names]) => names.includes(name))?.[0];
+  return columns.find(
+    ({ id, label, kind }) =>
+      kind !== 'use' && kind !== 'share' && (id === known || plain(takeApart(label).text) === name),
+  );
 }
 
-/** The column a heading means, or undefined. */
-export function columnOfHeading(heading: string, columns: readonly Column[]): Column | undefined {
-  const plain = plainHeading(heading);
-  if (plain === '') return undefined;
-  const known = NAMES.find(([, names]) => names.includes(plain))?.[0];
-  return columns.find(
-    ({ id, label, kind }) => kind !== 'use' && kind !== 'share' && (id === known || plainHeading(label) === plain),
-  );
+/** The column a heading means, or undefined. Its unit may stand in brackets or after the name. */
+export function readHeading(heading: string, columns: readonly Column[]): Heading | undefined {
+  const { text, bracketed } = takeApart(heading);
+  const words = text.split(/[\s,;:_]+/).filter(Boolean);
+  for (let named = words.length; named > 0; named -= 1) {
+    const column = columnOfName(plain(words.slice(0, named).join(' ')), columns);
+    const after = words.slice(named).join(' ');
+    const found = column && !/^\d/.test(after) ? withUnit(column, after, bracketed, columns) : undefined;
+    if (column) return found && { ...found, unit: asTyped(found.unit, heading) };
+  }
+  return undefined;
+}
+
+/** "°f" of "Flash (°F)" → "°F". */
+function asTyped(unit: string, heading: string): string {
+  const at = heading.toLowerCase().indexOf(unit);
+  return at < 0 ? unit : heading.slice(at, at + unit.length);
+}
+
+function withUnit(column: Column, after: string, bracketed: string, columns: readonly Column[]): Heading | undefined {
+  const unit = `${after} ${bracketed}`.trim();
+  if (column.kind === 'number') {
+    const conversion = conversionOf(unit, column.unit) ?? conversionOf(`${bracketed} ${after}`, column.unit);
+    return { column, unit, conversion };
+  }
+  const inStock = unit === '' || column.id !== 'name' ? undefined : conversionOf(unit, ON_HAND_COLUMN.unit);
+  const onHand = inStock && columns.find(({ id }) => id === ON_HAND_COLUMN.id);
+  if (onHand) return { column: onHand, unit, conversion: inStock };
+  return after === '' ? { column, unit: '', conversion: SAME } : undefined;
 }
 
 /** A first row that reads like headings: no numbers in it, and at least two (or all) of its cells are known columns. */
 export function isHeadingRow(row: readonly string[], columns: readonly Column[]): boolean {
   const cells = row.filter((cell) => cell !== '');
   if (cells.length === 0 || cells.some((cell) => 'value' in parseNumber(cell))) return false;
-  const known = cells.filter((cell) => columnOfHeading(cell, columns)).length;
+  const known = cells.filter((cell) => readHeading(cell, columns)).length;
   return known >= 2 || known === cells.length;
+}
+
+/**
+ * Headings with the units of a second row, where that row holds units; undefined: it does not. Such a row has no
+ * number, no name of a stock, and at least one unit that its column can take.
+ */
+export function headingsWithUnits(
+  head: readonly string[],
+  row: readonly string[],
+  columns: readonly Column[],
+): string[] | undefined {
+  let known = 0;
+  for (const [place, text] of row.entries()) {
+    if (text === '' || /^(-|units?)$/i.test(text)) continue;
+    const column = readHeading(head[place] ?? '', columns)?.column;
+    if ('value' in parseNumber(text) || (column && column.kind !== 'number')) return undefined;
+    if (column && conversionOf(text.replace(/[[\]{}]/g, ''), column.unit)) known += 1;
+  }
+  if (known === 0) return undefined;
+  return head.map((heading, place) => {
+    const unit = row[place] ?? '';
+    return unit === '' || readHeading(heading, columns)?.unit ? heading : `${heading} [${unit.replace(/[[\]]/g, '')}]`;
+  });
 }

@@ -85,6 +85,45 @@ describe('pasting into an empty table', () => {
     expect(products()[0]?.pricePerTonne).toBe(1.182);
   });
 
+  it('turns units into those of the columns, says so, and leaves out a column whose unit it cannot turn', () => {
+    setUp();
+    pasteOn(
+      screen.getByRole('textbox', { name: 'Paste stocks here' }),
+      block([
+        ['Name', 'Price [€/kg]', 'Sulphur [% m/m]', 'On hand [kg]', 'Flash (°F)', 'KV40 (SUS)', 'KV100 (cSt)'],
+        ['A', 0.95, 0.4, 20000, 430, 155, 5.4],
+        ['B', 'ask', 'rest', '1,182', '', '', ''],
+      ]),
+    );
+    const [a, b] = products();
+    expect(a?.pricePerTonne).toBe(950);
+    expect(a?.lots).toMatchObject([{ availableTonnes: 20 }]);
+    expect(a?.figures).toEqual([
+      { property: 'sulphur', value: 4000, origin: 'typical' },
+      { property: 'flashPoint', value: 221.111111111, origin: 'typical' },
+      kv(100, 5.4),
+    ]);
+    expect(b?.unread).toEqual({ pricePerTonne: 'ask', availableTonnes: '1,182 kg' });
+    expect(b?.figures).toEqual([{ property: 'sulphur', origin: 'as the rest' }]);
+    expect(useView.getState().announcement).toContain(
+      'Converted: Price from €/kg to EUR/t, Sulphur from % m/m to mg/kg, On hand from kg to t, Flash from °F to °C. ' +
+        'Left out for its unit: “KV40 (SUS)” (needed: mm²/s).',
+    );
+  });
+
+  it('takes a second row of units with the headings', () => {
+    setUp();
+    pasteOn(
+      screen.getByRole('textbox', { name: 'Paste stocks here' }),
+      block([
+        ['Name', 'Price', 'KV40', 'KV100', 'Colour'],
+        ['', '€/kg', 'SUS', '[cSt]', 'ASTM'],
+        ['A', 0.95, 155, 5.4, 'L0.5'],
+      ]),
+    );
+    expect(products()).toMatchObject([{ name: 'A', pricePerTonne: 950, figures: [kv(100, 5.4)] }]);
+  });
+
   it('names families it does not know and takes them as “other”', () => {
     setUp();
     const rows = [
