@@ -14,6 +14,8 @@ export interface Environment {
   download(fileName: string, text: string): void;
   /** Calls back when the page is hidden or left. */
   onLeaving(callback: () => void): void;
+  /** Has the browser ask before the page is left, where this says so at that moment. */
+  askBeforeLeaving(unsaved: () => boolean): void;
   /** Calls back once something is on screen. */
   afterFirstPaint(callback: () => void): void;
 }
@@ -56,6 +58,11 @@ export function browserEnvironment(): Environment {
     onLeaving(callback) {
       window.addEventListener('pagehide', callback);
       document.addEventListener('visibilitychange', () => document.visibilityState === 'hidden' && callback());
+    },
+    askBeforeLeaving(unsaved) {
+      window.addEventListener('beforeunload', (event) => {
+        if (unsaved()) event.preventDefault();
+      });
     },
     afterFirstPaint(callback) {
       let called = false;

@@ -1,5 +1,6 @@
 import type { Workbook } from '../../src';
 import { demoWorkbook } from '../demo/demoWorkbook';
+import { NoAnswer } from '../storage/database';
 import { createSaver } from '../storage/saver';
 import { loadView, loadWorkbookId, saveView, saveWorkbookId } from '../storage/viewStorage';
 import { openWorkbookStorage, type WorkbookStorage } from '../storage/workbookStorage';
@@ -11,7 +12,8 @@ import { setSave, setSetAside, useSave } from './saveStore';
 import { setShelf } from './shelf';
 import { startSolving } from './solving';
 import { selectOrder, tell, useView } from './viewStore';
-import { openWorkbook, useWorkbook } from './workbookStore';
+import { isExported } from './workbookFile';
+import { openWorkbook, useWorkbook, type WorkbookState } from './workbookStore';
 
 export const NO_STORAGE =
   'This browser keeps nothing for this page (storage refused or not there). Export the workbook before you leave.';
@@ -20,12 +22,17 @@ export const UNREAD =
   'Your workbook could not be read from this browser; it is still there, untouched. The demo is open, and nothing is ' +
   'saved now: reload the page to try again, export the workbook to keep what you do here.';
 
-async function openStorage(): Promise<WorkbookStorage | undefined> {
+export const NO_ANSWER =
+  "The browser's storage does not answer, so a workbook kept there is not on the page, and nothing is saved now. Close " +
+  'other tabs of this page and reload it to try again; export the workbook to keep what you do here.';
+
+/** The browser's storage; where it cannot be had, what to say of that. */
+async function openStorage(): Promise<{ storage?: WorkbookStorage; trouble: string }> {
   const { indexedDB, today } = environment();
   try {
-    return indexedDB && (await openWorkbookStorage(indexedDB, today));
-  } catch {
-    return undefined;
+    return { storage: indexedDB && (await openWorkbookStorage(indexedDB, today)), trouble: NO_STORAGE };
+  } catch (error) {
+    return { trouble: error instanceof NoAnswer ? NO_ANSWER : NO_STORAGE };
   }
 }
 
@@ -59,15 +66,27 @@ function keepOrderInSight(): void {
   if (!orders.some(({ id }) => id === orderId)) selectOrder(orders[0]?.id);
 }
 
+/** True where the last step, forward or back, put one workbook in place of another. */
+function wasReplaced({ past, future }: WorkbookState): boolean {
+  return [past.at(-1), future.at(-1)].some((step) => step?.forward.some(({ path }) => path.length === 0));
+}
+
+/** True where leaving the page would lose work: a save failed, or nothing is saved and something was changed. */
+function wouldLoseWork(): boolean {
+  const { state } = useSave.getState();
+  return !isExported() && (state === 'failed' || (state === 'unavailable' && useWorkbook.getState().canUndo));
+}
+
 /** Saves every change from now on. Returns the function that ends it. */
 function keepSaved(storage: WorkbookStorage): () => void {
   const { locks, onLeaving, sessionStorage } = environment();
   const lock = locks ? webLock(locks) : unguarded();
   useSave.setState({ unguarded: !locks });
   const saver = createSaver({ storage, lock, report: setSave });
-  const end = useWorkbook.subscribe(({ workbook }, before) => {
+  const end = useWorkbook.subscribe((state, before) => {
+    const { workbook } = state;
     if (workbook === before.workbook) return;
-    saver.schedule(workbook);
+    saver.schedule(workbook, wasReplaced(state));
     saveWorkbookId(sessionStorage, workbook.id);
   });
   setShelf({ storage, settle: saver.flush });
@@ -79,7 +98,7 @@ function keepSaved(storage: WorkbookStorage): () => void {
   void lock.hold(workbook.id).catch(() => {});
   return () => {
     end();
-    void saver.flush().finally(() => {
+    void saver.stop().finally(() => {
       lock.release();
       storage.close();
     });
@@ -107,10 +126,10 @@ function keepSolved(createSolver: () => SolverClient): () => void {
 const solveInWorkers = (): SolverClient => createSolverClient({ createWorker });
 
 /** Puts the last workbook (or the demo) on the page. Returns what keeps it saved from now on. */
-async function openLast(storage: WorkbookStorage | undefined): Promise<() => () => void> {
+async function openLast({ storage, trouble }: Awaited<ReturnType<typeof openStorage>>): Promise<() => () => void> {
   if (!storage) {
     openWorkbook(freshDemo());
-    return () => sayNotSaved(NO_STORAGE);
+    return () => sayNotSaved(trouble);
   }
   try {
     openWorkbook(await lastWorkbook(storage));
@@ -129,10 +148,12 @@ async function openLast(storage: WorkbookStorage | undefined): Promise<() => () 
 export async function startApp(createSolver: () => SolverClient = solveInWorkers): Promise<() => void> {
   const { localStorage } = environment();
   useView.setState(loadView(localStorage));
-  const storage = await openStorage();
+  const opened = await openStorage();
+  const { storage } = opened;
   setShelf(storage && { storage, settle: async () => {} });
-  const save = await openLast(storage);
+  const save = await openLast(opened);
   keepOrderInSight();
+  environment().askBeforeLeaving(wouldLoseWork);
   const ends = [
     useWorkbook.subscribe(keepOrderInSight),
     useView.subscribe((view) => saveView(localStorage, view)),

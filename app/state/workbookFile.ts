@@ -1,4 +1,4 @@
-import { restoreWorkbook, serialiseWorkbook } from '../../src';
+import { restoreWorkbook, serialiseWorkbook, type Workbook } from '../../src';
 import { environment } from './environment';
 import { selectOrder, tell } from './viewStore';
 import { replaceWorkbook, useWorkbook } from './workbookStore';
@@ -15,11 +15,20 @@ function fileName(name: string): string {
   return `${plain || 'workbook'}.basewright.json`;
 }
 
+/** The workbook as it was last handed out as a file. */
+let exported: Workbook | undefined;
+
+/** True where a file holds the workbook as it is on the page. */
+export function isExported(): boolean {
+  return useWorkbook.getState().workbook === exported;
+}
+
 /** Hands the workbook to the user as a file. */
 export function exportWorkbook(): void {
   const { workbook } = useWorkbook.getState();
   const name = fileName(workbook.name);
   environment().download(name, serialiseWorkbook(workbook));
+  exported = workbook;
   tell(`Workbook exported as ${name}.`);
 }
 

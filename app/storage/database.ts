@@ -45,11 +45,35 @@ function createStores(database: IDBDatabase): void {
   database.createObjectStore('meta');
 }
 
-/** Opens the browser's database. Rejects where the browser refuses it. */
+/** Longest wait for the database: a page that waits for ever is worse than one that says it cannot save [ms]. */
+const PATIENCE_MS = 5_000;
+
+/** The database could be there, but did not open in time. */
+export class NoAnswer extends Error {}
+
+/** The request's database, if it comes in time. One that comes too late is closed again. */
+function inTime(request: IDBOpenDBRequest): Promise<Database> {
+  const opened = wrap(request) as Promise<Database>;
+  let tooLate = false;
+  const late = new Promise<never>((_resolve, reject) => {
+    const giveUp = (reason: string) => {
+      tooLate = true;
+      reject(new NoAnswer(reason));
+    };
+    const timer = setTimeout(giveUp, PATIENCE_MS, 'The database did not open in time.');
+    request.onblocked = () => giveUp('Another page holds the database.');
+    const done = () => clearTimeout(timer);
+    opened.then(done, done);
+  });
+  opened.then((database) => tooLate && database.close()).catch(() => {});
+  return Promise.race([opened, late]);
+}
+
+/** Opens the browser's database. Rejects where the browser refuses it, with NoAnswer where it does not come. */
 export async function openDatabase(factory: IDBFactory): Promise<Database> {
   const request = factory.open(NAME, VERSION);
   request.onupgradeneeded = () => createStores(request.result);
-  const database = (await wrap(request)) as Database;
+  const database = await inTime(request);
   // A newer page wants to change the stores: step aside rather than block it.
   database.addEventListener('versionchange', () => database.close());
   return database;

@@ -1,7 +1,7 @@
 import { type Restored, restoreWorkbook, serialiseWorkbook, type Workbook } from '../../src';
 import { type Database, openDatabase, type SetAside, type StoredVersion, type StoredWorkbook } from './database';
 import { isFull } from './storageTrouble';
-import { placeInHistory } from './versions';
+import { inOrderOfLoss, placeInHistory } from './versions';
 
 /** What was found in storage at the start. */
 export type Loaded =
@@ -20,8 +20,11 @@ export interface WorkbookStorage {
   list(): Promise<StoredEntry[]>;
   /** Undefined where there is none of this id (any more). */
   read(id: string): Promise<Restored | undefined>;
-  /** Keeps the workbook and makes it the current one; an earlier state stays among its versions. */
-  save(workbook: Workbook): Promise<void>;
+  /**
+   * Keeps the workbook and makes it the current one; an earlier state stays among its versions, and always does where
+   * this one is put in its place as a whole (`apart`).
+   */
+  save(workbook: Workbook, apart?: boolean): Promise<void>;
   /** Earlier states of a workbook, newest first. */
   versions(workbookId: string): Promise<StoredVersion[]>;
   setAside(): Promise<SetAside[]>;
@@ -49,10 +52,25 @@ async function putCurrent(database: Database, stored: StoredWorkbook): Promise<v
   await Promise.all([...puts, transaction.done]);
 }
 
-async function putVersion(database: Database, version: StoredVersion): Promise<void> {
+/** The same in a full browser: earlier states give way to the present one, one after another, as many as it takes. */
+async function putMakingRoom(database: Database, stored: StoredWorkbook, full: unknown): Promise<void> {
+  let reason = full;
+  for (const key of inOrderOfLoss(await database.getAll('versions'), stored.id)) {
+    await database.delete('versions', key);
+    try {
+      return await putCurrent(database, stored);
+    } catch (error) {
+      if (!isFull(error)) throw error;
+      reason = error;
+    }
+  }
+  throw reason;
+}
+
+async function putVersion(database: Database, version: StoredVersion, apart: boolean): Promise<void> {
   const transaction = database.transaction('versions', 'readwrite');
   const kept = await transaction.store.index('workbookId').getAll(version.workbookId);
-  const { remove, add } = placeInHistory(kept, version);
+  const { remove, add } = placeInHistory(kept, version, apart);
   await Promise.all([
     ...remove.map((key) => transaction.store.delete(key)),
     ...(add ? [transaction.store.add(version)] : []),
@@ -107,19 +125,17 @@ export async function openWorkbookStorage(factory: IDBFactory, now: () => string
       const stored = await database.get('workbooks', id);
       return stored && restoreWorkbook(String(stored.text));
     },
-    async save(workbook) {
+    async save(workbook, apart = false) {
       const stored = { id: workbook.id, name: workbook.name, text: readableText(workbook), savedAt: now() };
       try {
         await putCurrent(database, stored);
       } catch (error) {
         if (!isFull(error)) throw error;
-        // Earlier states give way to the present one.
-        await database.clear('versions');
-        await putCurrent(database, stored);
+        await putMakingRoom(database, stored, error);
       }
       const { text, savedAt } = stored;
       // The workbook itself is safe by now; an earlier state that finds no room is no reason to say otherwise.
-      await putVersion(database, { workbookId: stored.id, text, savedAt }).catch(() => {});
+      await putVersion(database, { workbookId: stored.id, text, savedAt }, apart).catch(() => {});
     },
     async versions(workbookId) {
       const kept = await database.getAllFromIndex('versions', 'workbookId', workbookId);

@@ -1,4 +1,4 @@
-import { IDBFactory, IDBObjectStore } from 'fake-indexeddb';
+import { IDBFactory, IDBObjectStore, IDBOpenDBRequest } from 'fake-indexeddb';
 import { afterEach, beforeEach, describe, expect, test, vi } from 'vitest';
 import { demoWorkbook } from '../../../app/demo/demoWorkbook';
 import { answerOf } from '../../../app/state/answerStore';
@@ -6,7 +6,7 @@ import { COMMANDS } from '../../../app/state/commands';
 import type { Environment } from '../../../app/state/environment';
 import { useSave } from '../../../app/state/saveStore';
 import { bringBack, earlierStates, openStored, storedWorkbooks } from '../../../app/state/shelf';
-import { NO_STORAGE, startApp, UNREAD } from '../../../app/state/start';
+import { NO_ANSWER, NO_STORAGE, startApp, UNREAD } from '../../../app/state/start';
 import { selectOrder, setTheme, useView } from '../../../app/state/viewStore';
 import { editWorkbook, undo, useWorkbook } from '../../../app/state/workbookStore';
 import { openDatabase } from '../../../app/storage/database';
@@ -155,6 +155,41 @@ test('a workbook that was replaced is there again after a reload, last change an
   expect(await openStored({ id: 'gone', name: 'Gone', savedAt: '' })).toBe('It is not kept here any more.');
 });
 
+test('a state replaced by an earlier one stays among the earlier states, however soon it was replaced', async () => {
+  let seconds = 0;
+  const today = () => {
+    seconds += 1;
+    return new Date(Date.UTC(2026, 2, 1, 8, 0, seconds)).toISOString();
+  };
+  const page = await open({ today });
+  const demo = { savedAt: today(), text: serialiseWorkbook(workbook()) };
+  page.leave();
+  await saved();
+  editWorkbook('name', (draft) => {
+    draft.name = 'Mine';
+  });
+  page.leave();
+  await saved();
+  bringBack(demo);
+  page.leave();
+  await saved();
+  await vi.waitFor(async () => {
+    const names = (await earlierStates()).map(({ text }) => JSON.parse(text).name);
+    expect(names).toEqual(['Mine']);
+  });
+  // And it does not go with what is typed next.
+  editWorkbook('name', (draft) => {
+    draft.name = 'Typed next';
+  });
+  page.leave();
+  await saved();
+  await vi.waitFor(async () => {
+    const names = (await earlierStates()).map(({ text }) => JSON.parse(text).name);
+    expect(names).toContain('Mine');
+    expect(names).not.toContain('Typed next');
+  });
+});
+
 test('each window reloads its own workbook, not the one another window saved last', async () => {
   const mine = await open({ sessionStorage });
   editWorkbook('name', (draft) => {
@@ -238,6 +273,34 @@ describe('trouble with storage', () => {
     expect(useSave.getState().state).toBe('unavailable');
     await open();
     expect(workbook().name).toBe('My plant');
+  });
+
+  test('a database that does not open in time leaves the page usable, and says that nothing is saved', async () => {
+    vi.useFakeTimers();
+    // As behind another page that will not let go: neither success nor error.
+    const silent = { open: () => new IDBOpenDBRequest() } as unknown as IDBFactory;
+    const opening = open({ indexedDB: silent });
+    await vi.advanceTimersByTimeAsync(5_000);
+    await opening;
+    vi.useRealTimers();
+    expect(workbook().invented).toBe(true);
+    expect(useSave.getState()).toMatchObject({ state: 'unavailable', message: NO_ANSWER });
+  });
+
+  test('leaving is asked about where it would lose work, and only there', async () => {
+    const page = await open({ indexedDB: undefined });
+    expect(page.asksBeforeLeaving()).toBe(false);
+    editWorkbook('name', (draft) => {
+      draft.name = 'Typed';
+    });
+    expect(page.asksBeforeLeaving()).toBe(true);
+    COMMANDS.exportWorkbook.run();
+    expect(page.asksBeforeLeaving()).toBe(false);
+    useSave.setState({ state: 'failed' });
+    COMMANDS.newOrder.run();
+    expect(page.asksBeforeLeaving()).toBe(true);
+    useSave.setState({ state: 'saved' });
+    expect(page.asksBeforeLeaving()).toBe(false);
   });
 
   test('what was set aside earlier may be unreadable too: the workbook opens all the same', async () => {

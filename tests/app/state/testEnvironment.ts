@@ -9,6 +9,8 @@ export interface TestEnvironment extends Environment {
   downloads: { fileName: string; text: string }[];
   /** Leaves the page. */
   leave(): void;
+  /** True where the browser would ask before the page is left. */
+  asksBeforeLeaving(): boolean;
 }
 
 /** Surroundings without a browser: ids count up, downloads are kept, and the first paint is at once. */
@@ -16,6 +18,7 @@ export function testEnvironment(surroundings: Partial<Environment> = {}): TestEn
   let ids = 0;
   const downloads: TestEnvironment['downloads'] = [];
   const leaving: (() => void)[] = [];
+  let unsaved = () => false;
   const made: TestEnvironment = {
     newId: () => {
       ids += 1;
@@ -25,6 +28,10 @@ export function testEnvironment(surroundings: Partial<Environment> = {}): TestEn
     today: () => '2026-03-01T08:00:00.000Z',
     download: (fileName, text) => void downloads.push({ fileName, text }),
     onLeaving: (callback) => void leaving.push(callback),
+    askBeforeLeaving: (ask) => {
+      unsaved = ask;
+    },
+    asksBeforeLeaving: () => unsaved(),
     afterFirstPaint: (callback) => callback(),
     ...surroundings,
     downloads,

@@ -123,6 +123,28 @@ describe('trouble', () => {
     expect(reports.at(-1)).toBe('saved');
   });
 
+  test('of one save is tried again after 5 s, by itself, until it is in or the page ends', async () => {
+    let full = true;
+    let tries = 0;
+    const { saver, saved, reports } = setUp(async () => {
+      tries += 1;
+      if (full) throw new DOMException('no room', 'QuotaExceededError');
+    });
+    saver.schedule(named('a'));
+    await vi.advanceTimersByTimeAsync(400 + 5_000);
+    expect([tries, saved]).toEqual([2, []]);
+    expect(reports.at(-1)).toMatch(/^failed/);
+    full = false;
+    await vi.advanceTimersByTimeAsync(5_000);
+    expect(saved).toEqual(['a']);
+    expect(reports.at(-1)).toBe('saved');
+    full = true;
+    saver.schedule(named('b'));
+    await saver.stop();
+    await vi.advanceTimersByTimeAsync(60_000);
+    expect(tries).toBe(4);
+  });
+
   test('a workbook open in another tab is not written over, and that is said', async () => {
     const locks = fakeLocks();
     await webLock(locks).hold('w');

@@ -97,6 +97,7 @@ describe('a full browser', () => {
 
   test('makes room: earlier states give way to the present one', async () => {
     const storage = await open();
+    await storage.save(emptyWorkbook('b', 'other'));
     await storage.save(emptyWorkbook('a', 'one'));
     await storage.save(emptyWorkbook('a', 'two'));
     vi.spyOn(IDBObjectStore.prototype, 'put').mockImplementationOnce(() => {
@@ -104,7 +105,28 @@ describe('a full browser', () => {
     });
     await storage.save(emptyWorkbook('a', 'three'));
     expect(await storage.loadCurrent()).toMatchObject({ workbook: { name: 'three' } });
-    expect(await storage.versions('a')).toHaveLength(1);
+    // Its own oldest went, and as it sufficed, no more than that: no other workbook pays for this one.
+    const names = (await storage.versions('a')).map(({ text }) => JSON.parse(text).name);
+    expect(names).toEqual(['three', 'two']);
+    expect(await storage.versions('b')).toHaveLength(1);
+  });
+
+  test('takes from other workbooks only what its own do not give', async () => {
+    const storage = await open();
+    await storage.save(emptyWorkbook('b', 'other'));
+    await storage.save(emptyWorkbook('b', 'other, later'));
+    await storage.save(emptyWorkbook('a', 'one'));
+    let left = 2;
+    const { put } = IDBObjectStore.prototype;
+    vi.spyOn(IDBObjectStore.prototype, 'put').mockImplementation(function (this: IDBObjectStore, ...input) {
+      left -= 1;
+      if (left >= 0) throw full();
+      return put.apply(this, input);
+    });
+    await storage.save(emptyWorkbook('a', 'two'));
+    const names = (await storage.versions('b')).map(({ text }) => JSON.parse(text).name);
+    expect(names).toEqual(['other, later']);
+    expect(await storage.loadCurrent()).toMatchObject({ workbook: { name: 'two' } });
   });
 
   test('that stays full fails the save, and what was kept before stays', async () => {
