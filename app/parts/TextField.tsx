@@ -50,6 +50,8 @@ export function TextField({
       commit();
     }
     if (event.key === 'Escape' && draft !== undefined) {
+      // In a dialog the first Escape is for the draft, not for closing.
+      event.preventDefault();
       event.stopPropagation();
       setDraft(undefined);
       setProblem(undefined);

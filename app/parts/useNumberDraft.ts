@@ -117,6 +117,8 @@ export function useNumberDraft(options: NumberDraftOptions) {
   function onKeyDown(event: KeyboardEvent<HTMLInputElement>) {
     if (event.key === 'Enter') commit();
     else if (event.key === 'Escape' && (draft !== undefined || stepped.current)) {
+      // In a dialog the first Escape is for the draft, not for closing.
+      event.preventDefault();
       event.stopPropagation();
       revert();
     } else if (event.key === 'ArrowUp' || event.key === 'ArrowDown') {

@@ -43,7 +43,8 @@ export const StockRow = memo(function StockRow(props: StockRowProps) {
               key={column.id}
               // biome-ignore lint/a11y/noNoninteractiveElementToInteractiveRole: a cell of the grid
               role="gridcell"
-              tabIndex={tabbable === place ? 0 : -1}
+              // The box itself takes the focus, so that it is heard whether it is ticked.
+              tabIndex={column.kind === 'use' ? undefined : tabbable === place ? 0 : -1}
               data-chosen={isChosen || undefined}
               className={classNames(styles.cell, styles[column.kind])}
               onClick={() => grid.choose(at, product, column)}
@@ -53,7 +54,7 @@ export const StockRow = memo(function StockRow(props: StockRowProps) {
               ) : (
                 <input
                   type="checkbox"
-                  tabIndex={-1}
+                  tabIndex={tabbable === place ? 0 : -1}
                   aria-label={`Use ${product.name} in this order`}
                   checked={!excluded}
                   onChange={(event) => onUse(product, event.target.checked)}

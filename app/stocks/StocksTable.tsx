@@ -122,7 +122,14 @@ export function StocksTable() {
       {products.length === 0 ? (
         <EmptyStocks onPaste={takePaste} onAdd={() => edit({ row: addStock(), column: nameAt })} />
       ) : (
-        <section className={styles.scroll} aria-label="Table of stocks" onPaste={onPaste} onCopy={onCopy}>
+        <section
+          className={styles.scroll}
+          aria-label="Table of stocks"
+          // biome-ignore lint/a11y/noNoninteractiveTabindex: it scrolls sideways, which keys must be able to do
+          tabIndex={0}
+          onPaste={onPaste}
+          onCopy={onCopy}
+        >
           <StocksGrid
             tableRef={table}
             products={products}

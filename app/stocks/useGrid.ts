@@ -60,7 +60,7 @@ export function useGrid(
     if (focusWanted === 0) return;
     const cell = table.current?.querySelector<HTMLElement>('[data-chosen]');
     // The field of a cell being typed in takes the focus by itself.
-    if (cell && !cell.contains(document.activeElement)) cell.focus();
+    if (cell && !cell.contains(document.activeElement)) (cell.querySelector('input') ?? cell).focus();
   }, [focusWanted, table]);
 
   const actions = useMemo<GridActions>(() => {
@@ -102,6 +102,8 @@ export function useGrid(
     const action = gridAction(event, chosen, size.current);
     if (!action) return;
     const onBox = column.kind === 'use';
+    // The box answers the space bar by itself.
+    if (action.kind === 'toggle' && event.target instanceof HTMLInputElement) return;
     if (onBox && (action.kind === 'toggle' || (action.kind === 'edit' && action.text === undefined))) {
       event.preventDefault();
       toggle(product);

@@ -1,4 +1,4 @@
-import { render, screen } from '@testing-library/react';
+import { fireEvent, render, screen } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { useState } from 'react';
 import { describe, expect, it, vi } from 'vitest';
@@ -108,6 +108,14 @@ describe('NumberField', () => {
     expect(field).toHaveValue('44.60');
     await user.tab();
     expect(onCommit).not.toHaveBeenCalled();
+  });
+
+  it('keeps Escape from a dialog around it as long as there is a draft to give up', async () => {
+    const { field, user } = setUp({ start: 44.6 });
+    await user.type(field, '5');
+    // HTML standard, close requests: a dialog closes on Escape unless the key press was prevented.
+    expect(fireEvent.keyDown(field, { key: 'Escape' })).toBe(false);
+    expect(fireEvent.keyDown(field, { key: 'Escape' })).toBe(true);
   });
 
   it('goes back on Escape to the number it had on entering, though drafts were live', async () => {

@@ -1,4 +1,4 @@
-import { render, screen } from '@testing-library/react';
+import { fireEvent, render, screen } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { describe, expect, it, vi } from 'vitest';
 import { TextField, type TextFieldProps } from '../../../app/parts/TextField';
@@ -23,6 +23,15 @@ describe('TextField', () => {
     await user.tab();
     expect(field).toHaveValue('VG 46');
     expect(onCommit).not.toHaveBeenCalled();
+  });
+
+  it('keeps Escape from a dialog around it as long as there is a draft to give up', async () => {
+    const { field, user } = setUp();
+    await user.type(field, 'x');
+    // HTML standard, close requests: a dialog closes on Escape unless the key press was prevented.
+    expect(fireEvent.keyDown(field, { key: 'Escape' })).toBe(false);
+    expect(field).toHaveValue('VG 46');
+    expect(fireEvent.keyDown(field, { key: 'Escape' })).toBe(true);
   });
 
   it('keeps a text that is not taken, and says why', async () => {

@@ -49,9 +49,28 @@ describe('the table of stocks', () => {
     const user = setUp();
     await user.click(screen.getByRole('checkbox', { name: 'Use Stock b in this order' }));
     expect(workbook().orders[0]?.excludedProductIds).toEqual(['b']);
-    act(() => cellAt(1, 'Use').focus());
     await user.keyboard(' ');
     expect(workbook().orders[0]?.excludedProductIds).toEqual([]);
+  });
+
+  it('gives the focus to the box of a “Use” cell, so that its state is heard, and takes space and Enter once', async () => {
+    const user = setUp();
+    act(() => cellAt(0, 'Stock').focus());
+    await user.keyboard('{ArrowDown}{ArrowLeft}');
+    const box = screen.getByRole('checkbox', { name: 'Use Stock b in this order' });
+    expect(box).toHaveFocus();
+    expect(box).toBeChecked();
+    await user.keyboard(' ');
+    expect(box).not.toBeChecked();
+    await user.keyboard('{Enter}');
+    expect(box).toBeChecked();
+    await user.keyboard('{ArrowUp}');
+    expect(screen.getByRole('checkbox', { name: 'Use Stock a in this order' })).toHaveFocus();
+  });
+
+  it('can be scrolled by keys', () => {
+    setUp();
+    expect(screen.getByRole('region', { name: 'Table of stocks' })).toHaveAttribute('tabindex', '0');
   });
 
   it('makes a lot of a quantity typed, changes the only lot, and sums several', async () => {
