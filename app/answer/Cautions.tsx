@@ -2,24 +2,36 @@ import type { Caution } from '../../src';
 import { Notice } from '../parts/Notice';
 import styles from './AnswerPanel.module.css';
 
-/** What the reader of the recipe must know; a trial blend that is called for stands out. */
+/** A call for a trial blend: it stands out, before the recipe. */
+export function TrialCalls({ cautions }: { cautions: readonly Caution[] }) {
+  return trialCalls(cautions).map(({ call, reasons }) => (
+    <Notice key={call} tone="warn" className={styles.trial}>
+      <b>{call}</b> {reasons.join(' ')}
+    </Notice>
+  ));
+}
+
+/** What else to mind of the predicted properties. */
 export function Cautions({ cautions }: { cautions: readonly Caution[] }) {
-  const trial = cautions.filter(({ kind }) => kind === 'trial blend');
   const others = cautions.filter(({ kind }) => kind !== 'trial blend');
+  if (others.length === 0) return null;
   return (
-    <>
-      {trial.map(({ message }) => (
-        <Notice key={message} tone="warn">
-          <b>{message}</b>
-        </Notice>
+    <ul className={styles.cautions}>
+      {[...new Set(others.map(({ message }) => message))].map((message) => (
+        <li key={message}>{message}</li>
       ))}
-      {others.length > 0 && (
-        <ul className={styles.cautions}>
-          {others.map(({ kind, message }) => (
-            <li key={`${kind} ${message}`}>{message}</li>
-          ))}
-        </ul>
-      )}
-    </>
+    </ul>
   );
+}
+
+/** "Make a trial blend first:" said once, with all its reasons after it. */
+function trialCalls(cautions: readonly Caution[]): { call: string; reasons: string[] }[] {
+  const calls = new Map<string, string[]>();
+  for (const { kind, message } of cautions) {
+    if (kind !== 'trial blend') continue;
+    const [, call = message, reason = ''] = /^(.*?[:.])\s+(.*)$/s.exec(message) ?? [];
+    const reasons = calls.get(call) ?? [];
+    calls.set(call, reasons.includes(reason) ? reasons : [...reasons, reason]);
+  }
+  return [...calls].map(([call, reasons]) => ({ call, reasons }));
 }

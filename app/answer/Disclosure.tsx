@@ -1,12 +1,15 @@
 import type { ReactNode } from 'react';
+import { ScrollRegion } from '../parts/ScrollRegion';
 import styles from './AnswerPanel.module.css';
 
 /** Something to be unfolded: the browser's own, known to every keyboard and screen reader. */
-export function Disclosure({ title, open, children }: { title: ReactNode; open?: boolean; children: ReactNode }) {
+export function Disclosure({ title, open, children }: { title: string; open?: boolean; children: ReactNode }) {
   return (
     <details className={styles.disclosure} open={open}>
       <summary>{title}</summary>
-      <div className={styles.folded}>{children}</div>
+      <ScrollRegion className={styles.folded} name={title}>
+        {children}
+      </ScrollRegion>
     </details>
   );
 }

@@ -68,8 +68,8 @@ function Row({ row, others }: { row: PropertyRow; others: string | undefined }) 
       </td>
       <td>
         {row.unknown && <span className={styles.unknown}>{row.unknown}</span>}
-        {row.limits.map(({ range, room, tone }) => (
-          <span key={range} className={styles.limit}>
+        {row.limits.map(({ place, range, room, tone }) => (
+          <span key={place} className={styles.limit}>
             {range}
             <span className={classNames(styles.room, styles[tone])}>{room}</span>
           </span>

@@ -4,7 +4,7 @@ import { LazyViscosityChart } from '../chart/LazyViscosityChart';
 import { Section } from '../parts/Section';
 import styles from './AnswerPanel.module.css';
 import { apiGroupsInWords } from './apiGroups';
-import { Cautions } from './Cautions';
+import { Cautions, TrialCalls } from './Cautions';
 import { Cost } from './Cost';
 import { gradesInWords } from './gradesInWords';
 import { PropertyTable } from './PropertyTable';
@@ -42,7 +42,7 @@ export const Recipe = memo(function Recipe({
   return (
     <>
       <Cost outcome={outcome} order={order} batch={batch} currency={currency} />
-      <Cautions cautions={cautions} />
+      <TrialCalls cautions={cautions} />
       <RecipeTable
         rows={rows}
         totals={totals}
@@ -54,6 +54,7 @@ export const Recipe = memo(function Recipe({
       </Section>
       <Section title="Predicted properties" level={3} className={styles.part}>
         <p className={styles.grades}>{gradesInWords(outcome)}</p>
+        <Cautions cautions={cautions} />
         <PropertyTable order={order} outcome={outcome} laboratoryOnly={laboratoryOnly} />
         <SpreadTable spread={outcome.properties?.spread ?? []} ownRule={order.viscosityRule ?? 'wright'} />
         <p className={styles.soft}>

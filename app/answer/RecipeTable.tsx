@@ -1,4 +1,5 @@
 import { formatNumber } from '../parts/numberText';
+import { ScrollRegion } from '../parts/ScrollRegion';
 import { CopyRecipe } from './CopyRecipe';
 import { looksOf } from './familyTone';
 import { ProportionBar, Swatch } from './ProportionBar';
@@ -27,7 +28,7 @@ export function RecipeTable({
   return (
     <>
       <ProportionBar rows={rows} />
-      <section className={styles.scroll} aria-label="Recipe">
+      <ScrollRegion className={styles.scroll} name="Recipe">
         <table className={styles.table}>
           <caption className="visually-hidden">Recipe, kilograms and litres {batch.words}</caption>
           <thead>
@@ -58,18 +59,13 @@ export function RecipeTable({
             </tbody>
           ))}
           <tfoot>
-            <tr className={styles.nameRow}>
-              <th scope="rowgroup" colSpan={width}>
-                Total
-              </th>
-            </tr>
             <tr>
-              <Amounts texts={texts.total} showsCost={showsCost} />
+              <Amounts texts={texts.total} showsCost={showsCost} isTotal />
               {showsLeft && <td />}
             </tr>
           </tfoot>
         </table>
-      </section>
+      </ScrollRegion>
       <p className={styles.foot}>
         <span>
           Kilograms and litres {batch.words}
@@ -81,10 +77,26 @@ export function RecipeTable({
   );
 }
 
-function Amounts({ texts, showsCost }: { texts: AmountTexts | undefined; showsCost: boolean }) {
+function Amounts({
+  texts,
+  showsCost,
+  isTotal,
+}: {
+  texts: AmountTexts | undefined;
+  showsCost: boolean;
+  isTotal?: boolean;
+}) {
   return (
     <>
-      <td>{texts?.massPercent}</td>
+      <td>
+        {isTotal && (
+          <span className={styles.sum}>
+            <span aria-hidden="true">Σ</span>
+            <span className="visually-hidden">Total: </span>
+          </span>
+        )}
+        {texts?.massPercent}
+      </td>
       <td>{texts?.volumePercent}</td>
       <td>{texts?.kilograms}</td>
       <td>{texts?.litres}</td>

@@ -25,7 +25,7 @@ export interface PropertyRow {
   estimated?: string;
   /** Stocks that took the value of the rest of the mix. */
   asTheRest: string[];
-  limits: { range: string; room: string; tone: 'plain' | 'on' | 'bad' }[];
+  limits: { place: number; range: string; room: string; tone: 'plain' | 'on' | 'bad' }[];
 }
 
 function definitionOf({ property }: Pick<PredictedProperty, 'property'>, order: Order): PropertyDefinition | undefined {
@@ -50,7 +50,9 @@ function limitRow(check: LimitCheck, order: Order, definition: PropertyDefinitio
   if (!limit) return [];
   const tone = !check.passes ? ('bad' as const) : check.onLimit ? ('on' as const) : ('plain' as const);
   const inside = limit.insideBy ? `, inside by ${withUnit(limit.insideBy, definition)}` : '';
-  return [{ range: rangeInWords(limit, definition) + inside, room: roomInWords(check, definition), tone }];
+  return [
+    { place: check.limit, range: rangeInWords(limit, definition) + inside, room: roomInWords(check, definition), tone },
+  ];
 }
 
 /** The predicted properties of the recipe; none where there is no recipe. */

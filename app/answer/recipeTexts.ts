@@ -1,3 +1,4 @@
+import { formatNumber } from '../parts/numberText';
 import { amountDigits, columnTexts } from './amountDigits';
 import type { Batch, RecipeRow, RecipeTotals } from './recipeRows';
 
@@ -27,12 +28,18 @@ export function recipeTexts(
   const column = (read: (of: RecipeRow | RecipeTotals) => number | undefined, least: number) =>
     columnTexts(rows.map(read), read(totals), least, unknown);
   const percent = (share: number | undefined) => (share === undefined ? undefined : share * 100);
+  const plain = (share: number | undefined, decimals: number) =>
+    share === undefined ? unknown : formatNumber(share * 100, decimals);
   const columns = {
     massPercent: column((of) => percent(of.massFraction), digits.percent),
     volumePercent: column((of) => percent(of.volumeFraction), digits.percent),
     kilograms: column((of) => of.kilograms, amountDigits(batch.kilograms)),
     litres: column((of) => of.litres, amountDigits(batch.kilograms)),
-    costPercent: column((of) => percent(of.costShare), digits.costPercent),
+    // Money is not weighed: shares of the cost have the same decimals throughout.
+    costPercent: {
+      parts: rows.map((row) => plain(row.costShare, digits.costPercent)),
+      total: plain(totals.costShare, digits.costPercent),
+    },
   };
   const line = (pick: (texts: { parts: string[]; total: string }) => string | undefined): AmountTexts => ({
     massPercent: pick(columns.massPercent) ?? unknown,

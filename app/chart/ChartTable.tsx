@@ -1,4 +1,5 @@
 import { formatNumber } from '../parts/numberText';
+import { ScrollRegion } from '../parts/ScrollRegion';
 import { figureText } from '../stocks/figureText';
 import styles from './ViscosityChart.module.css';
 import { isExtrapolated, kvOnLine, type ViscosityLine } from './viscosityLines';
@@ -18,8 +19,7 @@ export function ChartTable({
   return (
     <details className={styles.data}>
       <summary>The chart as a table</summary>
-      {/* biome-ignore lint/a11y/noNoninteractiveTabindex: what scrolls sideways must be reached by key */}
-      <section className={styles.scroll} aria-label="The chart as a table" tabIndex={0}>
+      <ScrollRegion className={styles.scroll} name="The chart as a table">
         <table>
           <caption className="visually-hidden">Kinematic viscosity in mm²/s</caption>
           <thead>
@@ -45,15 +45,20 @@ export function ChartTable({
             ))}
           </tbody>
         </table>
-      </section>
+      </ScrollRegion>
       <p className={styles.note}>In italics: extrapolated.</p>
-      {windows.map((window) => (
-        <p key={`${window.kind} ${window.name}`} className={styles.note}>
-          {window.name}: {windowText(window)}
+      {windowTexts(windows).map((text) => (
+        <p key={text} className={styles.note}>
+          {text}
         </p>
       ))}
     </details>
   );
+}
+
+/** Each window once: two limits may say the same. */
+function windowTexts(windows: readonly ViscosityWindow[]): string[] {
+  return [...new Set(windows.map((window) => `${window.name}: ${windowText(window)}`))];
 }
 
 function windowText({ min, max }: ViscosityWindow): string {

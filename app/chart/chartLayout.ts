@@ -1,5 +1,5 @@
 /** Where things stand in the chart [px]; shared by what lays it out and what draws it. */
-export const CHART_HEIGHT = 320;
+export const CHART_HEIGHT = 264;
 /** Temperatures drawn [°C], unless a measured point or a limit lies outside. */
 export const COLDEST = -30;
 export const WARMEST = 150;

@@ -42,9 +42,19 @@ describe('the answer with a recipe', () => {
   });
 
   it('puts the call for a trial blend where nobody misses it', () => {
-    const message = 'Make a trial blend first: the blending rules disagree.';
-    show(answered(mixOf({ cautions: [{ kind: 'trial blend', message }] })));
-    expect(screen.getByText(message).tagName).toBe('B');
+    const trial = (why: string) => ({ kind: 'trial blend' as const, message: `Make a trial blend first: ${why}` });
+    show(answered(mixOf({ cautions: [trial('by one rule KV40 is out.'), trial('by another KV100 is out.')] })));
+    const call = screen.getByText('Make a trial blend first:');
+    expect(call.tagName).toBe('B');
+    expect(call.parentElement).toHaveTextContent(/by one rule KV40 is out\. by another KV100 is out\./);
+  });
+
+  it('shows two limits that say the same, each with its room', () => {
+    const limit = { property: 'kv', celsius: 40, max: 40 };
+    const check = { ...limit, value: 38.12, room: 1.88, passes: true, onLimit: false };
+    const checks = [0, 1].map((place) => ({ ...check, limit: place }));
+    show(answered(mixOf({ checks }), orderOf({ limits: [limit, limit] })));
+    expect(screen.getAllByText('room 1.88 mm²/s')).toHaveLength(2);
   });
 
   it('lists the stocks left out with their reasons', async () => {

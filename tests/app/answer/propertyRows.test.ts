@@ -15,7 +15,7 @@ describe('the predicted properties', () => {
     const rows = propertyRows(orderOf({ limits: [KV40] }), mixOf({ checks: [check] }));
     const kv40 = rows.find(({ fullName }) => fullName === 'Kinematic viscosity at 40 °C');
     expect(kv40).toMatchObject({ name: 'KV40', value: '38.12', unit: 'mm²/s' });
-    expect(kv40?.limits).toEqual([{ range: '30.00 to 40.00 mm²/s', room: 'room 1.88 mm²/s', tone: 'plain' }]);
+    expect(kv40?.limits).toEqual([{ place: 0, range: '30.00 to 40.00 mm²/s', room: 'room 1.88 mm²/s', tone: 'plain' }]);
   });
 
   it('say how far inside its limit the mix has to stay, and who took the value of the rest', () => {

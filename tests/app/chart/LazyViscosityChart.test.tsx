@@ -44,4 +44,11 @@ describe('the viscosity-temperature chart', () => {
     expect(screen.getByText(/viscosities at two temperatures are needed/)).toBeInTheDocument();
     expect(screen.queryByRole('img')).not.toBeInTheDocument();
   });
+
+  it('names a limit that stands in the order twice once', () => {
+    const limits = [...KV40_LIMIT.limits, ...KV40_LIMIT.limits];
+    const { order, outcome } = answered([THIN, THICK], [0.5, 0.5], { limits });
+    render(<LazyViscosityChart order={order} outcome={outcome} />);
+    expect(screen.getAllByText('Limit at 40 °C: 60.00 to 90.00 mm²/s')).toHaveLength(1);
+  });
 });
