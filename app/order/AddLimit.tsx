@@ -22,7 +22,7 @@ const ANOTHER_TEMPERATURE = 20;
 const OF_ONES_OWN = 'a property of one’s own';
 
 /** Adds an empty limit on a property; its ends are then typed. */
-export function AddLimit({ order, onAdded }: { order: WorkbookOrder; onAdded(limit: Limit): void }) {
+export function AddLimit({ order, onAdded }: { order: WorkbookOrder; onAdded(): void }) {
   const ownProperties = useWorkbook(({ workbook }) => workbook.ownProperties);
   const choices = limitChoices(ownProperties).filter(
     ({ limit }) => !order.limits.some((existing) => isSameProperty(existing, limit)),
@@ -45,7 +45,7 @@ export function AddLimit({ order, onAdded }: { order: WorkbookOrder; onAdded(lim
     editOrder(order.id, `add a limit on ${shortLimitName(limit, ownProperties)}`, ({ limits }) => {
       limits.push({ ...limit });
     });
-    onAdded(limit);
+    onAdded();
   }
 
   function addOwn(property: Omit<OwnProperty, 'id'>) {
@@ -56,7 +56,7 @@ export function AddLimit({ order, onAdded }: { order: WorkbookOrder; onAdded(lim
       workbook.orders.find((other) => other.id === order.id)?.limits.push({ ...limit });
     });
     setAsking(false);
-    onAdded(limit);
+    onAdded();
   }
 
   return (

@@ -207,6 +207,27 @@ describe('the list of limits', () => {
   });
 });
 
+describe('a limit that is edited', () => {
+  it('keeps its details open and the focus where it was as its temperature changes', async () => {
+    const user = setUp([KV40, { property: 'vi', min: 95 }]);
+    await user.click(screen.getByRole('button', { name: 'Kinematic viscosity at 40 °C' }));
+    const celsius = field(/40 °C, At/);
+    await user.clear(celsius);
+    await user.type(celsius, '50{Enter}');
+    expect(orderOnPage().limits[0]?.celsius).toBe(50);
+    expect(field(/50 °C, At/)).toBe(celsius);
+    expect(celsius).toHaveFocus();
+  });
+
+  it('stays itself when one before it is removed', async () => {
+    const user = setUp([{ property: 'vi', min: 95 }, KV40]);
+    await user.click(screen.getByRole('button', { name: 'Kinematic viscosity at 40 °C' }));
+    const celsius = field(/40 °C, At/);
+    await user.click(screen.getByRole('button', { name: 'Remove the limit on Viscosity index' }));
+    expect(field(/40 °C, At/)).toBe(celsius);
+  });
+});
+
 describe('limits from a grade', () => {
   it('keeps margin and aim of a limit it replaces, and says so', async () => {
     const own = { insideBy: 0.5, aim: 46, aimWeight: 2 };
