@@ -1,4 +1,5 @@
 import type { Product } from '../../src';
+import { fromPercent, toPercent } from '../order/percent';
 import { type DecimalSign, formatForEditing, parseNumber, unreadInWords } from '../parts/numberText';
 import { environment } from '../state/environment';
 import { type CellView, type Column, dropUnread, keepUnread } from './column';
@@ -11,8 +12,8 @@ interface Amount {
   digits: number;
   /** What an empty cell means. */
   empty: string;
-  /** The stored number of one shown: 0.01 for shares in per cent. */
-  factor?: number;
+  /** Kept as a share [0..1], shown and typed in per cent. */
+  inPercent?: true;
   get(product: Product): number | undefined;
   set(product: Product, value: number | undefined): void;
   problem?(value: number, product: Product): string | undefined;
@@ -20,9 +21,9 @@ interface Amount {
   locked?(product: Product): string | undefined;
 }
 
-function amountColumn({ factor = 1, ...amount }: Amount): Column {
+function amountColumn({ inPercent, ...amount }: Amount): Column {
   const { id, label, unit, title } = amount;
-  const shown = (value: number) => Number((value / factor).toPrecision(12));
+  const shown = (value: number) => (inPercent ? toPercent(value) : value);
   function read(product: Product): CellView {
     const unread = product.unread?.[id];
     if (unread !== undefined) return { text: unread, edit: unread, problem: `${unreadInWords(unread)} ${LEFT_OUT}` };
@@ -42,12 +43,12 @@ function amountColumn({ factor = 1, ...amount }: Amount): Column {
   }
   function write(product: Product, text: string, sign?: DecimalSign): void {
     dropUnread(product, id);
-    const parsed = parseNumber(factor === 1 ? text : text.replace(/%\s*$/, ''), sign);
+    const parsed = parseNumber(inPercent ? text.replace(/%\s*$/, '') : text, sign);
     if ('problem' in parsed) {
       amount.set(product, undefined);
       keepUnread(product, id, text);
     } else if ('empty' in parsed) amount.set(product, undefined);
-    else amount.set(product, Number((parsed.value * factor).toPrecision(12)));
+    else amount.set(product, inPercent ? fromPercent(parsed.value) : parsed.value);
   }
   return { id, label, unit, title, kind: 'number', read, write, locked: amount.locked };
 }
@@ -84,14 +85,17 @@ export const ON_HAND_COLUMN = amountColumn({
   empty: 'not limited',
   get: ({ lots }) => sumOfLots(lots.map(({ availableTonnes }) => availableTonnes)),
   set(product, value) {
-    const [lot] = product.lots;
+    const [lot, second] = product.lots;
+    if (second) return;
     if (!lot) {
       if (value !== undefined) product.lots.push(newLot(value));
     } else if (value === undefined) delete lot.availableTonnes;
     else lot.availableTonnes = value;
   },
   problem: (value) => (value < 0 ? `A quantity cannot be below zero. ${LEFT_OUT}` : undefined),
-  locked: ({ lots }) => (lots.length > 1 ? `The sum of ${lots.length} lots.` : undefined),
+  // A text from elsewhere that stands unread keeps the stock out, and must be there to clear.
+  locked: ({ lots, unread }) =>
+    lots.length > 1 && unread?.availableTonnes === undefined ? `The sum of ${lots.length} lots.` : undefined,
 });
 
 function newLot(availableTonnes: number) {
@@ -110,7 +114,7 @@ export const LEAST_DOSE_COLUMN = amountColumn({
   unit: '%',
   title: 'Least share the plant can meter: absent, or at least so much of the mix [% m/m]',
   digits: 2,
-  factor: 0.01,
+  inPercent: true,
   empty: 'none',
   get: ({ leastDoseIfUsed }) => leastDoseIfUsed,
   set(product, value) {
@@ -130,7 +134,7 @@ export const GREATEST_DOSE_COLUMN = amountColumn({
   unit: '%',
   title: 'Greatest share in a mix [% m/m]',
   digits: 2,
-  factor: 0.01,
+  inPercent: true,
   empty: 'none',
   get: ({ greatestDose }) => greatestDose,
   set(product, value) {

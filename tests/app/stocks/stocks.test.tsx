@@ -88,6 +88,16 @@ describe('the table of stocks', () => {
     expect(stockOnPage('c').lots).toEqual([LOT, second]);
   });
 
+  it('lets an unread quantity be cleared though there are several lots, which it leaves alone', async () => {
+    const lots = [LOT, { ...LOT, id: 'second' }];
+    const user = setUp([inventedStock('a', { lots, unread: { availableTonnes: '2O' } })]);
+    act(() => cellAt(0, 'On hand').focus());
+    await user.keyboard('{Delete}');
+    expect(stockOnPage('a').unread).toBeUndefined();
+    expect(stockOnPage('a').lots).toEqual(lots);
+    expect(cellAt(0, 'On hand')).toHaveAttribute('aria-readonly', 'true');
+  });
+
   it('takes doses in per cent and says where they contradict each other', async () => {
     const user = setUp();
     act(() => cellAt(0, 'Least dose').focus());
