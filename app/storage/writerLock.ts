@@ -7,12 +7,14 @@ export interface WriterLock {
   release(): void;
 }
 
-/** A page that is being reloaded lets go of its lock a moment after the new one asks [ms]. */
-const PATIENCE_MS = 500;
+/**
+ * A page that is being reloaded lets go of its lock a moment after the new one asks, so it is asked several times.
+ * Each answer is the browser's own: a busy computer that answers late is not taken for another tab.
+ */
+const TRIES = 12;
+const BETWEEN_TRIES_MS = 50;
 
-function nameOf(error: unknown): string | undefined {
-  return typeof error === 'object' && error !== null && 'name' in error ? String(error.name) : undefined;
-}
+const pause = (ms: number) => new Promise<void>((resolve) => setTimeout(resolve, ms));
 
 /** Without Web Locks every page writes, as browsers without them always did. */
 export function unguarded(): WriterLock {
@@ -39,23 +41,29 @@ export function webLock(locks: LockManager): WriterLock {
     current = undefined;
   }
 
-  function request(id: string): Promise<boolean> {
+  /** True where the lock was free; it is held from then on. */
+  function take(id: string): Promise<boolean> {
     return new Promise((resolve, reject) => {
-      // Held as long as the promise of the callback is open.
-      const holdOpen = () =>
-        new Promise<void>((done) => {
-          release();
-          current = { id, release: done };
-          resolve(true);
-        });
       locks
-        .request(`basewright ${id}`, { signal: AbortSignal.timeout(PATIENCE_MS) }, holdOpen)
-        .catch((error: unknown) => {
-          const tooLate = nameOf(error) === 'TimeoutError' || nameOf(error) === 'AbortError';
-          if (tooLate) resolve(false);
-          else reject(error);
-        });
+        .request(`basewright ${id}`, { ifAvailable: true }, (lock) => {
+          if (!lock) return resolve(false);
+          // Held as long as the promise of the callback is open.
+          return new Promise<void>((done) => {
+            release();
+            current = { id, release: done };
+            resolve(true);
+          });
+        })
+        .catch(reject);
     });
+  }
+
+  async function request(id: string): Promise<boolean> {
+    for (let tries = 1; ; tries += 1) {
+      if (await take(id)) return true;
+      if (tries === TRIES) return false;
+      await pause(BETWEEN_TRIES_MS);
+    }
   }
 
   return {

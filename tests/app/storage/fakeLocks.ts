@@ -1,21 +1,17 @@
 /** Locks of one browser, shared by several pages: as much of Web Locks as is used. */
-export function fakeLocks(): LockManager {
-  const queues = new Map<string, Promise<unknown>>();
+export function fakeLocks({ answersAfterMs = 0 } = {}): LockManager {
+  const held = new Set<string>();
 
-  async function request(name: string, { signal }: LockOptions, callback: (lock: Lock) => unknown): Promise<unknown> {
-    const before = queues.get(name) ?? Promise.resolve();
-    let gaveUp = false;
-    const turn = before.then(() => (gaveUp ? undefined : callback({ name, mode: 'exclusive' })));
-    queues.set(name, turn);
-    const late = new Promise<never>((_resolve, reject) => {
-      signal?.addEventListener('abort', () => {
-        gaveUp = true;
-        reject(signal.reason);
-      });
-    });
-    // Once granted, the signal has no say any more.
-    await Promise.race([before, late]);
-    return turn;
+  async function request(name: string, { ifAvailable }: LockOptions, callback: (lock: Lock | null) => unknown) {
+    if (!ifAvailable) throw new Error('Waiting for a lock is not done here.');
+    if (answersAfterMs > 0) await new Promise((resolve) => setTimeout(resolve, answersAfterMs));
+    if (held.has(name)) return callback(null);
+    held.add(name);
+    try {
+      return await callback({ name, mode: 'exclusive' });
+    } finally {
+      held.delete(name);
+    }
   }
   // The overloads and the query are not used here.
   return { request, query: () => Promise.resolve({}) } as unknown as LockManager;

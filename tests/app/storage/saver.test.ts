@@ -150,7 +150,7 @@ describe('trouble', () => {
     await webLock(locks).hold('w');
     const { saver, saved, reports } = setUp(async () => {}, webLock(locks));
     saver.schedule(named('a'));
-    // The browser's own clock counts the patience for the lock.
+    // The lock is asked for several times, a moment apart.
     vi.useRealTimers();
     await saver.flush();
     expect(saved).toEqual([]);

@@ -1,4 +1,4 @@
-import { expect, test } from 'vitest';
+import { expect, test, vi } from 'vitest';
 import { unguarded, webLock } from '../../../app/storage/writerLock';
 import { fakeLocks } from './fakeLocks';
 
@@ -44,4 +44,12 @@ test('holding twice is holding once', async () => {
 
 test('without Web Locks every page writes', async () => {
   expect(await unguarded().hold('a')).toBe(true);
+});
+
+test('a browser that answers late is not taken for another tab', async () => {
+  vi.useFakeTimers();
+  const answer = webLock(fakeLocks({ answersAfterMs: 3_000 })).hold('a');
+  await vi.advanceTimersByTimeAsync(3_000);
+  vi.useRealTimers();
+  expect(await answer).toBe(true);
 });
