@@ -10,13 +10,15 @@ const highs = await createHighsEngine();
 /** Two searches to a gap of 1e-6 may differ by this part of the cost. */
 const TWO_GAPS = 2e-6;
 
-/** The order with one limit moved a little, as when it is dragged. */
+/** The order with one limit moved a little, as when it is dragged, and now and then a price or a greatest dose. */
 function moved(order: Order, draw: Draw): Order {
   const copy = structuredClone(order);
   const limit = draw.pick(copy.limits);
   const step = draw.between(-0.02, 0.02);
   if (limit.min !== undefined) limit.min += step * Math.abs(limit.min);
   if (limit.max !== undefined) limit.max += step * Math.abs(limit.max);
+  if (draw.chance(0.3)) draw.pick(copy.stocks).pricePerTonne *= draw.between(0.8, 1.2);
+  if (draw.chance(0.2)) draw.pick(copy.stocks).greatestDose = draw.between(0.3, 1);
   return copy;
 }
 
