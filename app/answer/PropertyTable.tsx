@@ -1,10 +1,9 @@
-import type { BlendOutcome, Order, RuleSpread } from '../../src';
+import type { BlendOutcome, Order } from '../../src';
 import { classNames } from '../parts/classNames';
+import { figureKey } from '../stocks/productFigures';
 import styles from './PropertyTable.module.css';
 import { type PropertyRow, propertyRows } from './propertyRows';
 import { otherRules } from './ruleSpread';
-
-const keyOf = ({ property, celsius }: RuleSpread) => `${property}@${celsius ?? ''}`;
 
 /** What the mix is predicted to be, against the limits. A prediction: passing is for the laboratory. */
 export function PropertyTable({
@@ -17,7 +16,9 @@ export function PropertyTable({
   laboratoryOnly: readonly string[];
 }) {
   const rule = order.viscosityRule ?? 'wright';
-  const spread = new Map((outcome.properties?.spread ?? []).map((entry) => [keyOf(entry), otherRules(entry, rule)]));
+  const spread = new Map(
+    (outcome.properties?.spread ?? []).map((entry) => [figureKey(entry), otherRules(entry, rule)]),
+  );
   return (
     <table className={styles.table}>
       <caption className="visually-hidden">Predicted properties of the mix</caption>

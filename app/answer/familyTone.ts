@@ -27,10 +27,17 @@ export interface Look {
   pattern: (typeof PATTERNS)[number];
 }
 
-/** A look for each stock, in the order of the recipe; no two alike among the first few of a tone, nor side by side. */
+/** A look for each stock, in the order of the recipe: neighbours differ, and so do all of a tone up to five. */
 export function looksOf(families: readonly Family[]): Look[] {
-  return families.map((family, place) => ({
-    tone: TONES[family],
-    pattern: PATTERNS[place % PATTERNS.length] ?? 'plain',
-  }));
+  const looks: Look[] = [];
+  for (const family of families) {
+    const tone = TONES[family];
+    const used = looks.filter((look) => look.tone === tone).length;
+    // The next pattern for the tone; one further where the neighbour has it, whose tone may not be seen as another.
+    const free = PATTERNS.filter((pattern) => !looks.some((look) => look.tone === tone && look.pattern === pattern));
+    const left = looks.at(-1)?.pattern;
+    const pattern = free.find((one) => one !== left) ?? free[0] ?? PATTERNS[used % PATTERNS.length] ?? 'plain';
+    looks.push({ tone, pattern });
+  }
+  return looks;
 }

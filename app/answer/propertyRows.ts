@@ -9,6 +9,7 @@ import {
 } from '../../src';
 import { limitName, rangeInWords, roomInWords, shortLimitName, withUnit } from '../order/limitWords';
 import { figureText } from '../stocks/figureText';
+import { figureKey } from '../stocks/productFigures';
 
 /** One predicted property of the mix against its limits. */
 export interface PropertyRow {
@@ -65,7 +66,7 @@ export function propertyRows(order: Order, { properties, checks }: BlendOutcome)
     const unknown = unknownInWords(predicted, order);
     return [
       {
-        key: `${property}@${celsius ?? ''}`,
+        key: figureKey(predicted),
         name: (property === 'density' ? limitName : shortLimitName)(predicted, order.ownProperties) + depressed,
         fullName: limitName(predicted, order.ownProperties) + depressed,
         unit: definition.unit === '-' ? '' : definition.unit,

@@ -1,15 +1,4 @@
-import { findFigure, kinematicViscosityAt, type Limit, type Order, type Stock, viscosityIndex } from '../../src';
-
-/** A stock's own value of a limited property, or undefined where it is not known (or not defined). */
-export function stockValue(stock: Stock, limit: Limit, depressant: boolean): number | undefined {
-  if (limit.property === 'vi') return outsideIsUnknown(() => ownViscosityIndex(stock));
-  if (limit.property === 'kv' && limit.celsius !== undefined) return viscosityOf(stock, limit.celsius);
-  if (limit.property === 'pourPoint' && depressant) {
-    const depressed = findFigure(stock, 'pourPointDepressed')?.value;
-    if (depressed !== undefined) return depressed;
-  }
-  return findFigure(stock, limit.property, limit.celsius)?.value;
-}
+import { type Figure, type Limit, type Order, type PredictedProperty, predictBlend, type Stock } from '../../src';
 
 /** Marks for a rail: the stocks of the recipe with their own values. */
 export interface StockMark {
@@ -18,37 +7,38 @@ export interface StockMark {
   value: number;
 }
 
+/** An order is answered once and drawn often: what its stocks are alone is worked out once. */
+const ALONE = new WeakMap<Order, Map<string, readonly PredictedProperty[]>>();
+
+/** Any will do [kg/m³]: alone, a stock has all of the volume whatever its density. */
+const STAND_IN: Figure = { property: 'density', celsius: 15, value: 900, origin: 'typical' };
+
+/** A stock on its own as the engine reads it: a pure mix of one. */
+function alone(order: Order, stock: Stock): readonly PredictedProperty[] {
+  const known = ALONE.get(order) ?? new Map<string, readonly PredictedProperty[]>();
+  ALONE.set(order, known);
+  const properties = known.get(stock.id) ?? predictedAlone(order, stock);
+  known.set(stock.id, properties);
+  return properties;
+}
+
+function predictedAlone({ viscosityRule, depressant, ownProperties, limits }: Order, stock: Stock) {
+  const hasDensity = stock.figures.some(({ property }) => property === 'density');
+  const weighed = hasDensity ? stock : { ...stock, figures: [...stock.figures, STAND_IN] };
+  const options = { viscosityRule, depressant, ownProperties, wanted: limits };
+  const { properties } = predictBlend([weighed], [{ stockId: stock.id, massFraction: 1 }], options);
+  return hasDensity ? properties : properties.filter(({ property }) => property !== 'density');
+}
+
+/** The stocks that are used, each at its own value of the limited property; those without one have no mark. */
 export function stockMarks(order: Order, usedStockIds: readonly string[], limit: Limit): StockMark[] {
   return order.stocks
-    .filter((stock) => usedStockIds.includes(stock.id))
+    .filter(({ id }) => usedStockIds.includes(id))
     .flatMap((stock) => {
-      const value = stockValue(stock, limit, order.depressant ?? false);
-      return value === undefined ? [] : [{ stockId: stock.id, name: stock.name, value }];
+      const found = alone(order, stock).find(
+        ({ property, celsius }) =>
+          property === limit.property && (limit.celsius === undefined || celsius === limit.celsius),
+      );
+      return found?.value === undefined ? [] : [{ stockId: stock.id, name: stock.name, value: found.value }];
     });
-}
-
-function viscosityOf(stock: Stock, celsius: number): number | undefined {
-  const measured = findFigure(stock, 'kv', celsius)?.value;
-  if (measured !== undefined) return measured;
-  const points = stock.figures.flatMap(({ property, celsius: at, value }) =>
-    property === 'kv' && at !== undefined && value !== undefined ? [{ celsius: at, kv: value }] : [],
-  );
-  return points.length < 2 ? undefined : outsideIsUnknown(() => kinematicViscosityAt(celsius, points));
-}
-
-function ownViscosityIndex(stock: Stock): number | undefined {
-  const kv40 = viscosityOf(stock, 40);
-  const kv100 = viscosityOf(stock, 100);
-  if (kv40 !== undefined && kv100 !== undefined) return viscosityIndex(kv40, kv100);
-  return findFigure(stock, 'vi')?.value;
-}
-
-/** A stock outside a standard's range simply has no mark. */
-function outsideIsUnknown(calculate: () => number | undefined): number | undefined {
-  try {
-    return calculate();
-  } catch (error) {
-    if (error instanceof RangeError) return undefined;
-    throw error;
-  }
 }

@@ -109,4 +109,13 @@ describe('the looks of the proportion bar', () => {
     for (const [place, look] of looks.slice(1).entries()) expect(look.pattern).not.toBe(looks[place]?.pattern);
     expect(new Set(looks.map(({ pattern }) => pattern)).size).toBe(PATTERNS.length);
   });
+
+  it('differ for all stocks of a tone, as far as there are patterns', () => {
+    const families = (['PAO', 'ester', 'PAO', 'mPAO', 'ester', 'Group I', 'PAO'] as const).slice();
+    const looks = looksOf(families).map(({ tone, pattern }) => `${tone} ${pattern}`);
+    expect(new Set(looks).size).toBe(families.length);
+    // The fourth after five other tones took the same pattern when it went by the place in the recipe.
+    const far = looksOf(['PAO', 'ester', 'Group I', 'Group II', 'Group III', 'mPAO']);
+    expect(far[5]).not.toEqual(far[0]);
+  });
 });
