@@ -1,5 +1,5 @@
 import { type BlendOutcome, type Order, propertyDefinition, VI_DEFINITION } from '../../src';
-import { limitName, rangeInWords } from '../order/limitWords';
+import { limitName, rangeInWords } from '../parts/limitWords';
 import styles from './AnswerPanel.module.css';
 import { List } from './LeftOutList';
 

@@ -1,5 +1,5 @@
 import { type RuleSpread, VISCOSITY_RULES } from '../../src';
-import { limitName } from '../order/limitWords';
+import { limitName } from '../parts/limitWords';
 import styles from './AnswerPanel.module.css';
 import { Disclosure } from './Disclosure';
 import { ruleLabel, spreadText } from './ruleSpread';

@@ -7,7 +7,7 @@ import {
   propertyDefinition,
   VI_DEFINITION,
 } from '../../src';
-import { limitName, rangeInWords, roomInWords, shortLimitName, withUnit } from '../order/limitWords';
+import { limitName, rangeInWords, roomInWords, shortLimitName, withUnit } from '../parts/limitWords';
 import { figureText } from '../stocks/figureText';
 import { figureKey } from '../stocks/productFigures';
 

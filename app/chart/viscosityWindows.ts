@@ -1,5 +1,5 @@
 import { type BlendOutcome, gradesOfViscosity, type Order } from '../../src';
-import { upperEnd } from '../order/limitEnds';
+import { upperEnd } from '../parts/limitEnds';
 
 /** A range of viscosity at one temperature, drawn as a bar: a limit of the order, or a viscosity grade. */
 export interface ViscosityWindow {

@@ -7,11 +7,12 @@ import {
   VI_DEFINITION,
   type WorkbookOrder,
 } from '../../src';
+import { isSameProperty } from '../parts/limitEnds';
+import { limitName, shortLimitName } from '../parts/limitWords';
 import { Select, type SelectOption } from '../parts/Select';
 import { editWorkbook, useWorkbook } from '../state/workbookStore';
+import { figureKey } from '../stocks/productFigures';
 import styles from './LimitList.module.css';
-import { isSameProperty } from './limitEnds';
-import { limitName, shortLimitName } from './limitWords';
 import { OwnPropertyDialog } from './OwnPropertyDialog';
 import { editOrder } from './useOrder';
 
@@ -28,7 +29,7 @@ export function AddLimit({ order, onAdded }: { order: WorkbookOrder; onAdded(): 
     ({ limit }) => !order.limits.some((existing) => isSameProperty(existing, limit)),
   );
   const option = ({ limit }: Choice): SelectOption<string> => ({
-    value: keyOf(limit),
+    value: figureKey(limit),
     label: limitName(limit, ownProperties),
   });
   const [asking, setAsking] = useState(false);
@@ -39,7 +40,7 @@ export function AddLimit({ order, onAdded }: { order: WorkbookOrder; onAdded(): 
 
   function add(key: string) {
     if (key === OF_ONES_OWN) return setAsking(true);
-    const choice = choices.find(({ limit }) => keyOf(limit) === key);
+    const choice = choices.find(({ limit }) => figureKey(limit) === key);
     if (!choice) return;
     const { limit } = choice;
     editOrder(order.id, `add a limit on ${shortLimitName(limit, ownProperties)}`, ({ limits }) => {
@@ -104,10 +105,6 @@ function choicesOf({ id, temperatures, anyTemperature }: PropertyDefinition, gro
 
 function groupOf({ index, unit }: PropertyDefinition): string {
   return index === 'viscosity' || unit === 'mPa·s' ? 'Viscosity' : 'Other properties';
-}
-
-function keyOf({ property, celsius }: Limit): string {
-  return `${property}@${celsius ?? ''}`;
 }
 
 /** An id that no property has: from the name, as far as it has plain letters. */

@@ -1,11 +1,11 @@
 import type { Limit, PropertyDefinition } from '../../src';
 import { Button } from '../parts/Button';
 import { Checkbox } from '../parts/Checkbox';
+import { assign, setStrict, upperEnd } from '../parts/limitEnds';
 import { NumberField } from '../parts/NumberField';
 import { formatNumber } from '../parts/numberText';
 import { useWorkbook } from '../state/workbookStore';
 import styles from './LimitList.module.css';
-import { assign, setStrict, upperEnd } from './limitEnds';
 import { precisionMargin } from './precisionMargin';
 
 /** The rest of a limit: strictness, margin, aim, temperature, and how the property is measured and blended. */

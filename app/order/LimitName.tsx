@@ -2,8 +2,8 @@ import { useId } from 'react';
 import type { LimitCheck, PropertyDefinition } from '../../src';
 import { classNames } from '../parts/classNames';
 import { Icon } from '../parts/Icon';
+import { roomInWords, unitOf } from '../parts/limitWords';
 import styles from './LimitList.module.css';
-import { roomInWords, unitOf } from './limitWords';
 
 /** The name of a limit, which opens the rest of it; its method as a tip; how the mix stands to it. */
 export function LimitName({

@@ -1,6 +1,8 @@
 import { useEffect, useId, useRef, useState } from 'react';
 import { type Limit, propertyDefinition } from '../../src';
 import { IconButton } from '../parts/IconButton';
+import { type End, setEnd, upperEnd } from '../parts/limitEnds';
+import { contradiction, limitName, shortLimitName, unitOf } from '../parts/limitWords';
 import { NumberField } from '../parts/NumberField';
 import type { Answer } from '../state/answerStore';
 import { endEdit, useWorkbook } from '../state/workbookStore';
@@ -8,8 +10,6 @@ import styles from './LimitList.module.css';
 import { LimitMore } from './LimitMore';
 import { LimitName } from './LimitName';
 import { checkOf, marksOf, mixValue } from './limitAnswer';
-import { type End, setEnd, upperEnd } from './limitEnds';
-import { contradiction, limitName, shortLimitName, unitOf } from './limitWords';
 import { problemsAt } from './problemsAt';
 import { Rail } from './Rail';
 import { editOrder } from './useOrder';

@@ -1,8 +1,8 @@
 import { useRef, useState } from 'react';
 import type { Limit, PropertyDefinition } from '../../src';
+import { type End, upperEnd } from '../parts/limitEnds';
 import { formatNumber } from '../parts/numberText';
 import { useWidth } from '../parts/useWidth';
-import { type End, upperEnd } from './limitEnds';
 import styles from './Rail.module.css';
 import { RailEnd } from './RailEnd';
 import { RailMix } from './RailMix';

@@ -1,7 +1,7 @@
 import type { Limit, PropertyDefinition } from '../../src';
 import { classNames } from '../parts/classNames';
-import { type End, upperEnd } from './limitEnds';
-import { limitName, withUnit } from './limitWords';
+import { type End, upperEnd } from '../parts/limitEnds';
+import { limitName, withUnit } from '../parts/limitWords';
 import styles from './Rail.module.css';
 import { RAIL } from './railLayout';
 import type { RailScale } from './railScale';

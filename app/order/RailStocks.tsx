@@ -1,6 +1,6 @@
 import type { PropertyDefinition } from '../../src';
 import { classNames } from '../parts/classNames';
-import { withUnit } from './limitWords';
+import { withUnit } from '../parts/limitWords';
 import styles from './Rail.module.css';
 import { RAIL } from './railLayout';
 import { type RailScale, toFraction } from './railScale';

@@ -1,6 +1,6 @@
 import { useId } from 'react';
 import type { Limit, PropertyDefinition } from '../../src';
-import { upperEnd, upperMargin } from './limitEnds';
+import { upperEnd, upperMargin } from '../parts/limitEnds';
 import styles from './Rail.module.css';
 import { RAIL } from './railLayout';
 

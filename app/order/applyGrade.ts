@@ -1,6 +1,6 @@
 import { GRADES, type Grade, type Limit, propertyDefinition, type WorkbookOrder } from '../../src';
-import { isSameProperty, upperEnd } from './limitEnds';
-import { limitName, rangeInWords, withUnit } from './limitWords';
+import { isSameProperty, upperEnd } from '../parts/limitEnds';
+import { limitName, rangeInWords, withUnit } from '../parts/limitWords';
 
 /**
  * Puts the grade's limits in place of those on the same property, or after the others; lists what only tests show. A

@@ -1,6 +1,6 @@
 import type { Limit, LimitCheck } from '../../src';
+import { isSameProperty } from '../parts/limitEnds';
 import type { Answer } from '../state/answerStore';
-import { isSameProperty } from './limitEnds';
 import { type StockMark, stockMarks } from './stockOnRail';
 
 /** What the last answer says of one limit. While it is stale the limits may have moved places since. */

@@ -1,5 +1,5 @@
 import type { Limit, PropertyDefinition } from '../../src';
-import { upperEnd } from './limitEnds';
+import { upperEnd } from '../parts/limitEnds';
 
 /** One result, 95 %, one-sided: 1.645/2.772 of the reproducibility R. Source: ISO 4259-2, ASTM D3244. */
 const SHARE_OF_R = 1.645 / 2.772;

@@ -1,6 +1,6 @@
 import { useState } from 'react';
 import type { Limit } from '../../src';
-import { isSameProperty } from './limitEnds';
+import { isSameProperty } from '../parts/limitEnds';
 
 interface Known {
   limits: readonly Limit[];

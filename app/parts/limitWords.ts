@@ -1,6 +1,6 @@
 import { type Limit, type LimitCheck, type OwnProperty, type PropertyDefinition, propertyDefinition } from '../../src';
-import { formatNumber } from '../parts/numberText';
 import { upperEnd, upperMargin } from './limitEnds';
+import { formatNumber } from './numberText';
 
 /** "Kinematic viscosity at 40 °C"; the id itself where the property is not known. */
 export function limitName(limit: Limit, ownProperties: readonly OwnProperty[] = []): string {

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { contradiction, limitName, rangeInWords, roomInWords, shortLimitName } from '../../../app/order/limitWords';
 import { precisionMargin } from '../../../app/order/precisionMargin';
+import { contradiction, limitName, rangeInWords, roomInWords, shortLimitName } from '../../../app/parts/limitWords';
 import { type Limit, type LimitCheck, type PropertyDefinition, propertyDefinition } from '../../../src';
 
 function definitionOf(id: string): PropertyDefinition {
