@@ -42,6 +42,17 @@ test.each([0.1, 1, 4, 30, 1000])(
   },
 );
 
+test('in an order per m³ a deviation is counted per tonne, and turned into one per m³ with the cost', async () => {
+  const order: Order = { ...withAim({ property: 'noack', aim: AIM, aimWeight: 4 }), costBasis: 'cubic metre' };
+  const outcome = await solved(order);
+  const { objective = Number.NaN, costPerTonne = Number.NaN, costPerCubicMetre = Number.NaN, proof } = outcome;
+  const counted = (4 * Math.abs(noackOf(order, outcome) - AIM)) / UNIT;
+  const tonnesPerCubicMetre = costPerCubicMetre / costPerTonne;
+  expect(counted).toBeGreaterThan(1);
+  expect(Math.abs(objective - (costPerTonne + counted) * tonnesPerCubicMetre)).toBeLessThan(1e-9 * objective);
+  expect(proof.lowerBound).toBeLessThanOrEqual(objective * (1 + 1e-12));
+});
+
 test('a weak aim leaves the cheapest recipe, a strong one is met', async () => {
   const weak = withAim({ property: 'noack', aim: AIM, aimWeight: 1e-6 });
   const cheapest = await solved(withAim({ property: 'noack', max: 60 }));
