@@ -1,3 +1,4 @@
+import { OWN_RULES } from '../property/ownProperty';
 import { VISCOSITY_RULES } from '../property/viscosityRule';
 import { FAMILIES } from '../stock/family';
 import { FIGURE_ORIGINS } from '../stock/figure';
@@ -50,9 +51,24 @@ function checkStockShape(shape: Shape, stock: Data, place: number): void {
   shape.text(at('id'), stock.id);
   shape.text(at('name'), stock.name);
   shape.word(at('family'), stock.family, FAMILIES, true);
+  const { flags } = stock;
+  if (flags !== undefined && !(Array.isArray(flags) && flags.every((flag) => typeof flag === 'string'))) {
+    shape.fail(at('flags'), '"flags" must be a list of texts.');
+  }
   for (const figure of shape.list(at('figures'), stock.figures, true)) {
     shape.text(at('figures'), figure.property);
     shape.word(at('figures'), figure.origin, FIGURE_ORIGINS, true);
+  }
+}
+
+function checkOwnShape(shape: Shape, own: Data, place: number): void {
+  const at = (key: string) => ['ownProperties', place, key];
+  shape.text(at('id'), own.id);
+  shape.text(at('label'), own.label);
+  shape.word(at('rule'), own.rule, OWN_RULES, true);
+  const digits = Number(own.digits);
+  if (!(Number.isInteger(own.digits) && digits >= 0 && digits <= 9)) {
+    shape.fail(at('digits'), 'The decimals of an own property must be a whole number from 0 to 9.');
   }
 }
 
@@ -87,7 +103,9 @@ export function checkShape(order: Order): OrderProblem[] {
     shape.word(['doses', place, 'of'], dose.of, SHARE_BASES);
   });
   shape.list(['shares'], data.shares, false).forEach((rule, place) => void checkShareShape(shape, rule, place));
-  shape.list(['ownProperties'], data.ownProperties, false);
+  shape
+    .list(['ownProperties'], data.ownProperties, false)
+    .forEach((own, place) => void checkOwnShape(shape, own, place));
   shape.word(['viscosityRule'], data.viscosityRule, VISCOSITY_RULES);
   shape.word(['costBasis'], data.costBasis, COST_BASES);
   if (data.batchTonnes === null)

@@ -9,6 +9,9 @@ import { isInSet } from './stockSet';
 
 type Path = (string | number)[];
 
+/** No quantity of an order is larger; beyond it the engines lose their digits. */
+const LARGEST = 1e9;
+
 /** Collects problems: what is wrong and what to do, with the place in the order. */
 class Problems {
   readonly found: OrderProblem[] = [];
@@ -18,11 +21,11 @@ class Problems {
   }
 
   /** Complains unless the value is absent or a number in the range. */
-  number(path: Path, value: unknown, label: string, min = -Infinity, max = Infinity): void {
+  number(path: Path, value: unknown, label: string, min = -LARGEST, max = LARGEST): void {
     if (value === undefined) return;
     if (typeof value !== 'number' || !Number.isFinite(value)) this.add(path, `${label} must be a number.`);
     else if (value < min || value > max) {
-      const range = max === Infinity ? `at least ${min}` : min === -Infinity ? `at most ${max}` : `${min} to ${max}`;
+      const range = max === LARGEST ? `at least ${min}` : `${min} to ${max}`;
       this.add(path, `${label} must be ${range}; it is ${value}.`);
     }
   }
@@ -140,7 +143,7 @@ function checkShare(rule: ShareRule, place: number, order: Order, problems: Prob
     problems.add(path, 'The rule names a stock that is not in this order.');
   }
   if (rule.kind === 'excludes' || rule.kind === 'flag') return;
-  const top = rule.kind === 'share' ? 1 : Infinity;
+  const top = rule.kind === 'share' ? 1 : LARGEST;
   problems.number([...path, 'min'], rule.min, 'The least of the rule', 0, top);
   problems.number([...path, 'max'], rule.max, 'The most of the rule', 0, top);
   problems.range(path, rule.min, rule.max, 'The rule');

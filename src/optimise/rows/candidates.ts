@@ -126,9 +126,12 @@ function dosesAboveTheRest(order: Order, takingTheRest: ReadonlyMap<string, stri
   const most = greatestDoseAsTheRest(order);
   return (order.doses ?? []).flatMap((dose) => {
     const key = takingTheRest.get(dose.stockId);
-    const least = dose.exactly ?? dose.min ?? 0;
-    if (key === undefined || dose.required === false || dose.of === 'base oil' || least <= most) return [];
-    const name = order.stocks.find((stock) => stock.id === dose.stockId)?.name ?? dose.stockId;
+    const stock = order.stocks.find((candidate) => candidate.id === dose.stockId);
+    if (key === undefined || !stock || !isCompulsory(order, dose.stockId)) return [];
+    const ofMix = dose.of === 'base oil' ? 0 : (dose.exactly ?? dose.min ?? 0);
+    const least = Math.max(ofMix, stock.leastDoseIfUsed ?? 0);
+    if (least <= most) return [];
+    const { name } = stock;
     const message =
       `${name} takes the value of the rest of the mix in a limited property, which is allowed up to ${percent(most)}; ` +
       `its dose is ${percent(least)}. Enter an in-blend figure, or raise the dose allowed "as the rest".`;

@@ -2,7 +2,7 @@ import type { Stock } from '../../stock/stock';
 import type { ModelRow, Presence, RowSource, SearchModel, WholeLots } from './searchModel';
 
 /** From this share on a stock counts as used where a rule asks for "at least so many" and it has no least dose. */
-export const LEAST_SHARE_THAT_COUNTS = 1e-4;
+export const LEAST_SHARE_THAT_COUNTS = 1e-6;
 
 /** Collects columns and rows of a search model. */
 export class ModelBuilder {
