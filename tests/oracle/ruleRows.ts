@@ -58,7 +58,7 @@ export function applyShares(order: Order, built: OrderRows): void {
     } else if (rule.kind === 'count') {
       built.choices.counts.push({ members: places, min: rule.min ?? 0, max: rule.max ?? places.length });
       // "At least so many" needs a share from which on a stock counts: a ten-thousandth.
-      if ((rule.min ?? 0) > 0) for (const i of places) built.least[i] = Math.max(built.least[i], 1e-4);
+      if ((rule.min ?? 0) > 0) for (const i of places) built.least[i] = Math.max(built.least[i], 1e-6);
     } else {
       const from = stocks.findIndex((stock) => stock.id === rule.stockId);
       if (from >= 0) built.choices.excludes.push({ from, members: places.filter((i) => i !== from) });
