@@ -1,5 +1,5 @@
 import { type KeyboardEvent, type PointerEvent, useEffect, useRef, useState } from 'react';
-import { dragStep, fromFraction, type RailScale, snap } from './railScale';
+import { dragStep, fromFraction, type RailScale, snap, toFraction } from './railScale';
 
 export interface EndDragOptions {
   value: number;
@@ -24,6 +24,8 @@ export function useEndDrag(options: EndDragOptions) {
   latest.current = options;
   const frame = useRef<number>(undefined);
   const waiting = useRef<number>(undefined);
+  /** Where on its grip the end was taken [px]: the end stays under the finger, and does not jump to it. */
+  const grip = useRef(0);
   const [dragging, setDragging] = useState(false);
 
   useEffect(() => () => cancelFrame(frame.current), []);
@@ -43,11 +45,17 @@ export function useEndDrag(options: EndDragOptions) {
   }
 
   function valueAt(event: PointerEvent<SVGGElement>): number {
-    const { scale, width, left, reportingUnit } = latest.current;
-    const box = event.currentTarget.ownerSVGElement?.getBoundingClientRect();
-    const fraction = (event.clientX - (box?.left ?? 0) - left) / width;
+    const { scale, width, reportingUnit } = latest.current;
+    const fraction = placeOf(event) - grip.current / width;
     const step = dragStep(scale, width, reportingUnit);
     return snap(fromFraction(scale, Math.min(Math.max(fraction, 0), 1)), step);
+  }
+
+  /** The pointer's place along the scale, as a fraction of it. */
+  function placeOf(event: PointerEvent<SVGGElement>): number {
+    const { width, left } = latest.current;
+    const box = event.currentTarget.ownerSVGElement?.getBoundingClientRect();
+    return (event.clientX - (box?.left ?? 0) - left) / width;
   }
 
   function setActive(active: boolean) {
@@ -89,6 +97,8 @@ export function useEndDrag(options: EndDragOptions) {
         event.preventDefault();
         event.currentTarget.focus();
         event.currentTarget.setPointerCapture(event.pointerId);
+        const { scale, width, value } = latest.current;
+        grip.current = (placeOf(event) - toFraction(scale, value)) * width;
         setActive(true);
       },
       onPointerMove(event: PointerEvent<SVGGElement>) {

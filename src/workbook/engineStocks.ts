@@ -1,6 +1,7 @@
 import type { Figure } from '../stock/figure';
 import type { Stock } from '../stock/stock';
 import { boundProblems, isAmount, notANumber, unreadAmount } from './amountProblems';
+import { isUndosedAdditive } from './undosedAdditives';
 import type { Lot, Product, Workbook, WorkbookOrder } from './workbook';
 
 /** A product that an order cannot use, and why. */
@@ -113,7 +114,7 @@ function lotStocks(product: Product): ProductStocks {
 /** The stocks of every product the order may use: products, or lots on hand. */
 export function productStocks({ products }: Workbook, order: WorkbookOrder): ProductStocks[] {
   const excluded = new Set(order.excludedProductIds);
-  const usable = products.filter(({ id }) => !excluded.has(id));
+  const usable = products.filter((product) => !excluded.has(product.id) && !isUndosedAdditive(product, order));
   const asStocks = order.solveOn === 'lots' ? lotStocks : typicalStock;
   return usable.map((product) => {
     const trouble = boundProblems(product);

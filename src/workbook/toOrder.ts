@@ -1,6 +1,7 @@
 import type { Order } from '../optimise/order';
 import { engineRules, isRequired } from './engineRules';
 import { type OmittedProduct, type ProductStocks, productStocks, type UnreadCell, unreadCells } from './engineStocks';
+import { undosedNote } from './undosedAdditives';
 import type { Workbook, WorkbookOrder } from './workbook';
 
 /** An order of the workbook in the engine's terms, and what the user should know about the way there. */
@@ -70,6 +71,6 @@ export function toOrder(workbook: Workbook, order: WorkbookOrder): EngineOrder {
     },
     omitted: [...omittedProducts(products, order), ...contradictions(workbook, order)],
     unread: products.flatMap(({ product }) => unreadCells(product)),
-    notes,
+    notes: [...notes, ...undosedNote(workbook, order)],
   };
 }

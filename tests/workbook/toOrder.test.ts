@@ -338,12 +338,28 @@ test('changes neither the workbook nor the order, whatever they hold, and names 
           ...result.omitted.map(({ productId }) => productId),
           ...order.excludedProductIds,
         ]);
-        for (const { id, lots } of workbook.products) {
-          expect(accounted.has(id) || lots.some((entry) => accounted.has(entry.id))).toBe(true);
+        const told = result.notes.join(' ');
+        for (const { id, name, family, lots } of workbook.products) {
+          const aside = (family === 'package' || family === 'depressant') && told.includes(name);
+          expect(aside || accounted.has(id) || lots.some((entry) => accounted.has(entry.id))).toBe(true);
         }
       }
     }),
   );
+});
+
+describe('packages and depressants', () => {
+  const products = [product('a'), product('p', { family: 'package' }), product('d', { family: 'depressant' })];
+
+  test('are used only where the order doses them or names them in a rule, and a note names those left aside', () => {
+    const undosed = convert(products, {});
+    expect(undosed.order.stocks.map(({ id }) => id)).toEqual(['a']);
+    expect(undosed.notes).toEqual([expect.stringContaining('not used here: ')]);
+    const dosed = convert(products, { doses: [{ stockId: 'p', exactly: 0.01 }] });
+    expect(dosed.order.stocks.map(({ id }) => id)).toEqual(['a', 'p']);
+    const named = convert(products, { shares: [{ kind: 'share', set: { families: ['depressant'] }, max: 0.01 }] });
+    expect(named.order.stocks.map(({ id }) => id)).toEqual(['a', 'd']);
+  });
 });
 
 describe('rules that are not finished', () => {

@@ -112,13 +112,17 @@ describe('the rail', () => {
     const now = Number(end.getAttribute('aria-valuenow'));
     fireEvent.pointerDown(end, { pointerId: 1, button: 0, clientX: 200 });
     expect(end.setPointerCapture).toHaveBeenCalledWith(1);
-    fireEvent.pointerMove(end, { pointerId: 1, clientX: RAIL.margin + 280 });
-    fireEvent.pointerMove(end, { pointerId: 1, clientX: RAIL.margin + 288 });
+    // Taken beside its middle and not yet moved, the end stays where it is.
+    fireEvent.pointerMove(end, { pointerId: 1, clientX: 200 });
+    await act(() => new Promise((done) => requestAnimationFrame(done)));
+    expect(orderOnPage().limits[0]?.max).toBe(now);
+    fireEvent.pointerMove(end, { pointerId: 1, clientX: 206 });
+    fireEvent.pointerMove(end, { pointerId: 1, clientX: 214 });
     await act(() => new Promise((done) => requestAnimationFrame(done)));
     const during = orderOnPage().limits[0]?.max ?? 0;
     expect(during).toBeGreaterThan(now);
-    fireEvent.pointerMove(end, { pointerId: 1, clientX: RAIL.margin + 270 });
-    fireEvent.pointerUp(end, { pointerId: 1, clientX: RAIL.margin + 270 });
+    fireEvent.pointerMove(end, { pointerId: 1, clientX: 204 });
+    fireEvent.pointerUp(end, { pointerId: 1, clientX: 204 });
     const after = orderOnPage().limits[0]?.max ?? 0;
     expect(after).toBeLessThan(during);
     expect(useWorkbook.getState().past).toHaveLength(1);
