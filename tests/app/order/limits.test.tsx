@@ -2,7 +2,6 @@ import { act, fireEvent, render, screen, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { beforeEach, describe, expect, it, vi } from 'vitest';
 import { OrderEditor } from '../../../app/order/OrderEditor';
-import { RAIL } from '../../../app/order/railLayout';
 import { setAnswer } from '../../../app/state/answerStore';
 import { undo, useWorkbook } from '../../../app/state/workbookStore';
 import type { Limit } from '../../../src';
