@@ -1,13 +1,9 @@
 import { type KeyboardEvent, useLayoutEffect, useRef, useState } from 'react';
 import type { Product } from '../../src';
+import { CELL_MOVES } from './cellMoves';
 import type { Column } from './column';
 import styles from './StocksTable.module.css';
 import type { Editing, GridActions } from './useGrid';
-
-const MOVES: Record<string, { plain: 'down' | 'right'; shift: 'up' | 'left' }> = {
-  Enter: { plain: 'down', shift: 'up' },
-  Tab: { plain: 'right', shift: 'left' },
-};
 
 /** The field in the cell being typed in. The page hears of it on Enter, Tab or leaving; Escape goes back. */
 export function CellEditor({
@@ -24,7 +20,7 @@ export function CellEditor({
   const start = column.read(product).edit;
   // Nothing until something is typed: what another place changes meanwhile is then not written over.
   const [draft, setDraft] = useState(editing.text);
-  const field = useRef<HTMLInputElement & HTMLSelectElement>(null);
+  const field = useRef<HTMLInputElement>(null);
   const done = useRef(false);
   const label = `${column.title}, ${product.name}`;
   // A text that stands unread may be meant after all: typed again as it is, it is read again.
@@ -32,15 +28,15 @@ export function CellEditor({
 
   useLayoutEffect(() => {
     field.current?.focus();
-    if (editing.text === undefined && field.current instanceof HTMLInputElement) field.current.select();
+    if (editing.text === undefined) field.current?.select();
   }, [editing.text]);
 
   function onKeyDown(event: KeyboardEvent) {
-    const move = MOVES[event.key];
+    const move = CELL_MOVES[event.key];
     if (move) {
       event.preventDefault();
       done.current = true;
-      grid.commit(product, column, column.choices ? undefined : changed, event.shiftKey ? move.shift : move.plain);
+      grid.commit(product, column, changed, event.shiftKey ? move.shift : move.plain);
     } else if (event.key === 'Escape') {
       done.current = true;
       grid.revert();
@@ -49,26 +45,9 @@ export function CellEditor({
 
   function onBlur() {
     // Taking the field away blurs it: what Escape refused must not be taken after all.
-    if (!done.current) grid.leave(product, column, column.choices ? undefined : changed);
+    if (!done.current) grid.leave(product, column, changed);
   }
 
-  if (column.choices) {
-    return (
-      <select
-        ref={field}
-        className={styles.field}
-        aria-label={label}
-        value={start}
-        onKeyDown={onKeyDown}
-        onBlur={onBlur}
-        onChange={(event) => grid.pick(product, column, event.target.value)}
-      >
-        {column.choices.map((choice) => (
-          <option key={choice}>{choice}</option>
-        ))}
-      </select>
-    );
-  }
   return (
     <input
       ref={field}

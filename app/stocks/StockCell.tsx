@@ -2,6 +2,7 @@ import { useId, useRef } from 'react';
 import type { Product } from '../../src';
 import { classNames } from '../parts/classNames';
 import { CellEditor } from './CellEditor';
+import { ChoiceEditor } from './ChoiceEditor';
 import type { CellView, Column } from './column';
 import type { Place } from './gridKeys';
 import styles from './StocksTable.module.css';
@@ -44,6 +45,7 @@ export function StockCell({
   const toTheLeft = useNoRoomAtRight(message, said !== undefined && chosen);
   const isHead = column.id === 'name';
   const Cell = isHead ? 'th' : 'td';
+  const Editor = column.choices ? ChoiceEditor : CellEditor;
   const mark = view.state && MARKS[view.state];
   return (
     <Cell
@@ -66,7 +68,7 @@ export function StockCell({
       onClick={() => !editing && grid.choose(place, product, column)}
     >
       {editing ? (
-        <CellEditor product={product} column={column} editing={editing} grid={grid} />
+        <Editor product={product} column={column} editing={editing} grid={grid} />
       ) : (
         <span className={styles.content}>
           {mark && (

@@ -7,6 +7,9 @@ import { StockRow } from './StockRow';
 import styles from './StocksTable.module.css';
 import type { Editing, GridActions } from './useGrid';
 
+/** Of the line that says which keys do what here, how to leave among them. */
+export const KEYS_ID = 'stocks-keys';
+
 export interface StocksGridProps {
   tableRef: RefObject<HTMLTableElement | null>;
   products: readonly Product[];
@@ -34,6 +37,7 @@ export function StocksGrid(props: StocksGridProps) {
       // biome-ignore lint/a11y/noNoninteractiveElementToInteractiveRole: the grid pattern of WAI-ARIA, on a table
       role="grid"
       aria-label="Stocks"
+      aria-describedby={KEYS_ID}
       aria-rowcount={products.length + 1}
       aria-colcount={columns.length}
       className={styles.table}

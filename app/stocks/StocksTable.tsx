@@ -14,7 +14,7 @@ import { paste } from './pasteStocks';
 import { planPaste } from './planPaste';
 import { recipeShares } from './recipeShares';
 import { StockDetails } from './StockDetails';
-import { StocksGrid } from './StocksGrid';
+import { KEYS_ID, StocksGrid } from './StocksGrid';
 import styles from './StocksTable.module.css';
 import { furtherFigures, stockColumns } from './stockColumns';
 import { addStock, duplicateStock, removeStock, setUse } from './stockEdits';
@@ -148,13 +148,19 @@ export function StocksTable() {
       )}
       {product && column && <StockDetails product={product} column={column} ownProperties={ownProperties} />}
       {products.length > 0 && (
+        <p role="status" className={styles.word}>
+          {grid.said}
+        </p>
+      )}
+      {products.length > 0 && (
         <p className={styles.legend}>
           <span>≈ estimated or assumed</span>
           <span>• in-blend value</span>
           <span>rest: takes the value of the rest</span>
           <span>– unknown</span>
-          <span className={styles.keys}>
-            Type to replace, Enter to edit, arrows to move; paste a block from a spreadsheet.
+          <span id={KEYS_ID} className={styles.keys}>
+            Type to replace, Enter to edit, arrows to move, Tab to the next cell that can be typed in; Escape, then Tab
+            leaves the table. Paste a block from a spreadsheet.
           </span>
         </p>
       )}

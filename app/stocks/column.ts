@@ -27,6 +27,8 @@ export interface Column {
   /** The figure the column shows, where it shows one. */
   figure?: Pick<Figure, 'property' | 'celsius'>;
   choices?: readonly string[];
+  /** The choice that a typed text means, `whole` where it is named in full; or why there is none. */
+  choose?(text: string): { choice: string; whole: boolean } | { problem: string };
   read(product: Product): CellView;
   /**
    * Takes a text as typed or pasted, a number by the user's own decimal sign or the one given; an empty text clears

@@ -1,6 +1,6 @@
 import { FAMILIES } from '../../src';
 import type { Column } from './column';
-import { readFamily } from './readFamily';
+import { chooseFamily, readFamily } from './readFamily';
 
 export const NAME_COLUMN: Column = {
   id: 'name',
@@ -34,6 +34,7 @@ export const FAMILY_COLUMN: Column = {
   title: 'Family: API group or kind of stock',
   kind: 'choice',
   choices: FAMILIES,
+  choose: chooseFamily,
   read: ({ family }) => ({ text: family, edit: family }),
   write(product, text) {
     product.family = readFamily(text) ?? 'other';

@@ -24,3 +24,17 @@ export function readFamily(text: string): Family | undefined {
     FAMILIES.find((family) => family.toLowerCase() === plain) ?? OTHER_NAMES.find(([name]) => name.test(plain))?.[1]
   );
 }
+
+/** The family that a typed text means: by its name, or as the only one that begins so; else why there is none. */
+export function chooseFamily(text: string): { choice: Family; whole: boolean } | { problem: string } {
+  const named = readFamily(text);
+  if (named) return { choice: named, whole: true };
+  const begins = FAMILIES.filter((family) => family.toLowerCase().startsWith(text.trim().toLowerCase()));
+  const [only] = begins;
+  if (only && begins.length === 1) return { choice: only, whole: false };
+  return {
+    problem: only
+      ? `Type more: ${begins.join(', ')}`
+      : `“${text.trim()}” is no family here. The families: ${FAMILIES.join(', ')}`,
+  };
+}

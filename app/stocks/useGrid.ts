@@ -9,10 +9,11 @@ import {
   useState,
 } from 'react';
 import type { Product } from '../../src';
-import { endEdit } from '../state/workbookStore';
+import { endEdit, useWorkbook } from '../state/workbookStore';
 import type { Column } from './column';
 import { clampPlace, type GridSize, gridAction, type Place } from './gridKeys';
 import { writeCell } from './stockEdits';
+import { isTyped, nextTyped, notTypedInWords } from './typedCells';
 
 /** The cell being typed in; `text` in place of what it held. */
 export interface Editing {
@@ -30,11 +31,13 @@ export interface GridActions {
   revert(): void;
   /** A choice is taken at once, and stays open. */
   pick(product: Product, column: Column, text: string): void;
+  /** Shows a word under the table until the focus goes on. */
+  say(words: string): void;
 }
 
-const STEPS = { down: [1, 0], up: [-1, 0], right: [0, 1], left: [0, -1] } as const;
-
-const isTyped = (product: Product, column: Column) => column.write !== undefined && !column.locked?.(product);
+const AT_END = 'There is no further cell to type in. Escape, then Tab leaves the table.';
+const LEAVING = 'Tab now leaves the table.';
+const NOT_CLEARED = 'A family is chosen, not cleared.';
 
 /** Which cell is chosen, which is being typed in, and where the focus goes. */
 export function useGrid(
@@ -46,15 +49,34 @@ export function useGrid(
   const [place, setPlace] = useState<Place>();
   const [editing, setEditing] = useState<Editing>();
   const [focusWanted, setFocusWanted] = useState(0);
+  const [said, setSaid] = useState<string>();
+  /** Escape was pressed: the Tab key is the page's again. */
+  const leaving = useRef(false);
   const size = useRef<GridSize>({ rows: 0, columns: 0 });
   size.current = { rows: products.length, columns: columns.length };
+  const now = useRef({ place, columns });
+  now.current = { place, columns };
 
   const goTo = useCallback((to: Place, edit?: Editing) => {
     // A row just added is not on the page yet, so the place is held to the table's size only when it is shown.
     setPlace(to);
     setEditing(edit);
+    setSaid(undefined);
     setFocusWanted((count) => count + 1);
   }, []);
+
+  /** To the next cell that can be typed in; at the end it stays, so that what is typed next goes nowhere else. */
+  const goOn = useCallback(
+    (step: 1 | -1) => {
+      const { place: from, columns: across } = now.current;
+      if (!from) return;
+      // As the workbook is now: what was just written may let a calculated cell be typed in, or not any more.
+      const next = nextTyped(from, step, useWorkbook.getState().workbook.products, across);
+      goTo(next ?? from);
+      if (!next) setSaid(AT_END);
+    },
+    [goTo],
+  );
 
   useEffect(() => {
     if (focusWanted === 0) return;
@@ -74,10 +96,9 @@ export function useGrid(
       commit(product, column, text, move) {
         write(product, column, text);
         endEdit();
-        const [down, right] = STEPS[move];
-        setEditing(undefined);
-        setPlace((old) => old && clampPlace({ row: old.row + down, column: old.column + right }, size.current));
-        setFocusWanted((count) => count + 1);
+        const { place: from } = now.current;
+        if (move === 'right' || move === 'left') goOn(move === 'right' ? 1 : -1);
+        else if (from) goTo(clampPlace({ ...from, row: from.row + (move === 'down' ? 1 : -1) }, size.current));
       },
       leave(product, column, text) {
         write(product, column, text);
@@ -91,14 +112,28 @@ export function useGrid(
       pick(product, column, text) {
         writeCell(product, column, text, `${product.id} ${column.id}`);
       },
+      say: setSaid,
     };
-  }, [goTo]);
+  }, [goTo, goOn]);
+
+  /** Escape gives the Tab key to the page; else it goes from cell to cell. True where the key was one of these. */
+  function onLeavingKey(event: KeyboardEvent): boolean {
+    if (event.key === 'Shift') return true;
+    const wasLeaving = leaving.current;
+    leaving.current = event.key === 'Escape';
+    if (leaving.current) setSaid(LEAVING);
+    if (event.key === 'Tab' && !wasLeaving) {
+      event.preventDefault();
+      goOn(event.shiftKey ? -1 : 1);
+    }
+    return event.key === 'Escape' || event.key === 'Tab';
+  }
 
   function onKeyDown(event: KeyboardEvent) {
     const chosen = place && clampPlace(place, size.current);
     const product = chosen && products[chosen.row];
     const column = chosen && columns[chosen.column];
-    if (editing || !product || !column || event.defaultPrevented) return;
+    if (editing || !product || !column || event.defaultPrevented || onLeavingKey(event)) return;
     const action = gridAction(event, chosen, size.current);
     if (!action) return;
     const onBox = column.kind === 'use';
@@ -112,9 +147,12 @@ export function useGrid(
       goTo(action.to);
     } else if (isTyped(product, column)) {
       event.preventDefault();
-      if (action.kind === 'clear') writeCell(product, column, '');
-      else if (action.kind === 'edit')
-        goTo(chosen, action.text === undefined || column.choices ? {} : { text: action.text });
+      if (action.kind === 'clear' && column.choices) setSaid(NOT_CLEARED);
+      else if (action.kind === 'clear') writeCell(product, column, '');
+      else if (action.kind === 'edit') goTo(chosen, action.text === undefined ? {} : { text: action.text });
+    } else {
+      event.preventDefault();
+      setSaid(notTypedInWords(product, column));
     }
   }
 
@@ -124,8 +162,11 @@ export function useGrid(
     const line = cell?.parentElement;
     if (!(cell instanceof HTMLTableCellElement) || !(line instanceof HTMLTableRowElement)) return;
     const at = { row: line.rowIndex - 1, column: cell.cellIndex };
-    if (at.row >= 0 && (at.row !== place?.row || at.column !== place.column)) setPlace(at);
+    leaving.current = false;
+    if (at.row < 0 || (at.row === place?.row && at.column === place.column)) return;
+    setPlace(at);
+    setSaid(undefined);
   }
 
-  return { place: place && clampPlace(place, size.current), editing, actions, goTo, onKeyDown, onFocus };
+  return { place: place && clampPlace(place, size.current), editing, said, actions, goTo, onKeyDown, onFocus };
 }
