@@ -19,6 +19,8 @@ function reproducibility(property: string, value: number): number {
   return 'relative' in found ? found.relative * Math.abs(value) : found.absolute;
 }
 
+const LIST = new Intl.ListFormat('en-GB');
+
 /** Beyond so many reproducibilities the rules disagree about the mix, not about a mix that sits on its limit. */
 const WIDE_DISAGREEMENT = 2;
 
@@ -41,7 +43,7 @@ function trialBlend(order: Order, checks: readonly LimitCheck[], predicted: Pred
   return checks.flatMap((check): Caution[] => {
     const rules = disagreeing(check, predicted);
     if (rules.length === 0) return [];
-    const shorts = rules.map(({ rule }) => VISCOSITY_RULE_TABLE[rule].short).join(' and ');
+    const shorts = LIST.format(rules.map(({ rule }) => VISCOSITY_RULE_TABLE[rule].short));
     const where = limitInWords(order.limits[check.limit], order);
     const what = `by the ${shorts} blending rule${rules.length > 1 ? 's' : ''} ${where} is outside its limit.`;
     return rules.some(({ times }) => times > WIDE_DISAGREEMENT)
