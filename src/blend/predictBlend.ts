@@ -6,7 +6,8 @@ import type { Recipe, Stock } from '../stock/stock';
 import { type BlendQuantity, blendQuantity } from './blendQuantity';
 import { blendValue } from './blendValue';
 import type { PredictedProperties, PredictedProperty, RuleSpread } from './predictedProperties';
-import type { PredictionOptions, PropertyAt } from './predictionOptions';
+import { type PredictionOptions, type PropertyAt, propertyAt } from './predictionOptions';
+import { stockValue } from './stockValue';
 
 export interface PredictOptions extends PredictionOptions {
   /** Properties to predict beside the usual ones. */
@@ -89,8 +90,22 @@ function predictOne(parts: readonly Part[], at: PropertyAt, options: PredictionO
       predictOne(parts, { property: 'kv', celsius: 100 }, options),
     );
   }
+  if (parts.length === 1) return ofOneStock(parts[0].stock, at, options);
   const stocks = parts.map((part) => part.stock);
   return mean(blendQuantity(stocks, at, options), parts);
+}
+
+/** A stock alone has its own figures: no weight, and so no density, is needed. */
+function ofOneStock(stock: Stock, { property, celsius }: PropertyAt, options: PredictionOptions): PredictedProperty {
+  const temperature = celsius ?? propertyDefinition(property, options.ownProperties)?.temperatures?.[0];
+  const found = stockValue(stock, propertyAt(property, temperature), options);
+  return {
+    ...propertyAt(property, temperature),
+    ...(found.state === 'known' ? { value: found.value } : {}),
+    unknownFrom: found.state === 'unknown' ? [stock.id] : [],
+    asTheRest: found.state === 'as the rest' ? [stock.id] : [],
+    estimatedFrom: found.state === 'known' && found.estimated ? [stock.id] : [],
+  };
 }
 
 /** The same viscosities, and the index that follows, under every rule: the spread hints at the model's own error. */

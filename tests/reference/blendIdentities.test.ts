@@ -95,3 +95,17 @@ describe('density', () => {
     published('ester', volumeFractions?.[1] ?? Number.NaN, 820 / (946 + 820), { relative: 1e-12 });
   });
 });
+
+test('one oil alone needs no density: its own figures are those of the mix (exact identity)', () => {
+  const figures = [
+    { property: 'kv', celsius: 40, value: 30.4, origin: 'measured' as const },
+    { property: 'kv', celsius: 100, value: 5.15, origin: 'measured' as const },
+    { property: 'pourPoint', value: -12, origin: 'measured' as const },
+  ];
+  const alone = { id: 'a', name: 'A', family: 'Group I' as const, pricePerTonne: 1, figures };
+  const { properties } = predictBlend([alone], [{ stockId: 'a', massFraction: 1 }]);
+  const value = (property: string, celsius?: number) =>
+    properties.find((entry) => entry.property === property && entry.celsius === celsius)?.value;
+  expect([value('kv', 40), value('kv', 100), value('pourPoint')]).toEqual([30.4, 5.15, -12]);
+  expect(value('density', 15)).toBeUndefined();
+});
