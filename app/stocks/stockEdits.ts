@@ -41,15 +41,6 @@ export function duplicateStock(id: string): number | undefined {
   return place + 1;
 }
 
-export function removeStock(id: string): void {
-  const gone = products().find((product) => product.id === id);
-  if (!gone) return;
-  editWorkbook(`removal of ${gone.name}`, (draft) => {
-    draft.products = draft.products.filter((product) => product.id !== id);
-  });
-  announce(`${gone.name} removed. Undo brings it back.`);
-}
-
 export function editProduct(id: string, label: string, change: (product: Product) => void, join?: string): void {
   editWorkbook(
     label,
