@@ -96,7 +96,7 @@ describe('density', () => {
   });
 });
 
-test('one oil alone needs no density: its own figures are those of the mix (exact identity)', () => {
+it('one oil alone needs no density: its own figures are those of the mix (exact identity)', () => {
   const figures = [
     { property: 'kv', celsius: 40, value: 30.4, origin: 'measured' as const },
     { property: 'kv', celsius: 100, value: 5.15, origin: 'measured' as const },
