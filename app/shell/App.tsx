@@ -1,3 +1,4 @@
+import { useRef } from 'react';
 import { AnswerPanel } from '../answer/AnswerPanel';
 import { OrderEditor } from '../order/OrderEditor';
 import { ErrorBoundary } from '../parts/ErrorBoundary';
@@ -11,23 +12,29 @@ import styles from './App.module.css';
 import { Footer } from './Footer';
 import { Header } from './Header';
 import { MessageLine } from './MessageLine';
+import { NoOrder } from './NoOrder';
 import { OrderList } from './OrderList';
 import { PageNav } from './PageNav';
+import { Purpose } from './Purpose';
+import { useOrderNaming } from './useOrderNaming';
 
 /** The sheet: orders, the order, its answer, and the stocks below. */
 export function App() {
   const orderId = useView((view) => view.orderId);
+  const orderPlace = useRef<HTMLDivElement>(null);
   useCommandKeys(keyedCommands);
+  useOrderNaming(orderPlace, orderId);
   return (
     <div className={styles.page}>
       <Header />
+      <Purpose />
       <MessageLine />
       <PageNav />
       <main className={styles.sheet}>
         <div className={styles.orders}>
           <OrderList orderId={orderId} />
         </div>
-        <div id="order" className={styles.order}>
+        <div id="order" ref={orderPlace} className={styles.order}>
           {orderId === undefined ? (
             <p className={styles.nothing}>Choose an order, or start a new one.</p>
           ) : (
@@ -38,7 +45,9 @@ export function App() {
         </div>
         <div id="answer" className={styles.answer}>
           <div className={styles.answerSheet}>
-            {orderId !== undefined && (
+            {orderId === undefined ? (
+              <NoOrder />
+            ) : (
               <ErrorBoundary key={orderId} what="The answer">
                 <AnswerPanel orderId={orderId} />
               </ErrorBoundary>

@@ -1,4 +1,5 @@
 import { useState } from 'react';
+import type { Workbook } from '../../src';
 import { IconButton } from '../parts/IconButton';
 import { TextField } from '../parts/TextField';
 import { useCommands } from '../state/commands';
@@ -12,11 +13,15 @@ import { SaveState } from './SaveState';
 import { ThemeButton } from './ThemeButton';
 import { WorkbookMenu } from './WorkbookMenu';
 
+type ImportShown = Imported & { fileName: string; workbook: Workbook };
+
 /** Whose figures these are, whether they are safe, and the way back. */
 export function Header() {
   const name = useWorkbook(({ workbook }) => workbook.name);
-  const [imported, setImported] = useState<Imported & { fileName: string }>();
+  const [imported, setImported] = useState<ImportShown>();
   const invented = useWorkbook(({ workbook }) => workbook.invented);
+  // "Undo brings the former workbook back" is true till the next change; a refusal stands till it is put away.
+  const importShown = useWorkbook(({ workbook }) => imported && (!imported.ok || imported.workbook === workbook));
   return (
     <header className={styles.header}>
       <h1 className={styles.brand}>
@@ -47,10 +52,10 @@ export function Header() {
       <div className={styles.tools}>
         <UndoButtons />
         <ThemeButton />
-        <WorkbookMenu onImported={setImported} />
+        <WorkbookMenu onImported={(result) => setImported({ ...result, workbook: useWorkbook.getState().workbook })} />
       </div>
       <SaveNotice />
-      <ImportNotice result={imported} onHide={() => setImported(undefined)} />
+      <ImportNotice result={importShown ? imported : undefined} onHide={() => setImported(undefined)} />
     </header>
   );
 }

@@ -1,6 +1,6 @@
 import { emptyOrder, type WorkbookOrder } from '../../src';
 import { environment } from './environment';
-import { selectOrder, tell, useView } from './viewStore';
+import { nameOrder, selectOrder, tell, useView } from './viewStore';
 import { editWorkbook, useWorkbook } from './workbookStore';
 
 const orders = () => useWorkbook.getState().workbook.orders;
@@ -19,6 +19,7 @@ function place(order: WorkbookOrder, at: number, label: string): void {
     draft.orders.splice(at, 0, order);
   });
   selectOrder(order.id);
+  nameOrder(order.id);
 }
 
 export function newOrder(): void {

@@ -55,7 +55,7 @@ async function lastWorkbook(storage: WorkbookStorage): Promise<Workbook> {
   }
   await offerSetAside(storage);
   if (loaded.kind === 'nothing') return freshDemo();
-  if (loaded.notes.length > 0) tell(loaded.notes.join(' '));
+  if (loaded.notes.length > 0) tell(loaded.notes.join(' '), { stays: true });
   return loaded.workbook;
 }
 

@@ -48,6 +48,8 @@ export const VIEW_FIELDS: Classified<ViewState> = {
   theme: OF_THIS_WINDOW,
   announcement: PASSING,
   message: PASSING,
+  messageStays: PASSING,
+  orderToName: PASSING,
 };
 
 /** Answers are worked out anew. */

@@ -2,7 +2,7 @@ import { produceWithPatches } from 'immer';
 import { create } from 'zustand';
 import { emptyWorkbook, type Workbook } from '../../src';
 import { applyChanges, changesNothing, type HistoryStep, joinSteps, pushStep } from './history';
-import { announce, tell } from './viewStore';
+import { announce, endMessage, tell } from './viewStore';
 
 export interface WorkbookState {
   workbook: Workbook;
@@ -49,6 +49,7 @@ export function editWorkbook(label: string, change: (draft: Workbook) => void, {
   const joined = join !== undefined && last?.join === join ? joinSteps(last, step) : undefined;
   const steps = joined ? pushStep(past.slice(0, -1), joined) : pushStep(past, step);
   useWorkbook.setState(withHistory(next, steps, []), true);
+  endMessage();
 }
 
 /** Ends a run of joined edits: the next one is a step of its own. A run that came back to its start leaves none. */
@@ -69,6 +70,7 @@ export function replaceWorkbook(workbook: Workbook, label: string): void {
     inverse: [{ op: 'replace', path: [], value: before }],
   };
   useWorkbook.setState(withHistory(workbook, pushStep(past, step), []), true);
+  endMessage();
 }
 
 /** What a step back or forward came to. The last message may speak of a state that is gone now: it goes too. */

@@ -1,5 +1,5 @@
 import { type ClipboardEvent, useCallback, useMemo, useRef, useState } from 'react';
-import type { Product } from '../../src';
+import type { Product, Workbook } from '../../src';
 import { Button } from '../parts/Button';
 import { Notice } from '../parts/Notice';
 import { Section } from '../parts/Section';
@@ -57,13 +57,15 @@ export function StocksTable() {
   const product = place && products[place.row];
   const column = place && columns[place.column];
 
-  const [said, setSaid] = useState<string>();
+  // "Undo takes it back" is true till the workbook changes again.
+  const [pasted, setPasted] = useState<{ words: string; workbook: Workbook }>();
+  const said = useWorkbook(({ workbook }) => (pasted?.workbook === workbook ? pasted.words : undefined));
 
   function takePaste(text: string) {
     const block = readBlock(text);
     if (block.length === 0) return;
     const words = pastedInWords(paste(planPaste(block, columns, place ?? { row: products.length, column: 0 })));
-    setSaid(words);
+    setPasted({ words, workbook: useWorkbook.getState().workbook });
     announce(words);
   }
 
@@ -111,7 +113,7 @@ export function StocksTable() {
     >
       {said && (
         <Notice className={styles.notice}>
-          {said} <Button onClick={() => setSaid(undefined)}>Hide</Button>
+          {said} <Button onClick={() => setPasted(undefined)}>Hide</Button>
         </Notice>
       )}
       {troubled.length > 0 && (

@@ -16,10 +16,16 @@ export interface Heading {
 const REMARK =
   /^((astm|iso|din|en|ip|d)\b.*\d.*|d ?\d+|coc|open cup|cleveland.*|neat|typical|typ\.?|measured|average)$/;
 
+/** Words between a name and its unit that say nothing: "Sulphur content in %". */
+const BETWEEN: ReadonlySet<string> = new Set(['content', 'in']);
+
 /** "KV @ 40 °C [mm²/s]" → "kv 40" and, in brackets, "mm²/s". A temperature belongs to the name, wherever it stands. */
 function takeApart(heading: string): { text: string; bracketed: string } {
   const units: string[] = [];
   const text = heading
+    // "FlashPoint" is two words; "Price€/t" and "Flash°F" end in a unit.
+    .replace(/(\p{Ll}\p{Ll})(?=\p{Lu}\p{Ll})/gu, '$1 ')
+    .replace(/(\p{L})(?=[\p{Sc}°º˚])/gu, '$1 ')
     .toLowerCase()
     .replace(/[º˚]/g, '°')
     .replace(/(\d)\s*°?\s*c\b/g, '$1')
@@ -57,7 +63,10 @@ export function readHeading(heading: string, columns: readonly Column[]): Headin
   const words = text.split(/[\s,;:_]+/).filter(Boolean);
   for (let named = words.length; named > 0; named -= 1) {
     const column = columnOfName(plain(words.slice(0, named).join(' ')), columns);
-    const after = words.slice(named).join(' ');
+    const after = words
+      .slice(named)
+      .filter((word) => !BETWEEN.has(word))
+      .join(' ');
     const found = column && !/^\d/.test(after) ? withUnit(column, after, bracketed, columns) : undefined;
     if (column) return found && { ...found, unit: asTyped(found.unit, heading) };
   }

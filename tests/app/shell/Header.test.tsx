@@ -118,6 +118,8 @@ describe('the workbook menu', () => {
     await user.upload(screen.getByLabelText('Workbook file to import'), file);
     expect(await screen.findByRole('status')).toHaveTextContent('stocks.json imported');
     expect(name()).toBe('From a file');
+    await user.click(screen.getByRole('button', { name: /^Undo/ }));
+    expect(screen.queryByText(/imported\./)).toBeNull();
   });
 
   it('refuses a file that is no workbook with the reason, and changes nothing', async () => {

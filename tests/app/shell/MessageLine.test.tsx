@@ -4,7 +4,7 @@ import { beforeEach, expect, it } from 'vitest';
 import { MessageLine } from '../../../app/shell/MessageLine';
 import { COMMANDS } from '../../../app/state/commands';
 import { tell } from '../../../app/state/viewStore';
-import { openWorkbook, undo, useWorkbook } from '../../../app/state/workbookStore';
+import { editWorkbook, openWorkbook, undo, useWorkbook } from '../../../app/state/workbookStore';
 import { emptyWorkbook } from '../../../src';
 import { resetStores, testEnvironment } from '../state/testEnvironment';
 
@@ -43,4 +43,23 @@ it('drops the offer of an undo once it is undone, and says where an undo failed'
   );
   act(undo);
   expect(line()).toHaveTextContent('“odd step” could not be undone; the workbook is as it was.');
+});
+
+const rename = (name: string) =>
+  editWorkbook('rename', (workbook) => {
+    workbook.name = name;
+  });
+
+it('drops the offer of an undo at the next change, which that undo would take back instead', () => {
+  act(() => COMMANDS.newEmptyWorkbook.run());
+  act(() => rename('New workbook'));
+  expect(line()).toHaveTextContent('Undo brings the former one back.');
+  act(() => rename('Spring'));
+  expect(line()).toBeEmptyDOMElement();
+});
+
+it('keeps through edits what it told of a workbook that could not be opened whole', () => {
+  act(() => tell('Two figures could not be kept.', { stays: true }));
+  act(() => rename('Spring'));
+  expect(line()).toHaveTextContent('Two figures could not be kept.');
 });

@@ -47,6 +47,18 @@ describe('headings with units', () => {
     ['BN [mg KOH/g]', 'baseNumber', 10],
     ['Max dose, % m/m', 'greatestDose', 10],
     ['VI', 'vi', 10],
+    ['Sulphur %', 'sulphur', 100_000],
+    ['Sulphur in %', 'sulphur', 100_000],
+    ['Total sulphur content %', 'sulphur', 100_000],
+    ['Zinc %', 'zinc', 100_000],
+    ['Price €/t', 'pricePerTonne', 10],
+    ['Price€/kg', 'pricePerTonne', 10_000],
+    ['Price in €/t', 'pricePerTonne', 10],
+    ['Flash °F', 'flashPoint', -12.2222222],
+    ['FlashPoint °F', 'flashPoint', -12.2222222],
+    ['Flash in °F', 'flashPoint', -12.2222222],
+    ['Density kg/m3', 'density@15', 10],
+    ['Density15 g/cm³', 'density@15', 10_000],
   ])('%s', (heading, column, ten) => {
     expect(taken(heading)).toEqual([column, ten]);
   });

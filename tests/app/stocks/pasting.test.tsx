@@ -2,7 +2,7 @@ import { act, fireEvent, render, screen } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { describe, expect, it } from 'vitest';
 import { useView } from '../../../app/state/viewStore';
-import { undo, useWorkbook } from '../../../app/state/workbookStore';
+import { redo, undo, useWorkbook } from '../../../app/state/workbookStore';
 import { StocksTable } from '../../../app/stocks/StocksTable';
 import type { Product } from '../../../src';
 import { cellAt, figureOnPage, inventedStock, kv, putStocksOnPage, stockOnPage } from './stocksOnPage';
@@ -188,5 +188,29 @@ describe('pasting into the table', () => {
     await user.paste('Nowhere Oils');
     await user.keyboard('{Enter}');
     expect(stockOnPage('a').supplier).toBe('Nowhere Oils');
+  });
+});
+
+describe('what is said of a paste', () => {
+  const pasteOne = () => pasteOn(cellAt(0, 'Stock'), block([['Heavy'], ['Light']]));
+
+  it('goes when the paste is taken back, and does not come again', () => {
+    setUp([inventedStock('a')]);
+    act(() => cellAt(0, 'Stock').focus());
+    pasteOne();
+    expect(screen.getByText(/1 stock added.*Undo takes it back/)).toBeVisible();
+    act(() => undo());
+    expect(screen.queryByText(/Undo takes it back/)).toBeNull();
+    act(() => redo());
+    expect(screen.queryByText(/Undo takes it back/)).toBeNull();
+  });
+
+  it('goes with the next edit, which an undo would take back instead', async () => {
+    setUp([inventedStock('a')]);
+    act(() => cellAt(0, 'Stock').focus());
+    pasteOne();
+    act(() => cellAt(0, 'Price').focus());
+    await userEvent.setup().keyboard('870{Enter}');
+    expect(screen.queryByText(/Undo takes it back/)).toBeNull();
   });
 });
