@@ -14,6 +14,8 @@ const MARKS: Partial<Record<NonNullable<CellView['state']>, { sign: string; word
   'in-blend': { sign: '•', words: 'in-blend value' },
 };
 
+const sameNameMark = (count: number) => ({ sign: `${count}×`, words: `${count} stocks have this name` });
+
 /** One cell of the table: its figure with its standing, or the field it is typed in. */
 export function StockCell({
   product,
@@ -23,6 +25,7 @@ export function StockCell({
   tabbable,
   editing,
   missing,
+  sameName,
   isLow,
   grid,
 }: {
@@ -34,6 +37,8 @@ export function StockCell({
   editing: Editing | undefined;
   /** Why the order on screen cannot use the stock, where this cell would help. */
   missing: string | undefined;
+  /** How many stocks bear this name, where it is not the only one. */
+  sameName: number | undefined;
   /** Messages go above the cells of the last rows. */
   isLow: boolean;
   grid: GridActions;
@@ -46,7 +51,7 @@ export function StockCell({
   const isHead = column.id === 'name';
   const Cell = isHead ? 'th' : 'td';
   const Editor = column.choices ? ChoiceEditor : CellEditor;
-  const mark = view.state && MARKS[view.state];
+  const mark = sameName ? sameNameMark(sameName) : view.state && MARKS[view.state];
   return (
     <Cell
       scope={isHead ? 'row' : undefined}
@@ -56,7 +61,7 @@ export function StockCell({
       aria-readonly={!column.write || column.locked?.(product) ? true : undefined}
       aria-invalid={view.problem ? true : undefined}
       aria-describedby={said && chosen ? `${id}-said` : undefined}
-      title={sentences(said, view.title, column.locked?.(product))}
+      title={sentences(said, view.title, sameName === undefined ? undefined : mark?.words, column.locked?.(product))}
       className={classNames(
         styles.cell,
         styles[column.kind],

@@ -19,6 +19,8 @@ export interface StockRowProps {
   excluded: boolean;
   /** By column: why the order on screen cannot use the stock. */
   missing: ReadonlyMap<string, string> | undefined;
+  /** How many stocks bear this one's name, where it is not the only one. */
+  sameName: number | undefined;
   /** The chosen cell's column, where it is in this row. */
   chosen: number | undefined;
   /** The column that the Tab key reaches, where it is in this row. */
@@ -73,6 +75,7 @@ export const StockRow = memo(function StockRow(props: StockRowProps) {
             tabbable={tabbable === place}
             editing={isChosen ? editing : undefined}
             missing={missing?.get(column.id)}
+            sameName={column.id === 'name' ? props.sameName : undefined}
             isLow={isLow}
             grid={grid}
           />

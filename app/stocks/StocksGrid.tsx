@@ -18,6 +18,8 @@ export interface StocksGridProps {
   excluded: ReadonlySet<string>;
   /** By stock and column: what the answer lacks there. */
   missing: ReadonlyMap<string, ReadonlyMap<string, string>>;
+  /** By stock: how many bear its name, where it is not the only one. */
+  sameNames: ReadonlyMap<string, number>;
   place: Place | undefined;
   editing: Editing | undefined;
   grid: GridActions;
@@ -70,6 +72,7 @@ export function StocksGrid(props: StocksGridProps) {
             share={shares.get(product.id)}
             excluded={excluded.has(product.id)}
             missing={missing.get(product.id)}
+            sameName={props.sameNames.get(product.id)}
             chosen={place?.row === row ? place.column : undefined}
             tabbable={reached.row === row ? reached.column : undefined}
             editing={place?.row === row ? editing : undefined}

@@ -8,6 +8,7 @@ import { announce, useView } from '../state/viewStore';
 import { useWorkbook } from '../state/workbookStore';
 import { EmptyStocks } from './EmptyStocks';
 import type { Place } from './gridKeys';
+import { namesakes } from './namesakes';
 import { isBlock, readBlock } from './pastedBlock';
 import { pastedInWords } from './pastedInWords';
 import { paste } from './pasteStocks';
@@ -45,6 +46,7 @@ export function StocksTable() {
   const excludedIds = order?.excludedProductIds;
   const excluded = useMemo(() => (excludedIds ? new Set(excludedIds) : NONE), [excludedIds]);
   const missing = useAnswerMarks(products, columns, answer);
+  const sameNames = useMemo(() => namesakes(products), [products]);
   const troubled = useMemo(() => troubledCells(products, columns), [products, columns]);
 
   const onUse = useCallback(
@@ -140,6 +142,7 @@ export function StocksTable() {
             shares={shares}
             excluded={excluded}
             missing={missing}
+            sameNames={sameNames}
             place={place}
             editing={grid.editing}
             grid={grid.actions}

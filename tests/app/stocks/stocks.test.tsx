@@ -68,6 +68,21 @@ describe('the table of stocks', () => {
     expect(screen.getByRole('checkbox', { name: 'Use Stock a in this order' })).toHaveFocus();
   });
 
+  it('marks quietly the stocks that share a name, and no others', async () => {
+    const user = setUp([
+      inventedStock('a', { name: 'SN 500' }),
+      inventedStock('b', { name: 'sn  500 ' }),
+      inventedStock('c', { name: 'SN 150' }),
+    ]);
+    for (const row of [0, 1]) expect(cellAt(row, 'Stock')).toHaveAttribute('title', '2 stocks have this name');
+    expect(cellAt(0, 'Stock')).toHaveTextContent('2 stocks have this name');
+    expect(cellAt(0, 'Stock')).toBeValid();
+    expect(cellAt(2, 'Stock')).not.toHaveTextContent('have this name');
+    act(() => cellAt(1, 'Stock').focus());
+    await user.keyboard('SN 600{Enter}');
+    expect(cellAt(0, 'Stock')).toHaveTextContent(/^SN 500$/);
+  });
+
   it('can be scrolled by keys', () => {
     setUp();
     expect(screen.getByRole('region', { name: 'Table of stocks' })).toHaveAttribute('tabindex', '0');
