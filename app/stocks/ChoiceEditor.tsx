@@ -95,7 +95,7 @@ export function ChoiceEditor({
         onKeyDown={onKeyDown}
         onBlur={onBlur}
       />
-      <span id={`${id}-words`} role="status" className={styles.choice} data-refused={refused || undefined}>
+      <span id={`${id}-words`} role="status" className={styles.taken} data-refused={refused || undefined}>
         {words}
       </span>
     </>
