@@ -15,7 +15,6 @@ import { MessageLine } from './MessageLine';
 import { NoOrder } from './NoOrder';
 import { OrderList } from './OrderList';
 import { PageNav } from './PageNav';
-import { Purpose } from './Purpose';
 import { useOrderNaming } from './useOrderNaming';
 
 /** The sheet: orders, the order, its answer, and the stocks below. */
@@ -27,7 +26,6 @@ export function App() {
   return (
     <div className={styles.page}>
       <Header />
-      <Purpose />
       <MessageLine />
       <PageNav />
       <main className={styles.sheet}>

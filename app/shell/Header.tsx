@@ -8,6 +8,7 @@ import { editWorkbook, useWorkbook } from '../state/workbookStore';
 import styles from './Header.module.css';
 import { ImportNotice } from './ImportNotice';
 import { Mark } from './Mark';
+import { Purpose } from './Purpose';
 import { SaveNotice } from './SaveNotice';
 import { SaveState } from './SaveState';
 import { ThemeButton } from './ThemeButton';
@@ -54,6 +55,7 @@ export function Header() {
         <ThemeButton />
         <WorkbookMenu onImported={(result) => setImported({ ...result, workbook: useWorkbook.getState().workbook })} />
       </div>
+      <Purpose />
       <SaveNotice />
       <ImportNotice result={importShown ? imported : undefined} onHide={() => setImported(undefined)} />
     </header>

@@ -1,5 +1,5 @@
 import { useWorkbook } from '../state/workbookStore';
-import styles from './App.module.css';
+import styles from './Header.module.css';
 
 export const PURPOSE =
   "Finds the cheapest blend of your base stocks that meets an order's limits, and proves it. Nothing leaves this computer.";
