@@ -32,7 +32,7 @@ export function KeptOut({ order }: { order: WorkbookOrder }) {
             label="Keep a product out"
             hideLabel
             value=""
-            placeholder={out.length ? 'and …' : 'keep a product out …'}
+            placeholder={out.length ? 'and …' : 'choose …'}
             options={used.map(({ id, name }) => ({ value: id, label: name }))}
             onChange={(id) =>
               editOrder(order.id, 'keep a product out', ({ excludedProductIds }) => excludedProductIds.push(id))
