@@ -6,6 +6,8 @@
 export { type PredictOptions, predictBlend } from './blend/predictBlend';
 export type { PredictedProperties, PredictedProperty, RuleSpread } from './blend/predictedProperties';
 export type { PredictionOptions, PropertyAt } from './blend/predictionOptions';
+export { createEngine } from './optimise/defaultEngine';
+export { createCompactEngine } from './optimise/linear/compact/compactEngine';
 export { createHighsEngine, type HighsLoading } from './optimise/linear/highsEngine';
 export { createJavascriptEngine } from './optimise/linear/javascriptEngine';
 export type { LinearEngine } from './optimise/linear/linearEngine';

@@ -1,5 +1,5 @@
 import wasmUrl from 'highs/runtime?url';
-import { createHighsEngine, reusingSessions } from '../../src';
+import { createEngine, reusingSessions } from '../../src';
 import { serveInWorker } from './workerScope';
 
-serveInWorker(async () => reusingSessions(await createHighsEngine({ locateFile: () => wasmUrl })));
+serveInWorker(async () => reusingSessions(await createEngine({ locateFile: () => wasmUrl })));

@@ -2,12 +2,12 @@
  * A limit moved a little, as in a drag: the solve on a kept session, from the last recipe's KV100, against a solve from
  * nothing, in one run. Orders as in solve.bench.ts; the viscosity index moves by a tenth to and fro.
  */
-import { createHighsEngine, type Order, reusingSessions, solveBlend } from '../../src/index';
+import { createEngine, type Order, reusingSessions, solveBlend } from '../../src/index';
 import { CONTINUOUS, randomOrder } from '../oracle/randomOrder';
 import { median, printTable } from './figures';
 
 const WANTED = 40;
-const engine = await createHighsEngine();
+const engine = await createEngine();
 const now = () => performance.now();
 
 function moved(order: Order, step: number): Order {

@@ -1,9 +1,9 @@
 /** Memory over 5 000 solves on one engine: it must not grow. Printed every 1 000. */
-import { createHighsEngine, solveBlend } from '../../src/index';
+import { createEngine, solveBlend } from '../../src/index';
 import { CONTINUOUS, DISCRETE, randomOrder } from '../oracle/randomOrder';
 import { printTable } from './figures';
 
-const engine = await createHighsEngine();
+const engine = await createEngine();
 const now = () => performance.now();
 const collect = (globalThis as { gc?: () => void }).gc;
 const megabytes = (bytes: number) => (bytes / 1e6).toFixed(1);

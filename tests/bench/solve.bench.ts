@@ -2,14 +2,15 @@
  * A proven solve against one cold HiGHS LP of the same order (create + run, presolve off), in one run: orders with the
  * viscosity index on its limit and a root gap above 1e-5, no discrete rules. Seeded; see tests/oracle/randomOrder.ts.
  */
-import { createHighsEngine, type Order, solveBlend } from '../../src/index';
+import { createCompactEngine, createHighsEngine, type Order, solveBlend } from '../../src/index';
 import { CONTINUOUS, randomOrder } from '../oracle/randomOrder';
 import { median, printTable, quantile, timed } from './figures';
 import { recording } from './rootProgram';
 
 const WANTED = 60;
-const engine = await createHighsEngine();
-const recorder = recording(engine);
+const highs = await createHighsEngine();
+const engine = createCompactEngine(highs);
+const recorder = recording(highs);
 const now = () => performance.now();
 
 async function isHardEnough(order: Order): Promise<boolean> {
@@ -44,7 +45,7 @@ for (const size of [12, 30, 80, 200]) {
     if (!root) continue;
     cold.push(
       timed(7, () => {
-        const session = engine.open(root.program);
+        const session = highs.open(root.program);
         session.solve();
         session.dispose();
       }),

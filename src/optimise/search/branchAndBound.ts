@@ -167,9 +167,9 @@ export class BranchAndBound {
   }
 
   /** Closes a part without a solve where prices found near the best recipe already bound it far enough. */
-  #isClosedByPrices(node: SearchNode, { lower, upper }: Box): boolean {
+  #isClosedByPrices(node: SearchNode, box: Box): boolean {
     for (const prices of this.#finder.prices) {
-      const bound = this.#program.shadowBound(prices, this.#offsetAbove(prices, node), lower, upper);
+      const bound = this.#program.shadowBound(prices, this.#offsetAbove(prices, node), box);
       node.bound = Math.max(node.bound, bound);
       if (this.#isClosed(node)) return true;
     }

@@ -2,7 +2,7 @@ import type { LinearEngine, LinearProgram, LinearResult, LinearRow, LinearSessio
 import type { SearchModel, ViLimits } from '../rows/searchModel';
 import type { Box } from './box';
 import { type Certificate, neededBounds } from './certificate';
-import { type ExtraTerms, priceOut, safeBound } from './safeBound';
+import { boundOverBox, type PricedRows, type PulledSums, priceRows, withSums } from './safeBound';
 import type { Line } from './viLine';
 import { viScales } from './viScales';
 
@@ -21,7 +21,7 @@ export interface ViRows {
  * the interval of KV100 folded into the slope.
  */
 export interface ShadowPrices {
-  multipliers: Float64Array;
+  priced: PricedRows;
   line?: { price: number; slope: number };
 }
 
@@ -176,12 +176,12 @@ export class SearchProgram {
     return this.#session.solve();
   }
 
-  /** What the dynamic rows pull on each stock under the multipliers of a solve. */
-  #extra(multipliers: Float64Array, scale: number): ExtraTerms | undefined {
+  /** What the dynamic rows pull on the stocks under the multipliers of a solve. */
+  #pulled(multipliers: Float64Array, scale: number): PulledSums | undefined {
     const { vi } = this.model;
     if (!vi) return undefined;
-    const sums = [0, 0, 0];
-    const sizes = [0, 0, 0];
+    const sums: [number, number, number] = [0, 0, 0];
+    const sizes: [number, number, number] = [0, 0, 0];
     for (let row = 0; row < DYNAMIC_ROWS; row++) {
       const multiplier = multipliers[this.#staticRows + 1 + SUMS + row] * scale;
       const lowerSide = row === 0 || row === 2;
@@ -193,25 +193,13 @@ export class SearchProgram {
         sizes[sum] += Math.abs(pull);
       }
     }
-    return this.#spread(vi, sums, sizes);
-  }
-
-  /** Pulls on the three sums, spread over the stocks that make them up. */
-  #spread(vi: ViLimits, sums: readonly number[], sizes: readonly number[]): ExtraTerms {
-    const pull = new Float64Array(this.#columns);
-    const magnitude = new Float64Array(this.#columns);
-    for (let i = 0; i < vi.weights.length; i++) {
-      pull[i] = vi.weights[i] * (sums[0] + sums[1] * vi.index100[i] + sums[2] * vi.index40[i]);
-      magnitude[i] =
-        vi.weights[i] * (sizes[0] + sizes[1] * Math.abs(vi.index100[i]) + sizes[2] * Math.abs(vi.index40[i]));
-    }
-    return { pull, magnitude };
+    return { weights: vi.weights, index100: vi.index100, index40: vi.index40, sums, sizes };
   }
 
   /** The prices a solve puts on the rows, and on the viscosity index as one line, to bound other parts without a solve. */
   pricesOf(duals: Float64Array): ShadowPrices {
     const scale = 1 / this.#costScale;
-    const multipliers = duals.slice(0, this.#staticRows).map((dual) => dual * scale);
+    const priced = priceRows(this.model.cost, this.model.rows, this.#ofRows(duals, scale));
     const kept: readonly (-1 | 1)[] = [1, -1, 1, -1, -1];
     let steepness = 0;
     let price = 0;
@@ -221,29 +209,30 @@ export class SearchProgram {
       steepness += multiplier * this.#coefficients[row * SUMS + 1];
       price -= multiplier * this.#coefficients[row * SUMS + 2];
     }
-    return price > 0 ? { multipliers, line: { price, slope: steepness / price } } : { multipliers };
+    return price > 0 ? { priced, line: { price, slope: steepness / price } } : { priced };
   }
 
   /**
    * Proven lower bound of the cost in a box, from prices found elsewhere: the viscosity index is held by the line of
    * the prices' slope at the given offset, which must lie above the curve over the part in question.
    */
-  shadowBound({ multipliers, line }: ShadowPrices, offset: number, lower: Float64Array, upper: Float64Array): number {
-    const { model } = this;
-    const program = { cost: model.cost, lower, upper, rows: model.rows };
-    if (!model.vi || !line) return safeBound(program, multipliers);
-    const sums = [line.price * offset, line.price * line.slope, -line.price];
-    return safeBound(program, multipliers, this.#spread(model.vi, sums, sums.map(Math.abs)));
+  shadowBound({ priced, line }: ShadowPrices, offset: number, { lower, upper }: Box): number {
+    const { vi } = this.model;
+    if (!vi || !line) return boundOverBox(priced, lower, upper);
+    const { weights, index100, index40 } = vi;
+    const sums = [line.price * offset, line.price * line.slope, -line.price] as const;
+    const sizes = [Math.abs(sums[0]), Math.abs(sums[1]), Math.abs(sums[2])] as const;
+    return boundOverBox(withSums(priced, { weights, index100, index40, sums, sizes }), lower, upper);
   }
 
   /** Proven lower bound of the cost at the present bounds and lines, from the duals of a solve. */
   boundOf(duals: Float64Array): number {
-    return this.#priceOut(duals).bound;
+    return boundOverBox(this.#priceOut(this.model.cost, duals, 1 / this.#costScale), this.lower, this.upper);
   }
 
   /** True for columns that sit on a bound and would change nothing in the cost if they moved. */
   idleColumns(values: Float64Array, duals: Float64Array): boolean[] {
-    const { reduced } = this.#priceOut(duals);
+    const { reduced } = this.#priceOut(this.model.cost, duals, 1 / this.#costScale);
     const { lower, upper } = this;
     return this.model.stocks.map((_, j) => {
       const onBound = values[j] <= lower[j] + 1e-9 || values[j] >= upper[j] - 1e-9;
@@ -251,27 +240,32 @@ export class SearchProgram {
     });
   }
 
-  #priceOut(duals: Float64Array) {
-    const scale = 1 / this.#costScale;
-    const multipliers = duals.subarray(0, this.#staticRows).map((dual) => dual * scale);
-    const { model, lower, upper } = this;
-    return priceOut({ cost: model.cost, lower, upper, rows: model.rows }, multipliers, this.#extra(duals, scale));
+  #ofRows(duals: Float64Array, scale: number): Float64Array {
+    const multipliers = new Float64Array(this.#staticRows);
+    for (let row = 0; row < this.#staticRows; row++) multipliers[row] = duals[row] * scale;
+    return multipliers;
+  }
+
+  /** Prices all rows out of a cost: static ones and the present lines. */
+  #priceOut(cost: Float64Array, duals: Float64Array, scale: number): PricedRows {
+    const priced = priceRows(cost, this.model.rows, this.#ofRows(duals, scale));
+    const pulled = this.#pulled(duals, scale);
+    return pulled ? withSums(priced, pulled) : priced;
   }
 
   /** Whether a ray proves that nothing meets the rows at the present bounds and lines, and what the proof leans on. */
   certifies(ray: Float64Array): Certificate {
     const { model, lower, upper } = this;
-    const cost = new Float64Array(this.#columns);
+    const nothing = new Float64Array(this.#columns);
     for (const sign of [1, -1]) {
       const turned = ray.map((value) => sign * value);
-      const multipliers = turned.subarray(0, this.#staticRows);
-      const program = { cost, lower, upper, rows: model.rows };
-      const { bound, reduced } = priceOut(program, multipliers, this.#extra(turned, 1));
+      const priced = this.#priceOut(nothing, turned, 1);
+      const bound = boundOverBox(priced, lower, upper);
       if (!(bound > 0)) continue;
-      const rows = [...multipliers.keys()].filter((row) => multipliers[row] !== 0);
+      const rows = model.rows.flatMap((_, row) => (turned[row] !== 0 ? [row] : []));
       const lines = [2, 3, 4].map((row) => turned[this.#staticRows + 1 + SUMS + row]);
       const usesVi = model.vi !== undefined && lines.some((dual) => dual !== 0);
-      return { proven: true, rows, usesVi, bounds: neededBounds(bound, reduced, model) };
+      return { proven: true, rows, usesVi, bounds: neededBounds(bound, priced.reduced, model) };
     }
     return { proven: false, rows: [], usesVi: false, bounds: [] };
   }

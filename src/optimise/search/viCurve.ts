@@ -28,6 +28,8 @@ const GREATEST_CONVEXITY = 1e3;
  */
 export class ViCurve {
   readonly #whole: CurvePart[] = [];
+  /** Outlines of the intervals asked for last, newest first: a part of the search asks several times. */
+  readonly #outlines: { from: number; to: number; outline: Outline }[] = [];
 
   constructor(
     readonly index: BlendingIndex,
@@ -83,6 +85,15 @@ export class ViCurve {
       start = end;
     }
   }
+
+  /** What bounds the curve from above over KV100 from `from` to `to` [mm²/s]. */
+  outline(from: number, to: number): Outline {
+    for (const known of this.#outlines) if (known.from === from && known.to === to) return known.outline;
+    const outline = outlineOf(this.parts(from, to));
+    this.#outlines.unshift({ from, to, outline });
+    if (this.#outlines.length > MOST_OUTLINES) this.#outlines.pop();
+    return outline;
+  }
 }
 
 /**
@@ -119,11 +130,48 @@ export function lowerPoints(parts: readonly CurvePart[]): CurvePoint[] {
   });
 }
 
+/** The upper hull of points that lie in order of u: a line above it is above all of them. */
+function upperHull(points: readonly CurvePoint[]): CurvePoint[] {
+  const hull: CurvePoint[] = [];
+  for (const point of points) {
+    while (hull.length > 0 && hull[hull.length - 1].u === point.u && hull[hull.length - 1].g <= point.g) hull.pop();
+    while (hull.length > 1) {
+      const a = hull[hull.length - 2];
+      const b = hull[hull.length - 1];
+      if ((b.g - a.g) * (point.u - a.u) > (point.g - a.g) * (b.u - a.u)) break;
+      hull.pop();
+    }
+    const last = hull[hull.length - 1];
+    if (!last || last.u < point.u) hull.push(point);
+  }
+  return hull;
+}
+
+/** The upper hull of a stretch of the curve, and the least and greatest slope the curve has there. */
+export interface Outline {
+  hull: readonly CurvePoint[];
+  leastSlope: number;
+  greatestSlope: number;
+}
+
+function outlineOf(parts: readonly CurvePart[]): Outline {
+  let leastSlope = Infinity;
+  let greatestSlope = -Infinity;
+  for (const { from, to } of parts) {
+    leastSlope = Math.min(leastSlope, from.slope, to.slope);
+    greatestSlope = Math.max(greatestSlope, from.slope, to.slope);
+  }
+  return { hull: upperHull(upperPoints(parts)), leastSlope, greatestSlope };
+}
+
+const MOST_OUTLINES = 12;
 const MOST_CURVES = 64;
 const curves = new Map<BlendingIndex, Map<number, ViCurve>>();
+let latest: ViCurve | undefined;
 
 /** The curve of a viscosity index under a blending index; the last ones used are kept. */
 export function viCurve(index: BlendingIndex, vi: number): ViCurve {
+  if (latest?.index === index && latest.vi === vi) return latest;
   const known = curves.get(index) ?? new Map<number, ViCurve>();
   curves.set(index, known);
   const found = known.get(vi) ?? new ViCurve(index, vi);
@@ -131,5 +179,6 @@ export function viCurve(index: BlendingIndex, vi: number): ViCurve {
   known.set(vi, found);
   if (known.size > MOST_CURVES)
     for (const oldest of [...known.keys()].slice(0, known.size - MOST_CURVES)) known.delete(oldest);
+  latest = found;
   return found;
 }

@@ -1,4 +1,4 @@
-import { type CurvePart, type CurvePoint, lowerPoints, upperPoints, type ViCurve } from './viCurve';
+import { type CurvePoint, lowerPoints, type ViCurve } from './viCurve';
 import { knot, pieceOf } from './viPieces';
 
 /** A line g = offset + slope·u in the plane of the blending index. */
@@ -27,31 +27,13 @@ function lineBelow(points: readonly CurvePoint[], slope: number): Line {
   return { offset: offset - allowance(offset), slope };
 }
 
-/** Slope of the line through the first point that has all others below it; -Infinity where there is but one. */
-function slopeFromFirst(points: readonly CurvePoint[]): number {
-  const [first] = points;
-  let slope = -Infinity;
-  for (const { u, g } of points) if (u > first.u) slope = Math.max(slope, (g - first.g) / (u - first.u));
-  return slope;
-}
-
-/** Slope of the line through the last point that has all others below it; Infinity where there is but one. */
-function slopeToLast(points: readonly CurvePoint[]): number {
-  const last = points[points.length - 1];
-  let slope = Infinity;
-  for (const { u, g } of points) if (u < last.u) slope = Math.min(slope, (last.g - g) / (last.u - u));
-  return slope;
-}
-
 /** No line may be steeper or flatter than the curve is anywhere: differences of close points are mostly rounding. */
-function withinSlopes(parts: readonly CurvePart[], slope: number): number {
-  let min = Infinity;
-  let max = -Infinity;
-  for (const { from, to } of parts) {
-    min = Math.min(min, from.slope, to.slope);
-    max = Math.max(max, from.slope, to.slope);
-  }
-  return Math.min(max, Math.max(min, slope));
+function between(least: number, greatest: number, slope: number): number {
+  return Math.min(greatest, Math.max(least, slope));
+}
+
+function slopeBetween(a: CurvePoint, b: CurvePoint): number {
+  return (b.g - a.g) / (b.u - a.u);
 }
 
 /**
@@ -59,17 +41,19 @@ function withinSlopes(parts: readonly CurvePart[], slope: number): number {
  * with at least the viscosity index lies under both.
  */
 export function outerLines(curve: ViCurve, from: number, to: number): [Line, Line] {
-  const parts = curve.parts(from, to);
-  const points = upperPoints(parts);
+  const { hull, leastSlope, greatestSlope } = curve.outline(from, to);
+  const last = hull.length - 1;
+  const first = last > 0 ? slopeBetween(hull[0], hull[1]) : leastSlope;
+  const final = last > 0 ? slopeBetween(hull[last - 1], hull[last]) : greatestSlope;
   return [
-    lineAbove(points, withinSlopes(parts, slopeFromFirst(points))),
-    lineAbove(points, withinSlopes(parts, slopeToLast(points))),
+    lineAbove(hull, between(leastSlope, greatestSlope, first)),
+    lineAbove(hull, between(leastSlope, greatestSlope, final)),
   ];
 }
 
 /** Offset of the lowest line of a slope that lies above the curve over an interval. */
 export function offsetAbove(curve: ViCurve, from: number, to: number, slope: number): number {
-  return lineAbove(upperPoints(curve.parts(from, to)), slope).offset;
+  return lineAbove(curve.outline(from, to).hull, slope).offset;
 }
 
 /** A line below the curve over an interval, its chord where the curve is concave: the outer line of "VI at most". */
@@ -78,8 +62,9 @@ export function lowerLine(curve: ViCurve, from: number, to: number): Line {
   const points = lowerPoints(parts);
   const first = points[0];
   const last = points[points.length - 1];
-  const slope = last.u > first.u ? (last.g - first.g) / (last.u - first.u) : parts[0].from.slope;
-  return lineBelow(points, withinSlopes(parts, slope));
+  const { leastSlope, greatestSlope } = curve.outline(from, to);
+  const slope = last.u > first.u ? slopeBetween(first, last) : parts[0].from.slope;
+  return lineBelow(points, between(leastSlope, greatestSlope, slope));
 }
 
 /** The chord of the curve inside the piece of `from`: under it a recipe surely has the index where G is concave. */

@@ -3,7 +3,7 @@ import { describe, expect, test } from 'vitest';
 import { demoWorkbook } from '../../../app/demo/demoWorkbook';
 import type { FromWorker, ToWorker } from '../../../app/worker/protocol';
 import { channelPause, serveSolves } from '../../../app/worker/serveSolves';
-import { createHighsEngine, type Order, toOrder } from '../../../src';
+import { createEngine, type Order, toOrder } from '../../../src';
 
 function demoOrder(): Order {
   const workbook = demoWorkbook();
@@ -13,7 +13,7 @@ function demoOrder(): Order {
 }
 
 /** Serves solves as a worker does, and waits for what it says. */
-function serve(loadEngine: () => ReturnType<typeof createHighsEngine> = createHighsEngine) {
+function serve(loadEngine: () => ReturnType<typeof createEngine> = createEngine) {
   const said: FromWorker[] = [];
   const waiting: { wanted: (message: FromWorker) => boolean; resolve: (message: FromWorker) => void }[] = [];
   const take = serveSolves({

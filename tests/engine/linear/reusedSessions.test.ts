@@ -1,11 +1,11 @@
 import { expect, test } from 'vitest';
-import { type BlendOutcome, createHighsEngine, type Order, reusingSessions, solveBlend } from '../../../src/index';
+import { type BlendOutcome, createEngine, type Order, reusingSessions, solveBlend } from '../../../src/index';
 import { Draw } from '../../oracle/mulberry32';
 import { CONTINUOUS, DISCRETE, randomOrder } from '../../oracle/randomOrder';
 import { type LinearEngine, spoiled } from '../optimum/faultyEngines';
 import { seeds } from '../optimum/judge';
 
-const highs = await createHighsEngine();
+const highs = await createEngine();
 
 /** Two searches to a gap of 1e-6 may differ by this part of the cost. */
 const TWO_GAPS = 2e-6;

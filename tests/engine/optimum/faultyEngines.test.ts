@@ -1,12 +1,12 @@
 import { expect, test } from 'vitest';
-import { createHighsEngine, solveBlend } from '../../../src/index';
+import { createEngine, solveBlend } from '../../../src/index';
 import { CONTINUOUS, randomOrder } from '../../oracle/randomOrder';
 import { sliceSearch } from '../../oracle/sliceSearch';
 import { worstViolation } from '../../oracle/violation';
 import { careless, forgetful, type LinearEngine, liar, spoiled } from './faultyEngines';
 import { caseOf, disagreements, seeds } from './judge';
 
-const highs = await createHighsEngine();
+const highs = await createEngine();
 
 /** Orders whose viscosity index is limited and can be met. */
 const solvable = seeds(16, 7001).flatMap((seed) => {

@@ -4,8 +4,8 @@ import { type Case, disagreements, type Solve } from './judge';
 /** The engine as it is loaded now, mocked modules included. */
 export async function loadedEngine(): Promise<Solve> {
   vi.resetModules();
-  const { createHighsEngine, solveBlend } = await import('../../../src/index');
-  const linearEngine = await createHighsEngine();
+  const { createEngine, solveBlend } = await import('../../../src/index');
+  const linearEngine = await createEngine();
   return (order) => solveBlend(order, { linearEngine, timeLimitMs: 2000 });
 }
 

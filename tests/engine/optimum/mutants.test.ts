@@ -44,8 +44,8 @@ afterEach(() => {
 /** What the judge finds wrong with the engine as it is loaded now, mistakes included. */
 async function verdict(forget = false): Promise<string[]> {
   vi.resetModules();
-  const { createHighsEngine, solveBlend } = await import('../../../src/index');
-  const highs = await createHighsEngine();
+  const { createEngine, solveBlend } = await import('../../../src/index');
+  const highs = await createEngine();
   const linearEngine = forget ? forgetful(highs) : highs;
   return disagreements((order) => solveBlend(order, { linearEngine, timeLimitMs: 2000 }), cases);
 }

@@ -7,6 +7,9 @@ import { primalSimplex } from './primalSimplex';
 const MOST_ENTRIES = 60_000;
 /** Exchanges after which the dictionary is made anew. */
 const MOST_EXCHANGES = 60;
+/** More changed rows than this, or longer ones, are not taken in one by one. */
+const MOST_CHANGED_ROWS = 8;
+const MOST_CHANGED_COLUMNS = 4;
 /** A solution that misses a row by more than this has lost its digits. */
 const TRUSTED = 100 * FEASIBLE;
 
@@ -14,7 +17,8 @@ class CompactProgram {
   readonly #dictionary: Dictionary;
   readonly #reserve: LinearEngine;
   readonly #program: LinearProgram;
-  #isStale = false;
+  /** Rows with changed coefficients. */
+  readonly #changed = new Set<number>();
 
   constructor(program: LinearProgram, reserve: LinearEngine) {
     this.#program = program;
@@ -38,23 +42,33 @@ class CompactProgram {
   setCoefficient(row: number, column: number, value: number): void {
     const { matrix, columns } = this.#dictionary;
     matrix[row * columns + column] = value;
-    this.#isStale = true;
+    this.#changed.add(row);
   }
 
   forget(): void {
     this.#dictionary.reset();
-    this.#isStale = false;
+    this.#changed.clear();
   }
 
   solve(): LinearResult {
     const dictionary = this.#dictionary;
-    if (this.#isStale || dictionary.exchanges > MOST_EXCHANGES) dictionary.rebuild();
-    this.#isStale = false;
+    if (dictionary.exchanges > MOST_EXCHANGES || !this.#takeChanges()) dictionary.rebuild();
+    this.#changed.clear();
     const result = this.#run();
     if (result.status !== 'unknown') return result;
     dictionary.reset();
     const cold = this.#run();
     return cold.status === 'unknown' ? this.#askReserve() : cold;
+  }
+
+  /** Takes changed rows into the dictionary where they are few and short; false where it must be made anew. */
+  #takeChanges(): boolean {
+    if (this.#changed.size > MOST_CHANGED_ROWS) return false;
+    for (const row of this.#changed) {
+      const { columns } = this.#program.rows[row];
+      if (columns.length > MOST_CHANGED_COLUMNS || !this.#dictionary.replaceRow(row, columns)) return false;
+    }
+    return true;
   }
 
   #run(): LinearResult {
@@ -164,8 +178,6 @@ export function createCompactEngine(reserve: LinearEngine): LinearEngine {
   return {
     name: `compact, ${reserve.name} in reserve`,
     open: (program) =>
-      program.cost.length * program.rows.length > MOST_ENTRIES
-        ? reserve.open(program)
-        : openSession(program, reserve),
+      program.cost.length * program.rows.length > MOST_ENTRIES ? reserve.open(program) : openSession(program, reserve),
   };
 }

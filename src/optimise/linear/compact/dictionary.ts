@@ -1,5 +1,8 @@
 import type { LinearProgram } from '../linearEngine';
 
+/** A changed row keeps its place in the basis where it still leans on itself by this much; unchanged it does by 1. */
+const LEAST_KEPT = 0.01;
+
 /**
  * A linear program as a dense dictionary: every basic variable as a sum over the nonbasic ones. Variables are the
  * program's columns (0 to columns - 1), then one a row, its activity. Nonbasic variables sit on a bound; free ones at 0.
@@ -23,6 +26,8 @@ export class Dictionary {
   /** Values of the basic variables, and reduced costs of the nonbasic ones. */
   readonly value: Float64Array;
   readonly reduced: Float64Array;
+  /** Room for one number a column. */
+  readonly scratch: Float64Array;
   /** Exchanges since the body was last made from the matrix: they add up rounding. */
   exchanges = 0;
 
@@ -46,12 +51,15 @@ export class Dictionary {
       this.lower[n + place] = row.lower;
       this.upper[n + place] = row.upper;
     });
-    this.body = Float64Array.from(this.matrix);
+    // One row more than the program has: room to work a row out anew.
+    this.body = new Float64Array((m + 1) * n);
+    this.body.set(this.matrix);
     this.basic = Int32Array.from({ length: m }, (_, row) => n + row);
     this.nonbasic = Int32Array.from({ length: n }, (_, column) => column);
     this.atUpper = new Uint8Array(n + m);
     this.value = new Float64Array(m);
     this.reduced = new Float64Array(n);
+    this.scratch = new Float64Array(n);
   }
 
   /** The basis of row activities alone, every column on its lower bound. */
@@ -90,8 +98,46 @@ export class Dictionary {
     this.exchanges = 0;
   }
 
+  /**
+   * Takes a changed row of the matrix into the body as it stands; false where that is not safe and the body must be
+   * made anew. The new activity is a sum over columns of the program, whose rows in the body are known.
+   */
+  replaceRow(row: number, touched: readonly number[]): boolean {
+    const { rows, columns, body, matrix } = this;
+    const spare = rows * columns;
+    body.fill(0, spare, spare + columns);
+    for (const variable of touched) {
+      const coefficient = matrix[row * columns + variable];
+      if (coefficient === 0) continue;
+      const place = this.basic.indexOf(variable);
+      if (place < 0) body[spare + this.nonbasic.indexOf(variable)] += coefficient;
+      else for (let k = 0; k < columns; k++) body[spare + k] += coefficient * body[place * columns + k];
+    }
+    const activity = columns + row;
+    const inBasis = this.basic.indexOf(activity);
+    if (inBasis >= 0) {
+      body.copyWithin(inBasis * columns, spare, spare + columns);
+      return true;
+    }
+    // The old activity stands among the nonbasic variables: the new one takes its place.
+    const column = this.nonbasic.indexOf(activity);
+    if (Math.abs(body[spare + column]) < LEAST_KEPT) return false;
+    this.#eliminate(rows, column);
+    this.exchanges++;
+    return true;
+  }
+
   /** Lets the nonbasic variable of a column and the basic variable of a row change places. */
   exchange(row: number, column: number): void {
+    this.#eliminate(row, column);
+    const leaving = this.basic[row];
+    this.basic[row] = this.nonbasic[column];
+    this.nonbasic[column] = leaving;
+    this.exchanges++;
+  }
+
+  /** Solves a row of the body for a column, and puts the result into all other rows. */
+  #eliminate(row: number, column: number): void {
     const { rows, columns, body, reduced } = this;
     const first = row * columns;
     const inverse = 1 / body[first + column];
@@ -106,14 +152,9 @@ export class Dictionary {
       body[start + column] = factor * inverse;
     }
     const factor = reduced[column];
-    if (factor !== 0) {
-      for (let k = 0; k < columns; k++) reduced[k] += factor * body[first + k];
-      reduced[column] = factor * inverse;
-    }
-    const leaving = this.basic[row];
-    this.basic[row] = this.nonbasic[column];
-    this.nonbasic[column] = leaving;
-    this.exchanges++;
+    if (factor === 0) return;
+    for (let k = 0; k < columns; k++) reduced[k] += factor * body[first + k];
+    reduced[column] = factor * inverse;
   }
 
   /** Value of the nonbasic variable of a column. */

@@ -21,8 +21,7 @@ export function makeDualFeasible(dictionary: Dictionary): { changed: boolean } {
       continue;
     }
     atUpper[variable] = hasUpper ? 1 : 0;
-    const isWrong =
-      (reduced[column] < -INDIFFERENT && !hasUpper) || (reduced[column] > INDIFFERENT && !hasLower);
+    const isWrong = (reduced[column] < -INDIFFERENT && !hasUpper) || (reduced[column] > INDIFFERENT && !hasLower);
     if (!isWrong) continue;
     reduced[column] = 0;
     changed = true;
@@ -45,15 +44,23 @@ function leavingRow({ rows, basic, lower, upper, value }: Dictionary): number {
   return found;
 }
 
-/** How fast a column moves a row towards `sign` on its way off its bound; 0 where it cannot, or hardly does. */
-function usefulPull({ columns, body, nonbasic, lower, upper, atUpper }: Dictionary, row: number, column: number, sign: number): number {
-  const entry = body[row * columns + column] * sign;
-  const variable = nonbasic[column];
-  const low = lower[variable];
-  const high = upper[variable];
-  if (low === high || Math.abs(entry) <= LEAST_PIVOT) return 0;
-  if (low === -Infinity && high === Infinity) return Math.abs(entry);
-  return atUpper[variable] ? Math.max(0, -entry) : Math.max(0, entry);
+/** How fast each column moves a row towards `sign` on its way off its bound; 0 where it cannot, or hardly does. */
+function usefulPulls(
+  { columns, body, nonbasic, lower, upper, atUpper, scratch }: Dictionary,
+  row: number,
+  sign: number,
+): Float64Array {
+  const start = row * columns;
+  for (let column = 0; column < columns; column++) {
+    const entry = body[start + column] * sign;
+    const variable = nonbasic[column];
+    const low = lower[variable];
+    const high = upper[variable];
+    let pull = atUpper[variable] ? -entry : entry;
+    if (low === -Infinity && high === Infinity) pull = Math.abs(entry);
+    scratch[column] = low === high || pull <= LEAST_PIVOT ? 0 : pull;
+  }
+  return scratch;
 }
 
 /**
@@ -63,37 +70,30 @@ function usefulPull({ columns, body, nonbasic, lower, upper, atUpper }: Dictiona
  */
 function enteringColumn(dictionary: Dictionary, row: number, gap: number): number {
   const { columns, nonbasic, lower, upper, atUpper, reduced } = dictionary;
-  const sign = Math.sign(gap);
+  const pulls = usefulPulls(dictionary, row, Math.sign(gap));
   let left = Math.abs(gap);
-  let flipped = false;
   for (;;) {
     let limit = Infinity;
     for (let column = 0; column < columns; column++) {
-      const pull = usefulPull(dictionary, row, column, sign);
-      if (pull > 0) limit = Math.min(limit, (Math.abs(reduced[column]) + INDIFFERENT) / pull);
+      if (pulls[column] > 0) limit = Math.min(limit, (Math.abs(reduced[column]) + INDIFFERENT) / pulls[column]);
     }
     let best = -1;
     let size = 0;
     for (let column = 0; column < columns; column++) {
-      const pull = usefulPull(dictionary, row, column, sign);
-      if (pull > size && Math.abs(reduced[column]) <= limit * pull) {
-        size = pull;
+      if (pulls[column] > size && Math.abs(reduced[column]) <= limit * pulls[column]) {
+        size = pulls[column];
         best = column;
       }
     }
-    if (best < 0) break;
+    if (best < 0) return -1;
     const variable = nonbasic[best];
     const range = upper[variable] - lower[variable];
     left -= size * range;
-    if (!(left > FEASIBLE)) {
-      if (flipped) dictionary.evaluate();
-      return best;
-    }
+    if (!(left > FEASIBLE)) return best;
+    dictionary.shift(best, atUpper[variable] ? -range : range);
     atUpper[variable] = atUpper[variable] ? 0 : 1;
-    flipped = true;
+    pulls[best] = 0;
   }
-  if (flipped) dictionary.evaluate();
-  return -1;
 }
 
 export type DualEnd = { status: 'feasible' } | { status: 'infeasible'; row: number } | { status: 'unknown' };
