@@ -22,9 +22,11 @@ interface Best {
 const ON_LIMIT = 1e-7;
 /** Rounds of moving the tangent to where the solution goes. */
 const MOST_TANGENTS = 3;
-/** Windows of KV100 around a solution, relative: the first, how fast they shrink, and how many are tried. */
-const WIDEST_WINDOW = 0.15;
+/** Windows of KV100 around a solution, relative: the first, around a guess and around a good one; how they change. */
+const WIDE_WINDOW = 0.15;
+const CLOSE_WINDOW = 0.0025;
 const WINDOW_SHRINKS_BY = 6;
+const WINDOW_GROWS_BY = 5;
 const MOST_WINDOWS = 8;
 /** Prices of this many latest solves are kept to bound other parts with. */
 const MOST_PRICES = 3;
@@ -69,8 +71,7 @@ export class RecipeFinder {
   startNear(kv100: number, interval: Kv100Interval): boolean {
     const { vi, presences, wholeLots } = this.#model;
     if (!vi?.min || presences.length > 0 || wholeLots.length > 0) return false;
-    const place = this.#followTangents(vi, interval, kv100);
-    if (place === undefined) return false;
+    const place = this.#closeIn(vi, interval, Math.min(interval.to, Math.max(interval.from, kv100)), CLOSE_WINDOW);
     this.#program.setViRows(innerRows(vi, interval, place));
     const result = this.#program.solve();
     if (result.status !== 'optimal' || !this.take(result)) return false;
@@ -123,7 +124,7 @@ export class RecipeFinder {
   #kv100Near(vi: ViLimits, interval: Kv100Interval, values: Float64Array): number {
     const { kv100 } = mixViscosity(vi, values);
     if (!vi.min || isNarrow(interval)) return kv100;
-    return this.#followTangents(vi, interval, kv100) ?? this.#closeIn(vi, interval, kv100);
+    return this.#followTangents(vi, interval, kv100) ?? this.#closeIn(vi, interval, kv100, WIDE_WINDOW);
   }
 
   /** Moves the tangent of the curve to where the solution goes, until it stays; undefined where it does not. */
@@ -147,9 +148,9 @@ export class RecipeFinder {
    * Follows the solution under the outer lines of ever smaller windows: for where the curve bends at the knots of
    * Table 1 and a tangent of one piece leads astray.
    */
-  #closeIn(vi: ViLimits, interval: Kv100Interval, start: number): number {
+  #closeIn(vi: ViLimits, interval: Kv100Interval, start: number, widest: number): number {
     let kv100 = start;
-    let reach = WIDEST_WINDOW;
+    let reach = widest;
     for (let round = 0; round < MOST_WINDOWS && reach > NEAR; round++) {
       const from = Math.max(interval.from, kv100 / (1 + reach));
       const to = Math.min(interval.to, kv100 * (1 + reach));
@@ -159,6 +160,7 @@ export class RecipeFinder {
       const atEnd =
         (found < from * (1 + NEAR) && from > interval.from) || (found > to * (1 - NEAR) && to < interval.to);
       if (!atEnd) reach /= WINDOW_SHRINKS_BY;
+      else if (round === 0) reach = Math.min(WIDE_WINDOW, reach * WINDOW_GROWS_BY);
     }
     return kv100;
   }
