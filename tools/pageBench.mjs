@@ -37,36 +37,49 @@ async function keyToRecipe(page, key) {
   );
 }
 
-/** Frames of a drag of two seconds, and how many of them showed a new recipe. @param {import('@playwright/test').Page} page @param {import('@playwright/test').Locator} end */
+/**
+ * Frames of a drag of two seconds, and how many of them showed a new recipe. The pointer goes down as a mouse does; then
+ * it moves once a frame inside the page, as a hand does: moves sent from outside arrive at a third of that rate.
+ * @param {import('@playwright/test').Page} page @param {import('@playwright/test').Locator} end
+ */
 async function drag(page, end) {
   const box = await end.boundingBox();
   if (!box) throw new Error('The end of the rail is not on the page.');
   const x = box.x + box.width / 2;
   const y = box.y + box.height / 2;
-  await page.evaluate(() => {
-    const state = { frames: 0, recipes: 0, last: '', running: true };
-    Object.assign(window, { dragState: state });
-    const look = () => {
-      state.frames++;
-      const text = document.querySelector('#answer table')?.textContent ?? '';
-      if (text !== state.last) state.recipes++;
-      state.last = text;
-      if (state.running) requestAnimationFrame(look);
-    };
-    requestAnimationFrame(look);
-  });
-  const start = Date.now();
   await page.mouse.move(x, y);
   await page.mouse.down();
-  for (let k = 0; Date.now() - start < 2000; k++) await page.mouse.move(x + 40 * Math.sin(k / 25), y);
+  const result = await end.evaluate(
+    (element, place) =>
+      new Promise((resolve) => {
+        const state = { frames: 0, recipes: 0, moves: 0, last: '', limit: '' };
+        const start = performance.now();
+        const step = () => {
+          state.frames++;
+          const text = document.querySelector('#answer table')?.textContent ?? '';
+          if (text !== state.last) state.recipes++;
+          state.last = text;
+          const limit = element.getAttribute('aria-valuenow') ?? '';
+          if (limit !== state.limit) state.moves++;
+          state.limit = limit;
+          const seconds = (performance.now() - start) / 1000;
+          if (seconds > 2) {
+            resolve({ ...state, seconds });
+            return;
+          }
+          const clientX = place.x + 40 * Math.sin(3 * seconds);
+          element.dispatchEvent(
+            new PointerEvent('pointermove', { pointerId: 1, clientX, clientY: place.y, bubbles: true }),
+          );
+          requestAnimationFrame(step);
+        };
+        requestAnimationFrame(step);
+      }),
+    { x, y },
+  );
   await page.mouse.up();
-  const seconds = (Date.now() - start) / 1000;
-  const { frames, recipes } = await page.evaluate(() => {
-    const state = /** @type {any} */ (window).dragState;
-    state.running = false;
-    return state;
-  });
-  return { framesPerSecond: frames / seconds, share: recipes / frames };
+  const { frames, recipes, moves, seconds } = /** @type {any} */ (result);
+  return { framesPerSecond: frames / seconds, share: recipes / frames, moved: moves / frames };
 }
 
 const server = await startServer();
@@ -74,7 +87,7 @@ const browser = await chromium.launch({ executablePath: ensureBrowser(), args: B
 try {
   const page = await browser.newPage({ viewport: { width: 1440, height: 900 } });
   await page.goto(server.url);
-  console.log('| order | key to recipe, median ms | most ms | frames a second | frames with a new recipe |');
+  console.log('| order | key to recipe, median ms | most ms | frames a second | frames that moved the limit | frames with a new recipe |');
   for (const order of ORDERS) {
     await page.getByRole('button', { name: order }).first().click();
     await page.waitForTimeout(1500);
@@ -87,12 +100,13 @@ try {
       times.push(await keyToRecipe(page, k % 2 ? 'PageUp' : 'PageDown').catch(() => Number.NaN));
     }
     const counted = times.filter(Number.isFinite);
-    const { framesPerSecond, share } = await drag(page, ends.first());
+    const { framesPerSecond, share, moved } = await drag(page, ends.first());
     const cells = [
       order.source,
       quantile(counted, 0.5).toFixed(0),
       Math.max(...counted).toFixed(0),
       framesPerSecond.toFixed(0),
+      `${(100 * moved).toFixed(0)} %`,
       `${(100 * share).toFixed(0)} %`,
     ];
     console.log(`| ${cells.join(' | ')} |`);

@@ -1,6 +1,7 @@
 import { classNames } from '../parts/classNames';
 import { Notice } from '../parts/Notice';
 import { Section } from '../parts/Section';
+import { useLasting } from '../parts/useLasting';
 import { type Answer, useAnswer, useDelay500 } from '../state/answerStore';
 import { useWorkbook } from '../state/workbookStore';
 import { AnswerBody } from './AnswerBody';
@@ -16,12 +17,13 @@ export function AnswerPanel({ orderId }: { orderId: string }) {
   const currency = useWorkbook(({ workbook }) => workbook.settings.currency);
   const workbookOrder = useWorkbook(({ workbook }) => workbook.orders.find(({ id }) => id === orderId));
   const slow = useDelay500(answer);
+  const faded = useLasting(answer.stale);
   const { outcome, order } = answer;
   const proof = outcome && order && proofInWords(outcome, order, answer);
   useSettledAnnouncement(answer, settledWords(answer, proof, currency));
   if (!workbookOrder) return null;
   const solving = answer.phase === 'solving';
-  const outdated = answer.stale && answer.outcome;
+  const outdated = faded && answer.outcome;
   return (
     <div aria-busy={solving || undefined}>
       <Section
@@ -31,7 +33,7 @@ export function AnswerPanel({ orderId }: { orderId: string }) {
         {slow && <Progress progress={answer.progress} currency={currency} order={workbookOrder} />}
         <Message answer={answer} />
         {proof && (
-          <div className={classNames(styles.body, answer.stale && styles.stale)}>
+          <div className={classNames(styles.body, faded && styles.stale)}>
             <AnswerBody answer={answer} proof={proof} workbookOrder={workbookOrder} currency={currency} />
           </div>
         )}

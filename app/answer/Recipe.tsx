@@ -1,4 +1,4 @@
-import { memo, useDeferredValue } from 'react';
+import { memo } from 'react';
 import type { BlendOutcome, OmittedProduct, Order } from '../../src';
 import { LazyViscosityChart } from '../chart/LazyViscosityChart';
 import { Section } from '../parts/Section';
@@ -32,9 +32,6 @@ export const Recipe = memo(function Recipe({
   laboratoryOnly: readonly string[];
   currency: string;
 }) {
-  // The chart may lag behind while a limit is dragged; numbers may not.
-  const charted = useDeferredValue(outcome);
-  const chartedOrder = useDeferredValue(order);
   if (!outcome.recipe) return null;
   const { rows, totals, batch } = recipeRows(order, outcome);
   const { cautions, leftOut } = outcome;
@@ -50,7 +47,7 @@ export const Recipe = memo(function Recipe({
         text={() => recipeText({ title, proof, remarks, rows, totals, batch })}
       />
       <Section title="Viscosity and temperature" level={3} className={styles.part}>
-        <LazyViscosityChart order={chartedOrder} outcome={charted} />
+        <LazyViscosityChart order={order} outcome={outcome} />
       </Section>
       <Section title="Predicted properties" level={3} className={styles.part}>
         <p className={styles.grades}>{gradesInWords(outcome)}</p>

@@ -1,6 +1,7 @@
-import { type ComponentProps, lazy, memo, Suspense, useMemo } from 'react';
+import { type ComponentProps, lazy, memo, Suspense, useDeferredValue, useMemo } from 'react';
 import type { BlendOutcome, Order } from '../../src';
 import { ErrorBoundary } from '../parts/ErrorBoundary';
+import { usePaced } from '../parts/usePaced';
 import { useWidth } from '../parts/useWidth';
 import { ChartTable } from './ChartTable';
 import { CHART_HEIGHT, plotSize } from './chartLayout';
@@ -11,6 +12,9 @@ import { viscosityWindows } from './viscosityWindows';
 
 /** Recharts is a third of the page's weight: it is fetched when the rest is already on screen. */
 const fetched = () => lazy(() => import('./ViscosityChart'));
+
+/** Drawing the chart takes about as long as all the rest of an answer. */
+const REDRAWN_EVERY_MS = 150;
 
 let Fetched = fetched();
 
@@ -28,19 +32,19 @@ interface ChartProps {
   outcome: BlendOutcome;
 }
 
-/**
- * The viscosity-temperature chart of a recipe, its table, and what not to read into it. Memoised, so that the page can
- * let it lag behind its numbers.
- */
-export const LazyViscosityChart = memo(function LazyViscosityChart(props: ChartProps) {
+/** The viscosity-temperature chart of a recipe, its table, and what not to read into it. */
+export function LazyViscosityChart({ order, outcome }: ChartProps) {
+  const answer = useMemo(() => ({ order, outcome }), [order, outcome]);
+  // The chart may lag behind while a limit is dragged; numbers may not.
+  const drawn = useDeferredValue(usePaced(answer, REDRAWN_EVERY_MS));
   return (
     <ErrorBoundary what="The chart" onRetry={fetchAgain}>
-      <Chart {...props} />
+      <Chart order={drawn.order} outcome={drawn.outcome} />
     </ErrorBoundary>
   );
-});
+}
 
-function Chart({ order, outcome }: ChartProps) {
+const Chart = memo(function Chart({ order, outcome }: ChartProps) {
   const [frame, width] = useWidth<HTMLDivElement>(400);
   const lines = useMemo(() => viscosityLines(order, outcome), [order, outcome]);
   const windows = useMemo(() => viscosityWindows(order, outcome), [order, outcome]);
@@ -69,7 +73,7 @@ function Chart({ order, outcome }: ChartProps) {
       <ChartTable lines={lines} windows={windows} />
     </div>
   );
-}
+});
 
 function Placeholder({ width }: { width: number }) {
   return (

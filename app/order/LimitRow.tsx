@@ -4,6 +4,7 @@ import { IconButton } from '../parts/IconButton';
 import { type End, setEnd, upperEnd } from '../parts/limitEnds';
 import { contradiction, limitName, shortLimitName, unitOf } from '../parts/limitWords';
 import { NumberField } from '../parts/NumberField';
+import { useLasting } from '../parts/useLasting';
 import type { Answer } from '../state/answerStore';
 import { endEdit, useWorkbook } from '../state/workbookStore';
 import styles from './LimitList.module.css';
@@ -29,6 +30,7 @@ export function LimitRow({ orderId, limit, index, answer, isNew }: LimitRowProps
   const row = useRef<HTMLLIElement>(null);
   const [open, setOpen] = useState(false);
   const [untaken, setUntaken] = useState<Partial<Record<End, string>>>({});
+  const faded = useLasting(answer.stale);
   const ownProperties = useWorkbook(({ workbook }) => workbook.ownProperties);
   const definition = propertyDefinition(limit.property, ownProperties);
   const name = limitName(limit, ownProperties);
@@ -87,7 +89,7 @@ export function LimitRow({ orderId, limit, index, answer, isNew }: LimitRowProps
           name={name}
           definition={definition}
           check={check}
-          stale={answer.stale}
+          stale={faded}
           open={open}
           onToggle={() => setOpen(!open)}
           detailsId={`${id}-more`}
@@ -108,7 +110,7 @@ export function LimitRow({ orderId, limit, index, answer, isNew }: LimitRowProps
             definition={definition}
             mix={check?.value ?? mixValue(answer, limit)}
             passes={check?.passes}
-            stale={answer.stale}
+            stale={faded}
             marks={marksOf(answer, limit)}
             onMove={moveEnd}
             onEnd={endEdit}

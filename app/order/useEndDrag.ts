@@ -11,7 +11,7 @@ export interface EndDragOptions {
   /** The end may not be dragged past these. */
   least: number;
   most: number;
-  /** Told at most once a frame while the end moves. */
+  /** Told at most once a frame while the end moves, less often where the page cannot keep up. */
   onMove(value: number): void;
   /** The move is over: one entry to undo. */
   onEnd(): void;
@@ -26,6 +26,8 @@ export function useEndDrag(options: EndDragOptions) {
   const waiting = useRef<number>(undefined);
   /** Where on its grip the end was taken [px]: the end stays under the finger, and does not jump to it. */
   const grip = useRef(0);
+  /** Where the drawing starts on the page [px], read when the end is taken: read at every move it would cost a layout. */
+  const start = useRef(0);
   const [dragging, setDragging] = useState(false);
 
   useEffect(() => () => cancelFrame(frame.current), []);
@@ -41,7 +43,16 @@ export function useEndDrag(options: EndDragOptions) {
     frame.current = undefined;
     const value = waiting.current;
     waiting.current = undefined;
-    if (value !== undefined && value !== latest.current.value) latest.current.onMove(value);
+    if (value === undefined || value === latest.current.value) return;
+    latest.current.onMove(value);
+    const edited = performance.now();
+    frame.current = requestAnimationFrame(() => {
+      frame.current = undefined;
+      if (waiting.current === undefined) return;
+      // An edit and its recipe that took longer than a frame have the next one to themselves.
+      if (performance.now() - edited > LONG_FRAME_MS) frame.current = requestAnimationFrame(flush);
+      else flush();
+    });
   }
 
   function valueAt(event: PointerEvent<SVGGElement>): number {
@@ -54,8 +65,7 @@ export function useEndDrag(options: EndDragOptions) {
   /** The pointer's place along the scale, as a fraction of it. */
   function placeOf(event: PointerEvent<SVGGElement>): number {
     const { width, left } = latest.current;
-    const box = event.currentTarget.ownerSVGElement?.getBoundingClientRect();
-    return (event.clientX - (box?.left ?? 0) - left) / width;
+    return (event.clientX - start.current - left) / width;
   }
 
   function setActive(active: boolean) {
@@ -97,6 +107,7 @@ export function useEndDrag(options: EndDragOptions) {
         event.preventDefault();
         event.currentTarget.focus();
         event.currentTarget.setPointerCapture(event.pointerId);
+        start.current = event.currentTarget.ownerSVGElement?.getBoundingClientRect().left ?? 0;
         const { scale, width, value } = latest.current;
         grip.current = (placeOf(event) - toFraction(scale, value)) * width;
         setActive(true);
@@ -112,6 +123,9 @@ export function useEndDrag(options: EndDragOptions) {
     },
   };
 }
+
+/** A frame that took longer than this lost the next one [ms]. */
+const LONG_FRAME_MS = 18;
 
 function cancelFrame(frame: number | undefined) {
   if (frame !== undefined) cancelAnimationFrame(frame);

@@ -1,4 +1,5 @@
 import { classNames } from '../parts/classNames';
+import { useLasting } from '../parts/useLasting';
 import { useAnswer } from '../state/answerStore';
 import { useWorkbook } from '../state/workbookStore';
 import styles from './AnswerBar.module.css';
@@ -9,17 +10,18 @@ export function AnswerBar({ orderId }: { orderId: string | undefined }) {
   const order = useWorkbook(({ workbook }) => workbook.orders.find(({ id }) => id === orderId));
   const currency = useWorkbook(({ workbook }) => workbook.settings.currency);
   const answer = useAnswer(orderId);
+  const faded = useLasting(answer.stale);
   if (!order) return null;
   const short = answerInWords(answer, order, currency);
   return (
-    <a href="#answer" className={classNames(styles.bar, short.stale && styles.stale)}>
+    <a href="#answer" className={classNames(styles.bar, faded && styles.stale)}>
       <span className="visually-hidden">To the answer:</span>
       <span className={classNames(styles.text, styles[short.tone])}>{short.text}</span>
       <span className={styles.remarks}>
         <span className={styles.remark} aria-hidden={short.stale}>
           {short.remark}
         </span>
-        {short.stale && <span className={styles.again}>being worked out again</span>}
+        {faded && <span className={styles.again}>being worked out again</span>}
       </span>
     </a>
   );

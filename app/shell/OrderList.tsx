@@ -4,6 +4,7 @@ import { classNames } from '../parts/classNames';
 import { IconButton } from '../parts/IconButton';
 import { Section } from '../parts/Section';
 import { Select } from '../parts/Select';
+import { useLasting } from '../parts/useLasting';
 import { useAnswer } from '../state/answerStore';
 import { type Command, useCommands } from '../state/commands';
 import { selectOrder } from '../state/viewStore';
@@ -57,7 +58,9 @@ function CommandIcon({ icon, command }: { icon: 'copy' | 'bin'; command: Command
 
 function OrderItem({ order, selected }: { order: WorkbookOrder; selected: boolean }) {
   const currency = useWorkbook(({ workbook }) => workbook.settings.currency);
-  const short = answerInWords(useAnswer(order.id), order, currency);
+  const answer = useAnswer(order.id);
+  const short = answerInWords(answer, order, currency);
+  const faded = useLasting(answer.stale);
   return (
     <li>
       <button
@@ -67,7 +70,7 @@ function OrderItem({ order, selected }: { order: WorkbookOrder; selected: boolea
         onClick={() => selectOrder(order.id)}
       >
         <span className={styles.name}>{order.name}</span>
-        <span className={classNames(styles.answer, styles[short.tone], short.stale && styles.stale)}>
+        <span className={classNames(styles.answer, styles[short.tone], faded && styles.stale)}>
           {short.text}
           {short.remark && <span className={styles.remark}> {short.remark}</span>}
         </span>
