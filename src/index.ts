@@ -11,7 +11,6 @@ export { createCompactEngine } from './optimise/linear/compact/compactEngine';
 export { createHighsEngine, type HighsLoading } from './optimise/linear/highsEngine';
 export { createJavascriptEngine } from './optimise/linear/javascriptEngine';
 export type { LinearEngine } from './optimise/linear/linearEngine';
-export { reusingSessions } from './optimise/linear/reusedSession';
 export type { Dose, Limit, Order, ShareBasis, ShareRule, StockSet } from './optimise/order';
 export type {
   BlendOutcome,

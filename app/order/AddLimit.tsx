@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { memo, useState } from 'react';
 import {
   type Limit,
   type OwnProperty,
@@ -22,8 +22,22 @@ const ANOTHER_TEMPERATURE = 20;
 /** The choice that asks for a property first. */
 const OF_ONES_OWN = 'a property of one’s own';
 
+interface AddLimitProps {
+  order: WorkbookOrder;
+  onAdded(): void;
+}
+
+/** Only what is limited matters here: a limit that moves draws the long list of choices anew for nothing. */
+function limitTheSame({ order: a }: AddLimitProps, { order: b }: AddLimitProps): boolean {
+  return (
+    a.id === b.id &&
+    a.limits.length === b.limits.length &&
+    a.limits.every((limit, place) => isSameProperty(limit, b.limits[place]))
+  );
+}
+
 /** Adds an empty limit on a property; its ends are then typed. */
-export function AddLimit({ order, onAdded }: { order: WorkbookOrder; onAdded(): void }) {
+export const AddLimit = memo(function AddLimit({ order, onAdded }: AddLimitProps) {
   const ownProperties = useWorkbook(({ workbook }) => workbook.ownProperties);
   const choices = limitChoices(ownProperties).filter(
     ({ limit }) => !order.limits.some((existing) => isSameProperty(existing, limit)),
@@ -81,7 +95,7 @@ export function AddLimit({ order, onAdded }: { order: WorkbookOrder; onAdded(): 
       />
     </div>
   );
-}
+}, limitTheSame);
 
 interface Choice {
   group: string;

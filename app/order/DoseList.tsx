@@ -1,14 +1,16 @@
+import { memo } from 'react';
 import type { Dose, WorkbookOrder } from '../../src';
 import { Section } from '../parts/Section';
 import { Select } from '../parts/Select';
 import { useAnswer } from '../state/answerStore';
+import { sameButForLimits } from './butForLimits';
 import { DoseRow } from './DoseRow';
 import { doseProblems } from './problemsAt';
 import styles from './rules.module.css';
 import { editOrder, useProducts } from './useOrder';
 
 /** What is dosed by order, not by cost: packages at their treat rate, a depressant, a stock to be used up. */
-export function DoseList({ order }: { order: WorkbookOrder }) {
+export const DoseList = memo(function DoseList({ order }: { order: WorkbookOrder }) {
   const products = useProducts();
   const answer = useAnswer(order.id);
   const nameOf = (id: string) => products.find((product) => product.id === id)?.name ?? id;
@@ -56,4 +58,4 @@ export function DoseList({ order }: { order: WorkbookOrder }) {
       )}
     </Section>
   );
-}
+}, sameButForLimits);

@@ -1,12 +1,14 @@
+import { memo } from 'react';
 import type { WorkbookOrder } from '../../src';
 import { IconButton } from '../parts/IconButton';
 import { Section } from '../parts/Section';
 import { Select } from '../parts/Select';
+import { sameButForLimits } from './butForLimits';
 import styles from './rules.module.css';
 import { editOrder, useProducts } from './useOrder';
 
 /** Products that this order does not use, whatever they cost. */
-export function KeptOut({ order }: { order: WorkbookOrder }) {
+export const KeptOut = memo(function KeptOut({ order }: { order: WorkbookOrder }) {
   const products = useProducts();
   const out = products.filter(({ id }) => order.excludedProductIds.includes(id));
   const used = products.filter(({ id }) => !order.excludedProductIds.includes(id));
@@ -42,4 +44,4 @@ export function KeptOut({ order }: { order: WorkbookOrder }) {
       </div>
     </Section>
   );
-}
+}, sameButForLimits);

@@ -1,12 +1,14 @@
+import { memo } from 'react';
 import type { WorkbookOrder } from '../../src';
 import { IconButton } from '../parts/IconButton';
 import { Section } from '../parts/Section';
+import { sameButForLimits } from './butForLimits';
 import { NewEntry } from './NewEntry';
 import styles from './rules.module.css';
 import { editOrder } from './useOrder';
 
 /** Tests that no calculation stands for; they belong to the acceptance of the batch. */
-export function LaboratoryOnly({ order }: { order: WorkbookOrder }) {
+export const LaboratoryOnly = memo(function LaboratoryOnly({ order }: { order: WorkbookOrder }) {
   function add(test: string) {
     editOrder(order.id, 'add a laboratory test', ({ laboratoryOnly }) => laboratoryOnly.push(test));
   }
@@ -32,4 +34,4 @@ export function LaboratoryOnly({ order }: { order: WorkbookOrder }) {
       </div>
     </Section>
   );
-}
+}, sameButForLimits);

@@ -1,3 +1,4 @@
+import { memo } from 'react';
 import { VISCOSITY_RULE_TABLE, VISCOSITY_RULES, type WorkbookOrder } from '../../src';
 import { Checkbox } from '../parts/Checkbox';
 import { NumberField } from '../parts/NumberField';
@@ -5,12 +6,13 @@ import { wholeNumber } from '../parts/RangeFields';
 import { Select } from '../parts/Select';
 import { useWorkbook } from '../state/workbookStore';
 import { BatchField } from './BatchField';
+import { sameButForLimits } from './butForLimits';
 import { fromPercent, toPercent } from './percent';
 import styles from './rules.module.css';
 import { editOrder } from './useOrder';
 
 /** How the order is worked out: from which figures, by which rule, cheapest by what, for which batch. */
-export function OrderSettings({ order }: { order: WorkbookOrder }) {
+export const OrderSettings = memo(function OrderSettings({ order }: { order: WorkbookOrder }) {
   const currency = useWorkbook(({ workbook }) => workbook.settings.currency);
   const edit = (label: string, change: (draft: WorkbookOrder) => void) => editOrder(order.id, label, change);
   return (
@@ -86,4 +88,4 @@ export function OrderSettings({ order }: { order: WorkbookOrder }) {
       />
     </div>
   );
-}
+}, sameButForLimits);

@@ -1,9 +1,10 @@
-import { useRef } from 'react';
+import { memo, useRef } from 'react';
 import { missingInRule, type ShareRule, type WorkbookOrder } from '../../src';
 import { Section } from '../parts/Section';
 import { Select } from '../parts/Select';
 import { useAnswer } from '../state/answerStore';
 import { useWorkbook } from '../state/workbookStore';
+import { sameButForLimits } from './butForLimits';
 import { shareProblems } from './problemsAt';
 import styles from './rules.module.css';
 import { ShareRuleRow } from './ShareRuleRow';
@@ -18,7 +19,7 @@ const NEW_RULES: Record<ShareRule['kind'], { label: string; rule: ShareRule }> =
 };
 
 /** Rules of the mix beyond its properties. */
-export function ShareRuleList({ order }: { order: WorkbookOrder }) {
+export const ShareRuleList = memo(function ShareRuleList({ order }: { order: WorkbookOrder }) {
   const workbook = useWorkbook((state) => state.workbook);
   const answer = useAnswer(order.id);
   const adding = useRef<HTMLDivElement>(null);
@@ -67,4 +68,4 @@ export function ShareRuleList({ order }: { order: WorkbookOrder }) {
       </div>
     </Section>
   );
-}
+}, sameButForLimits);

@@ -21,7 +21,7 @@ export function AnswerBar({ orderId }: { orderId: string | undefined }) {
         <span className={styles.remark} aria-hidden={short.stale}>
           {short.remark}
         </span>
-        {faded && <span className={styles.again}>being worked out again</span>}
+        {faded && <span>being worked out again</span>}
       </span>
     </a>
   );

@@ -1,5 +1,5 @@
 import wasmUrl from 'highs/runtime?url';
-import { createEngine, reusingSessions } from '../../src';
+import { createEngine } from '../../src';
 import { serveInWorker } from './workerScope';
 
-serveInWorker(async () => reusingSessions(await createEngine({ locateFile: () => wasmUrl })));
+serveInWorker(async () => createEngine({ locateFile: () => wasmUrl }));

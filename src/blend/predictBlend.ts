@@ -84,12 +84,6 @@ function viscosityIndexOf(kv40: PredictedProperty, kv100: PredictedProperty): Pr
 }
 
 function predictOne(parts: readonly Part[], at: PropertyAt, options: PredictionOptions): PredictedProperty {
-  if (at.property === 'vi') {
-    return viscosityIndexOf(
-      predictOne(parts, { property: 'kv', celsius: 40 }, options),
-      predictOne(parts, { property: 'kv', celsius: 100 }, options),
-    );
-  }
   if (parts.length === 1) return ofOneStock(parts[0].stock, at, options);
   const stocks = parts.map((part) => part.stock);
   return mean(blendQuantity(stocks, at, options), parts);
@@ -108,20 +102,31 @@ function ofOneStock(stock: Stock, { property, celsius }: PropertyAt, options: Pr
   };
 }
 
+interface Viscosities {
+  kv40: PredictedProperty;
+  kv100: PredictedProperty;
+  vi: PredictedProperty;
+}
+
+function viscositiesOf(parts: readonly Part[], options: PredictionOptions): Viscosities {
+  const kv40 = predictOne(parts, { property: 'kv', celsius: 40 }, options);
+  const kv100 = predictOne(parts, { property: 'kv', celsius: 100 }, options);
+  return { kv40, kv100, vi: viscosityIndexOf(kv40, kv100) };
+}
+
 /** The same viscosities, and the index that follows, under every rule: the spread hints at the model's own error. */
-function spreadOf(parts: readonly Part[], options: PredictionOptions): RuleSpread[] {
+function spreadOf(parts: readonly Part[], options: PredictionOptions, own: Viscosities): RuleSpread[] {
   const cold: RuleSpread = { property: 'kv', celsius: 40, byRule: [] };
   const hot: RuleSpread = { property: 'kv', celsius: 100, byRule: [] };
   const index: RuleSpread = { property: 'vi', byRule: [] };
   for (const rule of VISCOSITY_RULES) {
-    const under = { ...options, viscosityRule: rule };
-    const kv40 = predictOne(parts, { property: 'kv', celsius: 40 }, under);
-    const kv100 = predictOne(parts, { property: 'kv', celsius: 100 }, under);
+    const isOwn = rule === (options.viscosityRule ?? 'wright');
+    const { kv40, kv100, vi } = isOwn ? own : viscositiesOf(parts, { ...options, viscosityRule: rule });
     const add = (spread: RuleSpread, { value }: PredictedProperty) =>
       spread.byRule.push(value === undefined ? { rule } : { rule, value });
     add(cold, kv40);
     add(hot, kv100);
-    add(index, viscosityIndexOf(kv40, kv100));
+    add(index, vi);
   }
   return [cold, hot, index];
 }
@@ -181,8 +186,13 @@ export function predictBlend(
   options: PredictOptions = {},
 ): PredictedProperties {
   const parts = partsOf(stocks, recipe);
-  const properties = propertiesToPredict(parts, options).map((at) => predictOne(parts, at, options));
-  const spread = spreadOf(parts, options);
+  const viscosities = viscositiesOf(parts, options);
+  const properties = propertiesToPredict(parts, options).map((at) => {
+    if (at.property === 'vi') return viscosities.vi;
+    if (at.property === 'kv' && at.celsius === 40) return viscosities.kv40;
+    return at.property === 'kv' && at.celsius === 100 ? viscosities.kv100 : predictOne(parts, at, options);
+  });
+  const spread = spreadOf(parts, options, viscosities);
   const volumes = volumeFractions(parts, recipe, options);
   return volumes ? { properties, volumeFractions: volumes, spread } : { properties, spread };
 }

@@ -70,7 +70,7 @@ export class RecipeFinder {
   /** Looks for a recipe near a KV100 known from a similar order; true where there is one. */
   startNear(kv100: number, interval: Kv100Interval): boolean {
     const { vi, presences, wholeLots } = this.#model;
-    if (!vi?.min || presences.length > 0 || wholeLots.length > 0) return false;
+    if (!vi?.min || presences.length > 0 || wholeLots.length > 0 || Number.isNaN(kv100)) return false;
     const place = this.#closeIn(vi, interval, Math.min(interval.to, Math.max(interval.from, kv100)), CLOSE_WINDOW);
     this.#program.setViRows(innerRows(vi, interval, place));
     const result = this.#program.solve();
