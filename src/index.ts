@@ -6,6 +6,18 @@
 export { type PredictOptions, predictBlend } from './blend/predictBlend';
 export type { PredictedProperties, PredictedProperty, RuleSpread } from './blend/predictedProperties';
 export type { PredictionOptions, PropertyAt } from './blend/predictionOptions';
+export type {
+  Alternative,
+  Demand,
+  EntryPrice,
+  Explanation,
+  Ladder,
+  LimitPrice,
+  Relaxation,
+  RoundedRecipe,
+  UsedStock,
+  WithinReach,
+} from './explain/explanation';
 export { createEngine } from './optimise/defaultEngine';
 export { createCompactEngine } from './optimise/linear/compact/compactEngine';
 export { createHighsEngine, type HighsLoading } from './optimise/linear/highsEngine';

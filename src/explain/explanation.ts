@@ -1,0 +1,128 @@
+/**
+ * What an answer means. Everything here is found by solving the order again with one thing changed, so that it holds
+ * whatever rules the order has; `proven` says that every solve it rests on was proven.
+ */
+
+/** What one end of a limit costs, and over what range that price holds. */
+export interface LimitPrice {
+  /** Place in `order.limits`, and the end. */
+  limit: number;
+  end: 'min' | 'max';
+  /** The end as stated, in the property's unit. */
+  stated: number;
+  /** By how much it was moved for the figures below [property's unit]; positive. */
+  step: number;
+  /** Cost per tonne saved by loosening the end by `step`: zero or more. */
+  looserSaves: number;
+  /** Cost per tonne added by tightening it by `step`; absent where that is impossible. */
+  tighterCosts?: number;
+  /** Loosest end up to which loosening goes on saving at this price (within a twentieth) [property's unit]. */
+  holdsTo?: number;
+  /** What the order costs less with the end taken away altogether, per tonne. */
+  withoutSaves: number;
+  proven: boolean;
+}
+
+/** A stock that is not used: the price at which it would come in. */
+export interface EntryPrice {
+  stockId: string;
+  pricePerTonne: number;
+  /** At or above this price per tonne it stays out; below, it is used. Absent: not even at a price of zero. */
+  entersBelow?: number;
+  proven: boolean;
+}
+
+/** A stock that is used: the prices at which the recipe stands, and what its loss would cost. */
+export interface UsedStock {
+  stockId: string;
+  pricePerTonne: number;
+  massFraction: number;
+  /** Between these prices per tonne, others unchanged, the recipe stays the cheapest. Absent: no bound was found. */
+  standsFrom?: number;
+  standsTo?: number;
+  /** Cost per tonne without the stock, less the cost with it. Absent: impossible without it, or not proven. */
+  lossCosts?: number;
+  impossibleWithout: boolean;
+  proven: boolean;
+}
+
+export interface Explanation {
+  limits: LimitPrice[];
+  entries: EntryPrice[];
+  used: UsedStock[];
+  /** Why it ended: all done, or the time ran out before some of it. */
+  stopped: 'finished' | 'time limit' | 'cancelled';
+  solves: number;
+}
+
+/** A thing that an order asks for: one end of a limit, or a rule. */
+export type Demand =
+  | { kind: 'limit'; limit: number; end: 'min' | 'max' }
+  | { kind: 'dose'; dose: number }
+  | { kind: 'share'; share: number }
+  | { kind: 'most stocks' }
+  | { kind: 'amount on hand'; stockId: string }
+  | { kind: 'greatest dose'; stockId: string }
+  | { kind: 'least dose'; stockId: string }
+  | { kind: 'whole drums'; stockId: string };
+
+/** What can be reached in one limit with everything else kept. */
+export interface WithinReach {
+  limit: number;
+  end: 'min' | 'max';
+  stated: number;
+  /** The nearest end that can be met, in the property's unit: a recipe meets it, and one step nearer none does. */
+  reachable?: number;
+  /** How close that is certified [property's unit]. */
+  step: number;
+  /** Cost per tonne of the cheapest recipe at `reachable`. */
+  costPerTonne?: number;
+  proven: boolean;
+}
+
+/** Why an order is impossible, and the nearest that is possible. */
+export interface Ladder {
+  /** A smallest set of demands that cannot hold together: without any one of them the rest can. */
+  conflict: Demand[];
+  /** False where time ran out: the set may then not be smallest. */
+  conflictProven: boolean;
+  /** Limits of which moving one alone makes the order possible, and how far. */
+  reach: WithinReach[];
+  /** Ways to change limits so that the order becomes possible, the cheapest in weighted reporting units first. */
+  relaxations: Relaxation[];
+  stopped: 'finished' | 'time limit' | 'cancelled';
+  solves: number;
+}
+
+/** New ends for some limits that make the order possible. */
+export interface Relaxation {
+  changes: { limit: number; end: 'min' | 'max'; stated: number; to: number }[];
+  /** Sum of changes in reporting units, each by its weight. */
+  effort: number;
+  costPerTonne: number;
+  proven: boolean;
+}
+
+/** Another recipe that lacks at least one stock of every cheaper one. */
+export interface Alternative {
+  recipe: { stockId: string; massFraction: number }[];
+  costPerTonne: number;
+  /** Cost above the cheapest, per tonne. */
+  dearerBy: number;
+  /** Stocks of the cheapest recipe it does without, and those it uses in their place. */
+  without: string[];
+  instead: string[];
+  proven: boolean;
+}
+
+/** A recipe in amounts that can be weighed. */
+export interface RoundedRecipe {
+  recipe: { stockId: string; massFraction: number }[];
+  /** Step of the shares [mass fraction]. */
+  step: number;
+  costPerTonne: number;
+  /** Cost of rounding, per tonne. */
+  roundingCosts: number;
+  /** No recipe in these steps is cheaper. */
+  proven: boolean;
+}
