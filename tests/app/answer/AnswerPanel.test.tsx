@@ -116,9 +116,9 @@ describe('the answer without a recipe', () => {
 });
 
 describe('an answer that is out of date', () => {
-  it('stays on the page, greyed, and says that a new one is on its way', () => {
+  it('stays on the page, greyed after a moment, and says that a new one is on its way', async () => {
     show({ ...answered(), phase: 'solving', stale: true, sinceMs: 0 });
-    expect(screen.getByText('recomputing …')).toBeInTheDocument();
+    expect(await screen.findByText('recomputing …')).toBeInTheDocument();
     expect(screen.getByText('€1,500.00').closest('.stale')).not.toBeNull();
     expect(screen.getByText('€1,500.00').closest('[aria-busy="true"]')).not.toBeNull();
     act(() => setAnswer(ID, { phase: 'answered', stale: false }));
@@ -127,9 +127,9 @@ describe('an answer that is out of date', () => {
     expect(document.querySelector('[aria-busy]')).toBeNull();
   });
 
-  it('is called out of date where nothing is being worked out', () => {
+  it('is called out of date where nothing is being worked out', async () => {
     show({ ...answered(), stale: true });
-    expect(screen.getByText('out of date')).toBeInTheDocument();
+    expect(await screen.findByText('out of date')).toBeInTheDocument();
   });
 });
 

@@ -1,4 +1,4 @@
-import { act, fireEvent, render, screen, within } from '@testing-library/react';
+import { act, fireEvent, render, screen, waitFor, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { beforeEach, describe, expect, it, vi } from 'vitest';
 import { OrderEditor } from '../../../app/order/OrderEditor';
@@ -136,14 +136,14 @@ describe('the rail', () => {
     expect(orderOnPage().limits[0]).toEqual(KV40);
   });
 
-  it('shows the mix and its room, and greys them while the answer is out of date', () => {
+  it('shows the mix and its room, and greys them while the answer is out of date', async () => {
     setUp();
     act(() => answerWith({ checks: [KV40_CHECK] }));
     expect(screen.getByTestId('mix')).toHaveTextContent('46.00');
     expect(screen.getByText('room 4.60 mm²/s')).toBeVisible();
     expect(screen.getByTestId('mix')).not.toHaveAttribute('data-stale');
     act(() => setAnswer(ORDER_ID, { stale: true }));
-    expect(screen.getByTestId('mix')).toHaveAttribute('data-stale');
+    await waitFor(() => expect(screen.getByTestId('mix')).toHaveAttribute('data-stale'));
   });
 
   it('marks each stock of the recipe, and no other', () => {

@@ -1,8 +1,21 @@
 import { render, screen } from '@testing-library/react';
-import { afterEach, expect, it, vi } from 'vitest';
+import { afterEach, beforeEach, expect, it, vi } from 'vitest';
 import { ScrollRegion } from '../../../app/parts/ScrollRegion';
 
-afterEach(() => void vi.restoreAllMocks());
+/** As browsers do, it tells of every element once when it begins to be observed. */
+class Sizes {
+  constructor(private readonly tell: () => void) {}
+  observe() {
+    this.tell();
+  }
+  disconnect() {}
+}
+
+beforeEach(() => vi.stubGlobal('ResizeObserver', Sizes));
+afterEach(() => {
+  vi.restoreAllMocks();
+  vi.unstubAllGlobals();
+});
 
 // jsdom lays nothing out: the widths are given here.
 it.each([

@@ -59,13 +59,13 @@ describe('the list of orders', () => {
 });
 
 describe('the bar at the foot', () => {
-  it('keeps cost and proof in sight, and says when they are out of date', () => {
+  it('keeps cost and proof in sight, and says when they are out of date', async () => {
     setUp();
     act(() => answerWith({ recipe: [], costPerTonne: 912.6 }));
     const bar = within(screen.getByRole('link', { name: /^To the answer/ }));
     expect(screen.getByRole('link')).toHaveAccessibleName(/^To the answer:\s*€913.t\s*proven cheapest$/);
     act(() => setAnswer(ORDER_ID, { stale: true }));
-    expect(bar.getByText('being worked out again')).toBeInTheDocument();
+    expect(await bar.findByText('being worked out again')).toBeInTheDocument();
     expect(screen.getByRole('link', { name: /^To the answer/ })).not.toHaveAccessibleName(/proven/);
   });
 });
