@@ -25,12 +25,6 @@ export interface ShadowPrices {
   line?: { price: number; slope: number };
 }
 
-/** A ray without what is but rounding beside its greatest entry: a proof should not seem to lean on it. */
-function withoutTraces(ray: Float64Array): Float64Array {
-  const greatest = ray.reduce((most, value) => Math.max(most, Math.abs(value)), 0);
-  return ray.map((value) => (Math.abs(value) > 1e-12 * greatest ? value : 0));
-}
-
 /** The interval's lower and upper end, "VI at most", and two lines for "VI at least", in this order. */
 const DYNAMIC_ROWS = 5;
 const FIRST_ABOVE = 3;
@@ -263,8 +257,7 @@ export class SearchProgram {
   certifies(ray: Float64Array): Certificate {
     const { model, lower, upper } = this;
     const nothing = new Float64Array(this.#columns);
-    const plain = withoutTraces(ray);
-    for (const turned of [plain, plain.map((value) => -value), ray, ray.map((value) => -value)]) {
+    for (const turned of [ray, ray.map((value) => -value)]) {
       const priced = this.#priceOut(nothing, turned, 1);
       const bound = boundOverBox(priced, lower, upper);
       if (!(bound > 0)) continue;
