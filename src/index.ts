@@ -6,6 +6,7 @@
 export { type PredictOptions, predictBlend } from './blend/predictBlend';
 export type { PredictedProperties, PredictedProperty, RuleSpread } from './blend/predictedProperties';
 export type { PredictionOptions, PropertyAt } from './blend/predictionOptions';
+export { type Alternatives, type AlternativesOptions, alternatives } from './explain/alternatives';
 export type {
   Alternative,
   Demand,

@@ -15,6 +15,7 @@ const NEW_RULES: Record<ShareRule['kind'], { label: string; rule: ShareRule }> =
   ratio: { label: 'ratio of some stocks to others', rule: { kind: 'ratio', set: {}, to: {} } },
   count: { label: 'number of stocks used', rule: { kind: 'count', set: {} } },
   excludes: { label: 'this stock not with those', rule: { kind: 'excludes', stockId: '', set: {} } },
+  needs: { label: 'this stock only with those', rule: { kind: 'needs', stockId: '', set: {} } },
   flag: { label: 'flag that every stock carries', rule: { kind: 'flag', flag: '' } },
 };
 

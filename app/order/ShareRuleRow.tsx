@@ -1,6 +1,6 @@
 import type { Product, ShareRule } from '../../src';
 import { RuleRow } from './RuleRow';
-import { CountRule, ExcludesRule, FlagRule, RatioRule, ShareOfSetRule } from './ruleFields';
+import { CountRule, ExcludesRule, FlagRule, NeedsRule, RatioRule, ShareOfSetRule } from './ruleFields';
 
 export interface RuleFieldsProps<Kind extends ShareRule['kind']> {
   rule: Extract<ShareRule, { kind: Kind }>;
@@ -40,6 +40,8 @@ function fieldsOf(rule: ShareRule, products: readonly Product[], onChange: (rule
       return <CountRule rule={rule} {...shared} />;
     case 'excludes':
       return <ExcludesRule rule={rule} {...shared} />;
+    case 'needs':
+      return <NeedsRule rule={rule} {...shared} />;
     case 'flag':
       return <FlagRule rule={rule} {...shared} />;
   }

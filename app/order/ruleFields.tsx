@@ -87,21 +87,43 @@ export function CountRule({ rule, products, onChange }: RuleFieldsProps<'count'>
   );
 }
 
-export function ExcludesRule({ rule, products, onChange }: RuleFieldsProps<'excludes'>) {
+export function ExcludesRule(props: RuleFieldsProps<'excludes'>) {
+  return <PairingRule {...props} what="excludes others" between="is used, none of" setLabel="Stocks excluded" />;
+}
+
+/** A stock that is used only where one of some others is. */
+export function NeedsRule(props: RuleFieldsProps<'needs'>) {
+  return <PairingRule {...props} what="needs others" between="is used, at least one of" setLabel="Stocks needed" />;
+}
+
+interface PairingWords {
+  what: string;
+  between: string;
+  setLabel: string;
+}
+
+function PairingRule({
+  rule,
+  products,
+  onChange,
+  what,
+  between,
+  setLabel,
+}: RuleFieldsProps<'excludes' | 'needs'> & PairingWords) {
   return (
     <>
       <span className={styles.words}>Where</span>
       <Select
-        label="The stock that excludes others"
+        label={`The stock that ${what}`}
         hideLabel
         value={rule.stockId}
         placeholder="choose a stock …"
         options={products.map(({ id, name }) => ({ value: id, label: name }))}
         onChange={(stockId) => onChange({ ...rule, stockId })}
       />
-      <span className={styles.words}>is used, none of</span>
+      <span className={styles.words}>{between}</span>
       <StockSetField
-        label="Stocks excluded"
+        label={setLabel}
         value={rule.set}
         products={products}
         onChange={(set) => onChange({ ...rule, set })}

@@ -9,8 +9,9 @@ import type { OrderProblem } from './outcome';
 
 type Data = Record<string, unknown>;
 
-const SHARE_KINDS = ['share', 'ratio', 'count', 'excludes', 'flag'];
+const SHARE_KINDS = ['share', 'ratio', 'count', 'excludes', 'needs', 'flag'];
 const COST_BASES = ['tonne', 'cubic metre'];
+const DOSE_UNITS = ['share', 'tonnes'];
 const SHARE_BASES = ['mix', 'base oil'];
 
 function isObject(value: unknown): value is Data {
@@ -101,6 +102,7 @@ export function checkShape(order: Order): OrderProblem[] {
   shape.list(['doses'], data.doses, false).forEach((dose, place) => {
     shape.text(['doses', place, 'stockId'], dose.stockId);
     shape.word(['doses', place, 'of'], dose.of, SHARE_BASES);
+    shape.word(['doses', place, 'unit'], dose.unit, DOSE_UNITS);
   });
   shape.list(['shares'], data.shares, false).forEach((rule, place) => void checkShareShape(shape, rule, place));
   shape

@@ -43,6 +43,11 @@ export interface Dose {
   required?: boolean;
   /** Default 'mix'. */
   of?: ShareBasis;
+  /**
+   * 'tonnes': the numbers are tonnes in the batch, as for a stock to be used up or what the kettle still holds. Needs a
+   * batch size; with a free one the least counts on the smallest batch, the most on the largest. Default 'share'.
+   */
+  unit?: 'share' | 'tonnes';
 }
 
 /** A set of stocks: the union of the named stocks, families and carriers of a flag. */
@@ -62,6 +67,8 @@ export type ShareRule =
   | { kind: 'count'; set: StockSet; min?: number; max?: number }
   /** Where this stock is used, none of that set is. */
   | { kind: 'excludes'; stockId: string; set: StockSet }
+  /** Where this stock is used, at least one of that set is. */
+  | { kind: 'needs'; stockId: string; set: StockSet }
   /** Every stock in the mix carries the flag. */
   | { kind: 'flag'; flag: string };
 

@@ -26,9 +26,10 @@ function rangeInWords(min: number | undefined, max: number | undefined, write: (
 }
 
 /** A dose in words, "Gear package 1.8 % of the mix". */
-export function doseInWords({ stockId, exactly, min, max, of }: Dose, stocks: readonly Stock[]): string {
-  const range = exactly === undefined ? rangeInWords(min, max, percent) : percent(exactly);
-  return `${nameOf(stocks, stockId)} ${range} of the ${of ?? 'mix'}`;
+export function doseInWords({ stockId, exactly, min, max, of, unit }: Dose, stocks: readonly Stock[]): string {
+  const write = unit === 'tonnes' ? (tonnes: number) => `${tonnes} t` : percent;
+  const range = exactly === undefined ? rangeInWords(min, max, write) : write(exactly);
+  return `${nameOf(stocks, stockId)} ${range}${unit === 'tonnes' ? '' : ` of the ${of ?? 'mix'}`}`;
 }
 
 /** A share rule in words, "ester at most 15 % of the mix". */
@@ -44,6 +45,8 @@ export function ruleInWords(rule: ShareRule, stocks: readonly Stock[]): string {
       return `${rangeInWords(rule.min, rule.max, String)} of ${setInWords(rule.set, stocks)}`;
     case 'excludes':
       return `${nameOf(stocks, rule.stockId)} not together with ${setInWords(rule.set, stocks)}`;
+    case 'needs':
+      return `${nameOf(stocks, rule.stockId)} only together with ${setInWords(rule.set, stocks)}`;
     case 'flag':
       return `every stock carries "${rule.flag}"`;
   }

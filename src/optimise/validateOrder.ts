@@ -48,6 +48,7 @@ function checkStock(stock: Stock, problems: Problems): void {
   problems.number(at('leastDoseIfUsed'), stock.leastDoseIfUsed, `Least dose of ${stock.name}`, 0, 1);
   problems.number(at('greatestDose'), stock.greatestDose, `Greatest dose of ${stock.name}`, 0, 1);
   problems.number(at('availableTonnes'), stock.availableTonnes, `Quantity on hand of ${stock.name}`, 0);
+  problems.number(at('flushCost'), stock.flushCost, `Flush cost of ${stock.name}`, 0);
   problems.number(at('lotTonnes'), stock.lotTonnes, `Drum size of ${stock.name}`, 1e-6);
   problems.number(at('blendWeight'), stock.blendWeight, `Blending weight of ${stock.name}`, 1e-3, 1e3);
   for (const figure of stock.figures) {
@@ -107,6 +108,18 @@ function checkLimit(limit: Limit, place: number, order: Order, problems: Problem
   }
 }
 
+function checkDoseInTonnes(dose: Dose, path: Path, name: string, order: Order, problems: Problems): void {
+  if (dose.of === 'base oil') problems.add([...path, 'unit'], `Dose of ${name}: tonnes are counted on the mix.`);
+  if (order.batchTonnes === undefined) {
+    problems.add(
+      [...path, 'unit'],
+      `Dose of ${name}: tonnes need a batch size. Enter it, or give the dose in per cent.`,
+    );
+  } else if (dose.exactly !== undefined && typeof order.batchTonnes === 'object') {
+    problems.add([...path, 'exactly'], `Dose of ${name}: an exact number of tonnes needs a fixed batch size.`);
+  }
+}
+
 function checkDose(dose: Dose, place: number, order: Order, problems: Problems): void {
   const path: Path = ['doses', place];
   const stock = order.stocks.find((candidate) => candidate.id === dose.stockId);
@@ -115,8 +128,9 @@ function checkDose(dose: Dose, place: number, order: Order, problems: Problems):
     return;
   }
   for (const key of ['exactly', 'min', 'max'] as const) {
-    problems.number([...path, key], dose[key], `Dose of ${stock.name}`, 0, 1);
+    problems.number([...path, key], dose[key], `Dose of ${stock.name}`, 0, dose.unit === 'tonnes' ? LARGEST : 1);
   }
+  if (dose.unit === 'tonnes') checkDoseInTonnes(dose, path, stock.name, order, problems);
   problems.range(path, dose.min, dose.max, `Dose of ${stock.name}`);
   if (dose.exactly !== undefined && (dose.min !== undefined || dose.max !== undefined)) {
     problems.add([...path, 'exactly'], `Dose of ${stock.name}: give either an exact dose or a range.`);
@@ -139,10 +153,10 @@ function checkShare(rule: ShareRule, place: number, order: Order, problems: Prob
     const empty = !set.stockIds?.length && !set.families?.length && set.flag === undefined;
     if (empty) problems.add(path, 'The rule names no stocks. Pick stocks, families or a flag.');
   }
-  if (rule.kind === 'excludes' && !known.has(rule.stockId)) {
+  if ((rule.kind === 'excludes' || rule.kind === 'needs') && !known.has(rule.stockId)) {
     problems.add(path, 'The rule names a stock that is not in this order.');
   }
-  if (rule.kind === 'excludes' || rule.kind === 'flag') return;
+  if (rule.kind === 'excludes' || rule.kind === 'needs' || rule.kind === 'flag') return;
   const top = rule.kind === 'share' ? 1 : LARGEST;
   problems.number([...path, 'min'], rule.min, 'The least of the rule', 0, top);
   problems.number([...path, 'max'], rule.max, 'The most of the rule', 0, top);

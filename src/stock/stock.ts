@@ -19,6 +19,8 @@ export interface Stock {
   availableTonnes?: number;
   /** Size of one whole drum or tote [t]: with a fixed batch the stock is charged in whole ones. */
   lotTonnes?: number;
+  /** What using the stock costs a batch whatever its share: flushing a line, opening a tank [currency]. Needs a fixed batch. */
+  flushCost?: number;
   /** Flags such as "food contact" or "no zinc" that an order may ask every stock to carry. */
   flags?: string[];
 }

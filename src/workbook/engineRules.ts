@@ -73,6 +73,10 @@ function engineShares(rule: ShareRule, known: StocksOf): ShareRule[] {
       ? []
       : stocksFor(rule.stockId, known).map(({ id }) => ({ ...rule, stockId: id, set }));
   }
+  if (rule.kind === 'needs') {
+    const set = stockSet(rule.set, known, isGone(rule.set, known));
+    return stocksFor(rule.stockId, known).map(({ id }) => ({ ...rule, stockId: id, set }));
+  }
   const needed = (rule.min ?? 0) > 0;
   if (rule.kind === 'ratio') {
     const to = isGone(rule.to, known) ? rule.to : stockSet(rule.to, known, false);

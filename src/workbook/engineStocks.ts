@@ -51,8 +51,8 @@ function stockOf(
   product: Product,
   own: Pick<Stock, 'id' | 'name' | 'pricePerTonne' | 'figures' | 'availableTonnes'>,
 ): Stock {
-  const { family, blendWeight, leastDoseIfUsed, greatestDose, lotTonnes, flags } = product;
-  const optional = { blendWeight, leastDoseIfUsed, greatestDose, lotTonnes, flags };
+  const { family, blendWeight, leastDoseIfUsed, greatestDose, lotTonnes, flushCost, flags } = product;
+  const optional = { blendWeight, leastDoseIfUsed, greatestDose, lotTonnes, flushCost, flags };
   const given = Object.entries(optional).filter(([, value]) => value !== undefined);
   const { availableTonnes, ...rest } = own;
   const onHand = availableTonnes === undefined ? {} : { availableTonnes };

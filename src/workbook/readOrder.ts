@@ -39,6 +39,7 @@ const readDose = record<Dose>({
   max: optional(number),
   required: optional(flag),
   of: readBasis,
+  unit: optional(oneOf<NonNullable<Dose['unit']>>('share', 'tonnes')),
 });
 
 const readSet = record<StockSet>({
@@ -57,10 +58,11 @@ const RULES: { readonly [Kind in ShareRule['kind']]: Reader<RuleOf<Kind>> } = {
   count: record<RuleOf<'count'>>({ kind: oneOf('count'), set: readSet, ...ends }),
   // A rule may be unfinished: no stock chosen yet, no set, no ends.
   excludes: record<RuleOf<'excludes'>>({ kind: oneOf('excludes'), stockId: text, set: readSet }),
+  needs: record<RuleOf<'needs'>>({ kind: oneOf('needs'), stockId: text, set: readSet }),
   flag: record<RuleOf<'flag'>>({ kind: oneOf('flag'), flag: text }),
 };
 
-const RULE_KINDS = ['share', 'ratio', 'count', 'excludes', 'flag'] as const;
+const RULE_KINDS = ['share', 'ratio', 'count', 'excludes', 'needs', 'flag'] as const;
 
 function readShare(value: unknown, place: Place): ShareRule {
   const kind = oneOf(...RULE_KINDS)(object(value, place).get('kind'), { ...place, path: `${place.path}.kind` });

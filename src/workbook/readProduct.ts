@@ -35,6 +35,7 @@ export const readProduct = record<Product>({
   leastDoseIfUsed: optional(number),
   greatestDose: optional(number),
   lotTonnes: optional(number),
+  flushCost: optional(number),
   flags: optional(listOf(text)),
   lots: listOf(readLot),
   note: optional(text),

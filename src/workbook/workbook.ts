@@ -34,6 +34,8 @@ export interface Product {
   leastDoseIfUsed?: number;
   greatestDose?: number;
   lotTonnes?: number;
+  /** What using it costs a batch, whatever its share: flushing a line, opening a tank. */
+  flushCost?: number;
   flags?: string[];
   lots: Lot[];
   note?: string;

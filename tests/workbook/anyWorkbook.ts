@@ -70,6 +70,7 @@ const product = partly<Product>(
     leastDoseIfUsed: number,
     greatestDose: number,
     lotTonnes: number,
+    flushCost: number,
     flags: fc.array(text, { maxLength: 3 }),
     lots: fc.uniqueArray(lot, { maxLength: 3, selector: (entry) => entry.id }),
     note: text,
@@ -113,6 +114,12 @@ const share: fc.Arbitrary<ShareRule> = fc.oneof(
     'stockId',
     'set',
   ),
+  partly<Extract<ShareRule, { kind: 'needs' }>>(
+    { kind: fc.constant('needs'), stockId: id, set },
+    'kind',
+    'stockId',
+    'set',
+  ),
   partly<Extract<ShareRule, { kind: 'flag' }>>({ kind: fc.constant('flag'), flag: text }, 'kind', 'flag'),
 );
 
@@ -131,7 +138,15 @@ const limit = partly<WorkbookOrder['limits'][number]>(
 );
 
 const dose = partly<WorkbookOrder['doses'][number]>(
-  { stockId: id, exactly: number, min: number, max: number, required: fc.boolean(), of: basis },
+  {
+    stockId: id,
+    exactly: number,
+    min: number,
+    max: number,
+    required: fc.boolean(),
+    of: basis,
+    unit: fc.constantFrom('share', 'tonnes'),
+  },
   'stockId',
 );
 

@@ -5,6 +5,7 @@ import type { Stock } from '../../stock/stock';
 import type { Order } from '../order';
 import type { LeftOut, OrderProblem } from '../outcome';
 import { percent } from '../ruleInWords';
+import { doseShares } from './doseShares';
 import { limitCelsius, limitDefinition } from './limitEnds';
 
 /** The stocks the search may use, and the properties it needs of them. */
@@ -124,7 +125,8 @@ function whyLeftOut(
 /** Compulsory doses of stocks that take the value of the rest, above the dose that is allowed for that. */
 function dosesAboveTheRest(order: Order, takingTheRest: ReadonlyMap<string, string>): OrderProblem[] {
   const most = greatestDoseAsTheRest(order);
-  return (order.doses ?? []).flatMap((dose) => {
+  return (order.doses ?? []).flatMap((stated) => {
+    const dose = doseShares(stated, order);
     const key = takingTheRest.get(dose.stockId);
     const stock = order.stocks.find((candidate) => candidate.id === dose.stockId);
     if (key === undefined || !stock || !isCompulsory(order, dose.stockId)) return [];

@@ -1,6 +1,7 @@
 import { isBaseOil } from '../../stock/family';
 import type { Dose, Order } from '../order';
 import { greatestDoseAsTheRest, isCompulsory } from './candidates';
+import { doseShares } from './doseShares';
 import { LEAST_SHARE_THAT_COUNTS, type ModelBuilder } from './modelBuilder';
 
 /** Smallest batch of the order [t]: the one for which stock on hand lasts longest. */
@@ -21,6 +22,9 @@ export function addStockBounds(builder: ModelBuilder, order: Order, takingTheRes
     if (least > 0) {
       if (isCompulsory(order, stock.id)) builder.raiseLower(place, least);
       else builder.presenceOf(place);
+    }
+    if (stock.flushCost && typeof order.batchTonnes === 'number') {
+      builder.payForPresence(place, stock.flushCost / order.batchTonnes);
     }
     if (stock.lotTonnes !== undefined && typeof order.batchTonnes === 'number') {
       builder.wholeLots.push({ stock: place, share: stock.lotTonnes / order.batchTonnes });
@@ -59,13 +63,14 @@ function leastPresence(builder: ModelBuilder, place: number): number {
 
 /** The doses of the order. A dose of a stock that was left out (and is not compulsory) has nothing to say. */
 export function addDoses(builder: ModelBuilder, order: Order): void {
-  order.doses?.forEach((dose, index) => {
+  order.doses?.forEach((stated, index) => {
+    const dose = doseShares(stated, order);
     const place = builder.placeOf(dose.stockId);
     if (place === undefined) return;
     const compulsory = isCompulsory(order, dose.stockId);
     if (dose.of === 'base oil') addDoseOfBase(builder, place, dose, index);
     else addDoseOfMix(builder, place, dose, compulsory);
-    const stated = (dose.exactly ?? dose.min ?? 0) > 0;
-    if (compulsory && !stated) builder.raiseLower(place, leastPresence(builder, place));
+    const hasLeast = (dose.exactly ?? dose.min ?? 0) > 0;
+    if (compulsory && !hasLeast) builder.raiseLower(place, leastPresence(builder, place));
   });
 }

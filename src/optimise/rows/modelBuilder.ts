@@ -76,6 +76,11 @@ export class ModelBuilder {
     return presence;
   }
 
+  /** Makes the presence of a stock cost something per tonne of mix. */
+  payForPresence(stock: number, cost: number): void {
+    this.#cost[this.presenceOf(stock).column] += cost;
+  }
+
   /** Ties every presence to its share: share ≤ upper · presence, share ≥ least · presence. */
   #tiePresences(): void {
     for (const { stock, column, least } of this.presences) {

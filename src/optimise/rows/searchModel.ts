@@ -17,7 +17,7 @@ export interface ModelRow extends LinearRow {
   source: RowSource;
 }
 
-/** A stock whose presence is a yes-or-no: column of the binary, least and greatest share when present. */
+/** A stock whose presence is a yes-or-no: column of the binary (which may cost something), least share when present. */
 export interface Presence {
   stock: number;
   column: number;

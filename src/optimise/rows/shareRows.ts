@@ -57,6 +57,21 @@ function addExcludes(builder: ModelBuilder, rule: Extract<ShareRule, { kind: 'ex
   });
 }
 
+function addNeeds(builder: ModelBuilder, rule: Extract<ShareRule, { kind: 'needs' }>, source: RowSource): void {
+  const place = builder.placeOf(rule.stockId);
+  if (place === undefined) return;
+  const entries: [number, number][] = [[builder.presenceOf(place).column, 1]];
+  builder.stocks.forEach((stock, other) => {
+    if (other === place || !isInSet(stock, rule.set)) return;
+    const presence = builder.presenceOf(other);
+    if (builder.lower(other) === 0) {
+      presence.least = Math.max(presence.least, Math.min(LEAST_SHARE_THAT_COUNTS, builder.upper(other)));
+    }
+    entries.push([presence.column, -1]);
+  });
+  builder.addRow(source, -Infinity, 0, entries);
+}
+
 /** The share rules of the order; flags were applied when the candidates were chosen. */
 export function addShares(builder: ModelBuilder, order: Order): void {
   order.shares?.forEach((rule, share) => {
@@ -65,6 +80,7 @@ export function addShares(builder: ModelBuilder, order: Order): void {
     else if (rule.kind === 'ratio') addRatio(builder, rule, source);
     else if (rule.kind === 'count') addCount(builder, rule, source);
     else if (rule.kind === 'excludes') addExcludes(builder, rule, source);
+    else if (rule.kind === 'needs') addNeeds(builder, rule, source);
   });
 }
 

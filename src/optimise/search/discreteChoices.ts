@@ -33,8 +33,13 @@ export function keepsPresences(model: SearchModel, rows: readonly ModelRow[], va
   const doses = model.presences.every(
     ({ stock, least }) => !(values[stock] > NO_SHARE) || values[stock] >= least - NO_SHARE,
   );
+  // A stock in the mix is paid for in full, not by the part of its presence that the relaxation needs.
+  const paid = model.presences.every(
+    ({ stock, column }) => model.cost[column] <= 0 || !(values[stock] > NO_SHARE) || values[column] >= 1 - NO_SHARE,
+  );
   return (
     doses &&
+    paid &&
     rows.every((row) => activity(row, presences) >= row.lower - 1e-9 && activity(row, presences) <= row.upper + 1e-9)
   );
 }
