@@ -131,6 +131,12 @@ function uncounted(order: Order, recipe: Recipe): Caution[] {
   if (inDrums.length > 0 && typeof order.batchTonnes !== 'number') {
     cautions.push({ kind: 'model', message: `${names(inDrums)}: whole drums are counted for a fixed batch only.` });
   }
+  const flushed = order.stocks.filter(
+    (stock) => (stock.flushCost ?? 0) > 0 && recipe.some((line) => line.stockId === stock.id),
+  );
+  if (flushed.length > 0 && typeof order.batchTonnes !== 'number') {
+    cautions.push({ kind: 'model', message: `${names(flushed)}: flush costs are counted for a fixed batch only.` });
+  }
   const bent = order.limits.filter((limit) => limit.aim !== undefined && !averagesByMass(limit, order));
   for (const limit of bent) {
     const message = `${limitInWords(limit, order)}: deviations from the aim are counted to first order near it.`;

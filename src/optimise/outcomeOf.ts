@@ -46,7 +46,7 @@ export function outcomeOf(
   return {
     ...base,
     recipe,
-    ...costsOf(order.stocks, recipe),
+    ...costsOf(order, recipe),
     objective: found.best.cost,
     properties,
     checks,
@@ -120,14 +120,20 @@ export function cubicMetresPerTonne(stock: Stock): number | undefined {
   return density.state === 'known' ? 1000 / density.value : undefined;
 }
 
-/** Cost per tonne from prices and shares alone, and per m³ where every density is known. */
-function costsOf(stocks: readonly Stock[], recipe: Recipe): Pick<BlendOutcome, 'costPerTonne' | 'costPerCubicMetre'> {
+/** What using a stock costs per tonne of mix, beside its price: nothing where the batch is not fixed. */
+export function flushCostPerTonne({ flushCost }: Stock, { batchTonnes }: Order): number {
+  return flushCost && typeof batchTonnes === 'number' ? flushCost / batchTonnes : 0;
+}
+
+/** Cost per tonne from prices, shares and flush costs alone, and per m³ where every density is known. */
+function costsOf(order: Order, recipe: Recipe): Pick<BlendOutcome, 'costPerTonne' | 'costPerCubicMetre'> {
+  const { stocks } = order;
   let costPerTonne = 0;
   let volume: number | undefined = 0;
   for (const { stockId, massFraction } of recipe) {
     const stock = stocks.find((candidate) => candidate.id === stockId);
     if (!stock) continue;
-    costPerTonne += stock.pricePerTonne * massFraction;
+    costPerTonne += stock.pricePerTonne * massFraction + (massFraction > 0 ? flushCostPerTonne(stock, order) : 0);
     const specific = cubicMetresPerTonne(stock);
     volume = volume === undefined || specific === undefined ? undefined : volume + specific * massFraction;
   }

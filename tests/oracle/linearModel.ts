@@ -33,13 +33,15 @@ export class LinearModel {
     private readonly moving: number,
     whole: boolean,
   ) {
-    const { stocks, rows, choices, lower, upper, least, cost, volumes } = order;
+    const { stocks, rows, choices, lower, upper, least, fixed, cost, volumes } = order;
     this.count = stocks.length;
     const n = this.count;
     const chooses =
       choices.most !== undefined ||
       choices.counts.length > 0 ||
       choices.excludes.length > 0 ||
+      choices.needs.length > 0 ||
+      fixed.some((price) => price > 0) ||
       least.some((l) => l > 0);
     this.hasChoices = chooses;
     const columns = chooses ? 2 * n : n;
@@ -84,6 +86,13 @@ export class LinearModel {
         for (const other of members) all.push({ values: sum([from, other]), lower: -Infinity, upper: 1 });
       }
     }
+    for (const { from, members } of chooses ? choices.needs : []) {
+      all.push({
+        values: [[n + from, 1], ...members.map((i): [number, number] => [n + i, -1])],
+        lower: -Infinity,
+        upper: 0,
+      });
+    }
     this.firstMoving = all.length;
     for (let k = 0; k < moving; k++)
       all.push({ values: dense(stocks.map(() => 1)), lower: -Infinity, upper: Infinity });
@@ -96,7 +105,7 @@ export class LinearModel {
     this.model = highs.createModel({
       numCols: columns,
       numRows: all.length,
-      colCost: [...cost, ...binary(0)],
+      colCost: [...cost, ...(chooses ? fixed : [])],
       colLower: [...(volumes ? lower.map(() => 0) : lower), ...(chooses ? lower.map((l) => (l > 0 ? 1 : 0)) : [])],
       colUpper: [...(volumes ? upper.map(() => Infinity) : upper), ...binary(1)],
       rowLower: all.map((row) => row.lower),
@@ -163,7 +172,10 @@ export class LinearModel {
     const status = this.model.getModelStatus();
     if (status === modelStatus.infeasible) return { status: 'infeasible', cost: Infinity, x: [] };
     if (status !== modelStatus.optimal) return { status: 'unknown', cost: Number.NaN, x: [] };
-    const x = Array.from(this.model.getSolution().colValue).slice(0, this.count);
-    return { status: 'optimal', cost: x.reduce((sum, v, i) => sum + v * this.order.cost[i], 0), x };
+    const values = Array.from(this.model.getSolution().colValue);
+    const x = values.slice(0, this.count);
+    const { cost, fixed } = this.order;
+    const paid = this.hasChoices ? fixed.reduce((sum, price, i) => sum + price * values[this.count + i], 0) : 0;
+    return { status: 'optimal', cost: x.reduce((sum, v, i) => sum + v * cost[i], paid), x };
   }
 }

@@ -23,6 +23,8 @@ export interface OrderRows {
   upper: number[];
   /** Where positive: the stock is absent, or at least this much. */
   least: number[];
+  /** What using the stock costs, per tonne of mix, whatever its share. */
+  fixed: number[];
   rows: Row[];
   viscosity?: { terms: ViscosityTerm[]; index: (kv: number) => number };
   vi?: { min?: number; max?: number };
@@ -32,6 +34,7 @@ export interface OrderRows {
     most?: number;
     counts: { members: number[]; min: number; max: number }[];
     excludes: { from: number; members: number[] }[];
+    needs: { from: number; members: number[] }[];
   };
   /** Specific volumes [L/kg], for costs per m³. */
   volumes?: number[];
@@ -95,9 +98,17 @@ export function orderRows(order: Order): OrderRows {
     lower: stocks.map(() => 0),
     upper,
     least: stocks.map((stock) => stock.leastDoseIfUsed ?? 0),
+    fixed: stocks.map((stock) =>
+      typeof order.batchTonnes === 'number' ? (stock.flushCost ?? 0) / order.batchTonnes : 0,
+    ),
     rows: [],
     window: { low: 0, high: Infinity },
-    choices: { ...(order.mostStocks === undefined ? {} : { most: order.mostStocks }), counts: [], excludes: [] },
+    choices: {
+      ...(order.mostStocks === undefined ? {} : { most: order.mostStocks }),
+      counts: [],
+      excludes: [],
+      needs: [],
+    },
     ...(order.costBasis === 'cubic metre' ? { volumes: stocks.map(volumeOf) } : {}),
   };
   if (order.limits.some((limit) => limit.property === 'kv' || limit.property === 'vi')) {

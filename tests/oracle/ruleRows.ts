@@ -26,8 +26,14 @@ function shareRows(name: string, member: boolean[], whole: boolean[], min?: numb
 export function applyDoses(order: Order, built: OrderRows): void {
   for (const dose of order.doses ?? []) {
     const place = built.stocks.findIndex((stock) => stock.id === dose.stockId);
-    const min = dose.exactly ?? dose.min;
-    const max = dose.exactly ?? dose.max;
+    // Tonnes over the batch: the smallest for what must go in, the largest for what may.
+    const { batchTonnes: batch = Number.NaN } = order;
+    const [small, large] = typeof batch === 'number' ? [batch, batch] : [batch.min, batch.max];
+    const [unitMin, unitMax] = dose.unit === 'tonnes' ? [small, large] : [1, 1];
+    const least = dose.exactly ?? dose.min;
+    const most = dose.exactly ?? dose.max;
+    const min = least === undefined ? undefined : least / unitMin;
+    const max = most === undefined ? undefined : most / unitMax;
     if (place < 0) continue;
     if (dose.of === 'base oil') {
       const member = built.stocks.map((_, i) => i === place);
@@ -60,8 +66,11 @@ export function applyShares(order: Order, built: OrderRows): void {
       // "At least so many" needs a share from which on a stock counts: a ten-thousandth.
       if ((rule.min ?? 0) > 0) for (const i of places) built.least[i] = Math.max(built.least[i], 1e-6);
     } else {
+      const list = rule.kind === 'needs' ? built.choices.needs : built.choices.excludes;
+      // As for "at least so many": a trace is no use.
+      if (rule.kind === 'needs') for (const i of places) built.least[i] = Math.max(built.least[i], 1e-6);
       const from = stocks.findIndex((stock) => stock.id === rule.stockId);
-      if (from >= 0) built.choices.excludes.push({ from, members: places.filter((i) => i !== from) });
+      if (from >= 0) list.push({ from, members: places.filter((i) => i !== from) });
     }
   }
 }

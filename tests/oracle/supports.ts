@@ -7,6 +7,7 @@ function allowed({ choices, lower, upper, least }: OrderRows, used: readonly boo
   if (used.some((u, i) => (!u && lower[i] > 0) || (u && Math.max(lower[i], least[i]) > upper[i]))) return false;
   if (choices.most !== undefined && used.filter(Boolean).length > choices.most) return false;
   if (choices.counts.some(({ members, min, max }) => count(members) > max || count(members) < min)) return false;
+  if (choices.needs.some(({ from, members }) => used[from] && count(members) === 0)) return false;
   return choices.excludes.every(({ from, members }) => !used[from] || count(members) === 0);
 }
 
@@ -17,7 +18,8 @@ function settled(rows: OrderRows, used: readonly boolean[]): OrderRows {
     lower: rows.lower.map((low, i) => (used[i] ? Math.max(low, rows.least[i]) : 0)),
     upper: rows.upper.map((high, i) => (used[i] ? high : 0)),
     least: rows.least.map(() => 0),
-    choices: { counts: [], excludes: [] },
+    fixed: rows.fixed.map(() => 0),
+    choices: { counts: [], excludes: [], needs: [] },
   };
 }
 
@@ -33,7 +35,9 @@ export function enumerateSupports(order: Order): Pick<OracleAnswer, 'status' | '
   for (let mask = 1; mask < 1 << n; mask++) {
     const used = rows.stocks.map((_, i) => (mask & (1 << i)) !== 0);
     if (!allowed(rows, used)) continue;
-    const answer = searchRows(settled(rows, used), best.cost);
+    const fixed = used.reduce((sum, u, i) => sum + (u ? rows.fixed[i] : 0), 0);
+    const bare = searchRows(settled(rows, used), best.cost - fixed);
+    const answer = bare.status === 'solved' ? { ...bare, cost: bare.cost + fixed } : bare;
     if (answer.status === 'undecided') return { status: 'undecided', cost: Number.NaN, recipe: [] };
     if (answer.status === 'solved' && answer.cost < best.cost) best = answer;
   }

@@ -260,9 +260,10 @@ export class BranchAndBound {
   }
 }
 
-/** What the stocks of a solution cost, deviations from aims apart. */
-function priceOf({ stocks, cost }: SearchModel, values: Float64Array): number {
-  return stocks.reduce((sum, _, column) => sum + cost[column] * values[column], 0);
+/** What the stocks of a solution cost, using them included, deviations from aims apart. */
+function priceOf({ stocks, presences, cost }: SearchModel, values: Float64Array): number {
+  const shares = stocks.reduce((sum, _, column) => sum + cost[column] * values[column], 0);
+  return presences.reduce((sum, { column }) => sum + cost[column] * values[column], shares);
 }
 
 /** The KV100 a mix of the model can have; one point where limits and stocks leave none, for the rows to refute. */
