@@ -75,7 +75,7 @@ describe('against every set of stocks solved alone', () => {
       problems.push(...(found?.problems ?? []).map((problem) => `seed ${seed}: ${problem}`));
     }
     expect(problems).toEqual([]);
-    expect(listed).toBeGreaterThan(6);
+    expect(listed).toBeGreaterThanOrEqual(count / 2);
   });
 });
 
