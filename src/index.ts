@@ -7,6 +7,10 @@ export { type PredictOptions, predictBlend } from './blend/predictBlend';
 export type { PredictedProperties, PredictedProperty, RuleSpread } from './blend/predictedProperties';
 export type { PredictionOptions, PropertyAt } from './blend/predictionOptions';
 export { type Alternatives, type AlternativesOptions, alternatives } from './explain/alternatives';
+export { applyRelaxation } from './explain/applyRelaxation';
+export { demandInWords } from './explain/demandInWords';
+export { demandsOf, onlyDemands, withoutDemand } from './explain/demands';
+export { explainImpossible, type LadderOptions } from './explain/explainImpossible';
 export type {
   Alternative,
   Demand,
@@ -19,6 +23,7 @@ export type {
   UsedStock,
   WithinReach,
 } from './explain/explanation';
+export { type RecipeInSteps, roundRecipe } from './explain/roundRecipe';
 export { createEngine } from './optimise/defaultEngine';
 export { createCompactEngine } from './optimise/linear/compact/compactEngine';
 export { createHighsEngine, type HighsLoading } from './optimise/linear/highsEngine';

@@ -51,7 +51,7 @@ export interface Explanation {
   entries: EntryPrice[];
   used: UsedStock[];
   /** Why it ended: all done, or the time ran out before some of it. */
-  stopped: 'finished' | 'time limit' | 'cancelled';
+  stopped: 'finished' | 'time limit' | 'cancelled' | 'engine failed';
   solves: number;
 }
 
@@ -71,9 +71,12 @@ export interface WithinReach {
   limit: number;
   end: 'min' | 'max';
   stated: number;
-  /** The nearest end that can be met, in the property's unit: a recipe meets it, and one step nearer none does. */
+  /**
+   * The nearest multiple of the reporting unit that can be met, in the property's unit: a recipe meets it, and one step
+   * nearer none does. Absent: moving this end alone does not help (or, where not proven, that is not known).
+   */
   reachable?: number;
-  /** How close that is certified [property's unit]. */
+  /** How close that is certified: one reporting unit [property's unit]. */
   step: number;
   /** Cost per tonne of the cheapest recipe at `reachable`. */
   costPerTonne?: number;
@@ -82,11 +85,13 @@ export interface WithinReach {
 
 /** Why an order is impossible, and the nearest that is possible. */
 export interface Ladder {
-  /** A smallest set of demands that cannot hold together: without any one of them the rest can. */
+  /** A smallest set of demands that cannot hold together: without any one of them the rest of the set can. */
   conflict: Demand[];
-  /** False where time ran out: the set may then not be smallest. */
+  /** False where time ran out: the set cannot hold together, but may not be smallest. */
   conflictProven: boolean;
-  /** Limits of which moving one alone makes the order possible, and how far. */
+  /** Where `conflict` is empty: why, in sentences. `no mix at all`: impossible even without any demand. */
+  noConflict?: { why: 'possible' | 'refused' | 'not proven' | 'no mix at all'; messages: string[] };
+  /** Every stated end, those of the conflict first: how far moving it alone must go to make the order possible. */
   reach: WithinReach[];
   /** Ways to change limits so that the order becomes possible, the cheapest in weighted reporting units first. */
   relaxations: Relaxation[];
