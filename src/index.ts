@@ -11,6 +11,7 @@ export { applyRelaxation } from './explain/applyRelaxation';
 export { demandInWords } from './explain/demandInWords';
 export { demandsOf, onlyDemands, withoutDemand } from './explain/demands';
 export { explainImpossible, type LadderOptions } from './explain/explainImpossible';
+export { type ExplainOptions, explainRecipe } from './explain/explainRecipe';
 export type {
   Alternative,
   Demand,

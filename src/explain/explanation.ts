@@ -3,7 +3,10 @@
  * whatever rules the order has; `proven` says that every solve it rests on was proven.
  */
 
-/** What one end of a limit costs, and over what range that price holds. */
+/**
+ * What one end of a limit costs, and over what range that price holds. Costs are those of `objective` of the outcome:
+ * per tonne, or per m³ where the order counts cost so. Margin and strictness of the limit stay as they are.
+ */
 export interface LimitPrice {
   /** Place in `order.limits`, and the end. */
   limit: number;
@@ -16,7 +19,7 @@ export interface LimitPrice {
   looserSaves: number;
   /** Cost per tonne added by tightening it by `step`; absent where that is impossible. */
   tighterCosts?: number;
-  /** Loosest end up to which loosening goes on saving at this price (within a twentieth) [property's unit]. */
+  /** Loosest end, a whole number of steps away, up to which the saving is this price times the steps, within a twentieth. */
   holdsTo?: number;
   /** What the order costs less with the end taken away altogether, per tonne. */
   withoutSaves: number;
@@ -27,7 +30,10 @@ export interface LimitPrice {
 export interface EntryPrice {
   stockId: string;
   pricePerTonne: number;
-  /** At or above this price per tonne it stays out; below, it is used. Absent: not even at a price of zero. */
+  /**
+   * At or above this price per tonne it stays out; below, it is used. Absent: not even at a price of zero (where prices
+   * are zero or negative: not even as far below the lowest as the greatest is from zero).
+   */
   entersBelow?: number;
   proven: boolean;
 }
@@ -37,7 +43,10 @@ export interface UsedStock {
   stockId: string;
   pricePerTonne: number;
   massFraction: number;
-  /** Between these prices per tonne, others unchanged, the recipe stays the cheapest. Absent: no bound was found. */
+  /**
+   * Between these prices per tonne, others unchanged, the recipe stays the cheapest. Absent: it stays so as far as was
+   * looked, down to a price of zero (see `EntryPrice.entersBelow`) and up to ten times the greatest price of a stock.
+   */
   standsFrom?: number;
   standsTo?: number;
   /** Cost per tonne without the stock, less the cost with it. Absent: impossible without it, or not proven. */
@@ -50,7 +59,7 @@ export interface Explanation {
   limits: LimitPrice[];
   entries: EntryPrice[];
   used: UsedStock[];
-  /** Why it ended: all done, or the time ran out before some of it. */
+  /** Why it ended: all done, or before some of it was. What is listed is done. */
   stopped: 'finished' | 'time limit' | 'cancelled' | 'engine failed';
   solves: number;
 }
