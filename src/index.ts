@@ -8,6 +8,7 @@ export type { PredictedProperties, PredictedProperty, RuleSpread } from './blend
 export type { PredictionOptions, PropertyAt } from './blend/predictionOptions';
 export { type Alternatives, type AlternativesOptions, alternatives } from './explain/alternatives';
 export { applyRelaxation } from './explain/applyRelaxation';
+export { chanceOfPassing } from './explain/chanceOfPassing';
 export { demandInWords } from './explain/demandInWords';
 export { demandsOf, onlyDemands, withoutDemand } from './explain/demands';
 export { explainImpossible, type LadderOptions } from './explain/explainImpossible';
@@ -24,6 +25,8 @@ export type {
   UsedStock,
   WithinReach,
 } from './explain/explanation';
+export type { Precisions } from './explain/methodPrecision';
+export { type MarginOptions, marginFor } from './explain/precisionMargin';
 export { type RecipeInSteps, roundRecipe } from './explain/roundRecipe';
 export { createEngine } from './optimise/defaultEngine';
 export { createCompactEngine } from './optimise/linear/compact/compactEngine';
