@@ -6,6 +6,8 @@
 import loadHighs from 'highs';
 import { createCompactEngine, createHighsEngine, type Order, solveBlend } from '../../src/index';
 import type { LinearProgram } from '../../src/optimise/linear/linearEngine';
+import { buildModel } from '../../src/optimise/rows/buildModel';
+import { findCandidates } from '../../src/optimise/rows/candidates';
 import { Draw } from '../oracle/mulberry32';
 import { CONTINUOUS, randomOrder } from '../oracle/randomOrder';
 import { median, printTable, quantile } from './figures';
@@ -69,6 +71,30 @@ const KINDS: Kind[] = [
     },
   },
 ];
+
+/** The rows that carry the viscosity index stand last in the root: three sums, and five rows over them. */
+const VI_ROWS = 8;
+const SUMS = 3;
+
+/** The whole program of an order, presences included (our search folds them away), with the lines of its root. */
+function wholeProgram(order: Order, root: LinearProgram): { program: LinearProgram; integers: number[] } {
+  const { model } = buildModel(order, findCandidates(order));
+  const scale = 1000 / model.cost.reduce((most, cost) => Math.max(most, Math.abs(cost)), 1e-300);
+  const sums = model.vi ? SUMS : 0;
+  const firstSum = root.cost.length - sums;
+  const moved = (column: number) => (column < firstSum ? column : model.cost.length + column - firstSum);
+  const viRows = model.vi ? root.rows.slice(-VI_ROWS) : [];
+  const free = (sign: number) => Array.from({ length: sums }, () => sign * Infinity);
+  return {
+    program: {
+      cost: Float64Array.from([...model.cost.map((cost) => cost * scale), ...free(1).map(() => 0)]),
+      lower: Float64Array.from([...model.lower, ...free(-1)]),
+      upper: Float64Array.from([...model.upper, ...free(1)]),
+      rows: [...model.rows, ...viRows.map((row) => ({ ...row, columns: row.columns.map(moved) }))],
+    },
+    integers: model.presences.map(({ column }) => column),
+  };
+}
 
 /** Time of HiGHS on a program with integers, and its cost in the program's scale; undefined where it did not prove. */
 function asIntegers(program: LinearProgram, integers: readonly number[], lots: ReadonlyMap<number, number>) {
@@ -135,13 +161,12 @@ for (const { name, sizes, orders, change } of KINDS) {
       const start = now();
       const outcome = await solveBlend(order, { linearEngine: engine, now, timeLimitMs: LIMIT_MS });
       const mine = now() - start;
-      const presences = root.program.cost.length - size - 3;
-      const integers = Array.from({ length: Math.max(0, presences) }, (_, k) => size + k);
+      const { program, integers } = wholeProgram(order, root.program);
       const byId = [...order.stocks].sort((a, b) => (a.id < b.id ? -1 : 1));
       const lots = new Map(
         byId.flatMap(({ lotTonnes }, j): [number, number][] => (lotTonnes ? [[j, lotTonnes / 20]] : [])),
       );
-      const other = asIntegers(root.program, integers, lots);
+      const other = asIntegers(program, integers, lots);
       if (outcome.proof.kind !== 'least cost') unproven++;
       if (!other.proven) theirUnproven++;
       ours.push(mine);

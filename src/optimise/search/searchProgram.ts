@@ -2,6 +2,7 @@ import type { LinearEngine, LinearProgram, LinearResult, LinearRow, LinearSessio
 import type { SearchModel, ViLimits } from '../rows/searchModel';
 import type { Box } from './box';
 import { type Certificate, neededBounds } from './certificate';
+import { canFold, FoldedPresences } from './foldedPresences';
 import { boundOverBox, type PricedRows, type PulledSums, priceRows, withSums } from './safeBound';
 import type { Line } from './viLine';
 import { viScales } from './viScales';
@@ -59,7 +60,8 @@ export class SearchProgram {
     this.#staticRows = model.rows.length;
     this.#costScale = 1000 / model.cost.reduce((most, cost) => Math.max(most, Math.abs(cost)), 1e-300);
     this.#scale = model.vi ? viScales(model.vi) : { sums: 1, kv100: 1, vi: 1 };
-    this.#session = engine.open(this.#program());
+    const program = this.#program();
+    this.#session = canFold(model) ? new FoldedPresences(engine, program, model) : engine.open(program);
   }
 
   #program(): LinearProgram {
