@@ -3,10 +3,11 @@ import type { BlendOutcome } from '../optimise/outcome';
 import type { SolveOptions } from '../optimise/solveOptions';
 import { smallestConflict } from './conflict';
 import { onlyDemands } from './demands';
+import { effortOf, type Movable } from './effort';
 import { EndSteps } from './endSteps';
 import { Enquiry, type Finding } from './enquiry';
 import type { Demand, Ladder, Relaxation, WithinReach } from './explanation';
-import { jointRelaxations, type Movable } from './jointRelaxation';
+import { jointRelaxations } from './jointRelaxation';
 import { type LimitEnd, statedEnds } from './limitEnd';
 import { withinReach } from './withinReach';
 
@@ -48,7 +49,7 @@ function singleRelaxations(reach: readonly WithinReach[], movable: readonly Mova
   return reach.flatMap(({ limit, end, stated, reachable, costPerTonne, proven }) => {
     const own = movable.find(({ steps }) => steps.limit === limit && steps.end === end);
     if (!own || reachable === undefined || costPerTonne === undefined) return [];
-    const effort = (own.weight * Math.abs(reachable - stated)) / own.steps.unit;
+    const effort = effortOf([own], [reachable]);
     return [{ changes: [{ limit, end, stated, to: reachable }], effort, costPerTonne, proven }];
   });
 }

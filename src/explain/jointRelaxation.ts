@@ -1,16 +1,10 @@
 import type { Order } from '../optimise/order';
-import type { EndSteps } from './endSteps';
+import { effortOf, type Movable } from './effort';
 import type { Enquiry } from './enquiry';
 import type { Relaxation } from './explanation';
 import { leastStep } from './leastStep';
 import { withEnd, withoutEnd } from './limitEnd';
 import { valueOfMix } from './withinReach';
-
-/** An end that may be moved, and what one reporting unit of it weighs. */
-export interface Movable {
-  steps: EndSteps;
-  weight: number;
-}
 
 /** How many steps each end is moved, and whether it is proven that none can be taken back. */
 interface Moves {
@@ -28,10 +22,11 @@ function moved(order: Order, ends: readonly Movable[], steps: readonly number[])
   );
 }
 
-export function effortOf(ends: readonly Movable[], steps: readonly number[]): number {
-  return ends.reduce((sum, { steps: end, weight }, place) => {
-    return sum + (weight * Math.abs(end.at(steps[place]) - end.stated)) / end.unit;
-  }, 0);
+function effortOfSteps(ends: readonly Movable[], steps: readonly number[]): number {
+  return effortOf(
+    ends,
+    ends.map(({ steps: end }, place) => end.at(steps[place])),
+  );
 }
 
 /** Steps that let a known recipe in: from the order without these ends. Nothing where even that is impossible. */
@@ -95,7 +90,7 @@ async function relaxationOf(
   });
   return {
     changes,
-    effort: effortOf(ends, steps),
+    effort: effortOfSteps(ends, steps),
     costPerTonne: outcome.costPerTonne,
     proven: proven && outcome.proof.kind === 'least cost',
   };
@@ -125,11 +120,11 @@ export async function jointRelaxations(
       const moves = await takenBack(enquiry, order, ends, start, first);
       const set = moves.steps.map((step) => (step > 0 ? 1 : 0)).join('');
       const known = bySet.get(set);
-      if (!known || effortOf(ends, moves.steps) < effortOf(ends, known.steps)) bySet.set(set, moves);
+      if (!known || effortOfSteps(ends, moves.steps) < effortOfSteps(ends, known.steps)) bySet.set(set, moves);
     }
   }
   const found = [...bySet.values()].filter(
-    ({ steps }) => steps.filter((step) => step > 0).length > 1 && effortOf(ends, steps) < lessEffortThan,
+    ({ steps }) => steps.filter((step) => step > 0).length > 1 && effortOfSteps(ends, steps) < lessEffortThan,
   );
   const relaxations: Relaxation[] = [];
   for (const moves of found) {
