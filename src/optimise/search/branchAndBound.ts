@@ -199,7 +199,7 @@ export class BranchAndBound {
   #isWorthTrying(node: SearchNode): boolean {
     const { presences, wholeLots } = this.model;
     if (!this.#finder.best || isNarrow(node.kv100)) return true;
-    if (presences.length > 0 || wholeLots.length > 0) return this.#nodes <= 20 || this.#nodes % 4 === 0;
+    if (presences.length > 0 || wholeLots.length > 0) return Number.isInteger(Math.log2(this.#nodes)) || this.#nodes % 16 === 0;
     return Number.isInteger(Math.log2(this.#nodes) / 2);
   }
 
