@@ -1,8 +1,9 @@
 import type { WorkbookOrder } from '../../src';
+import { ImpossibleLadder } from '../explain/ImpossibleLadder';
+import { SecondOpinion } from '../explain/SecondOpinion';
 import { classNames } from '../parts/classNames';
 import type { Answer } from '../state/answerStore';
 import styles from './AnswerPanel.module.css';
-import { Conflict } from './Conflict';
 import { LeftOutList, List } from './LeftOutList';
 import type { ProofWords } from './proofInWords';
 import { Recipe } from './Recipe';
@@ -29,8 +30,10 @@ export function AnswerBody({
         {recipe && <span className={styles.soft}> Passing is for the laboratory.</span>}
       </p>
       {problems.length > 0 && <List messages={problems.map(({ message }) => message)} />}
-      <Conflict order={order} outcome={outcome} />
+      {problems.length === 0 && <SecondOpinion orderId={workbookOrder.id} />}
+      <ImpossibleLadder orderId={workbookOrder.id} order={order} outcome={outcome} />
       <Recipe
+        orderId={workbookOrder.id}
         title={workbookOrder.name}
         proof={proof.text}
         order={order}

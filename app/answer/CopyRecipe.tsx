@@ -6,7 +6,7 @@ const DONE = 'Copied: paste it into a spreadsheet.';
 const REFUSED = 'The browser did not allow copying. Select the table with the mouse and copy it instead.';
 
 /** Puts the recipe on the clipboard and says beside the button how that went. */
-export function CopyRecipe({ text }: { text(): string }) {
+export function CopyRecipe({ text, label = 'Copy recipe' }: { text(): string; label?: string }) {
   const [said, setSaid] = useState<string>();
   async function copy() {
     try {
@@ -20,7 +20,7 @@ export function CopyRecipe({ text }: { text(): string }) {
     <span className={styles.copy}>
       <span role="status">{said}</span>
       <Button tone="quiet" icon="copy" onClick={() => void copy()}>
-        Copy recipe
+        {label}
       </Button>
     </span>
   );

@@ -1,6 +1,9 @@
 import { memo } from 'react';
 import type { BlendOutcome, OmittedProduct, Order } from '../../src';
 import { LazyViscosityChart } from '../chart/LazyViscosityChart';
+import { OtherRecipes } from '../explain/OtherRecipes';
+import { Rounded } from '../explain/Rounded';
+import { WhatWouldChange } from '../explain/WhatWouldChange';
 import { Section } from '../parts/Section';
 import styles from './AnswerPanel.module.css';
 import { apiGroupsInWords } from './apiGroups';
@@ -15,6 +18,7 @@ import { SpreadTable } from './SpreadTable';
 
 /** A recipe and everything said of it; nothing where there is none. Drawn anew for another answer only. */
 export const Recipe = memo(function Recipe({
+  orderId,
   title,
   proof,
   order,
@@ -23,6 +27,7 @@ export const Recipe = memo(function Recipe({
   laboratoryOnly,
   currency,
 }: {
+  orderId: string;
   /** Name of the order, and what is proven: both go with a recipe that is copied. */
   title: string;
   proof: string;
@@ -46,6 +51,7 @@ export const Recipe = memo(function Recipe({
         batch={batch}
         text={() => recipeText({ title, proof, remarks, rows, totals, batch })}
       />
+      <Rounded orderId={orderId} title={title} order={order} />
       <Section title="Viscosity and temperature" level={3} className={styles.part}>
         <LazyViscosityChart order={order} outcome={outcome} />
       </Section>
@@ -59,6 +65,8 @@ export const Recipe = memo(function Recipe({
           mixes.
         </p>
       </Section>
+      <WhatWouldChange orderId={orderId} />
+      <OtherRecipes orderId={orderId} />
     </>
   );
 });

@@ -1,5 +1,6 @@
 import { useEffect, useId, useRef, useState } from 'react';
 import { type Limit, propertyDefinition } from '../../src';
+import { LimitPriceLine, LimitPriceStory } from '../explain/LimitPriceLine';
 import { IconButton } from '../parts/IconButton';
 import { type End, setEnd, upperEnd } from '../parts/limitEnds';
 import { contradiction, limitName, shortLimitName, unitOf } from '../parts/limitWords';
@@ -126,6 +127,13 @@ export function LimitRow({ orderId, limit, index, answer, isNew }: LimitRowProps
           onDraft={(value) => moveEnd('max', value)}
           onCommit={(value) => commitEnd('max', value)}
         />
+        <LimitPriceLine
+          className={styles.price}
+          orderId={orderId}
+          index={index}
+          property={limit.property}
+          celsius={limit.celsius}
+        />
         <IconButton className={styles.remove} icon="remove" label={`Remove the limit on ${name}`} onClick={remove} />
       </div>
       {problemId && (
@@ -135,7 +143,10 @@ export function LimitRow({ orderId, limit, index, answer, isNew }: LimitRowProps
       )}
       <div id={`${id}-more`} hidden={!open}>
         {open && (
-          <LimitMore limit={limit} definition={definition} name={name} unit={unitOf(definition)} onEdit={edit} />
+          <>
+            <LimitPriceStory orderId={orderId} index={index} property={limit.property} celsius={limit.celsius} />
+            <LimitMore limit={limit} definition={definition} name={name} unit={unitOf(definition)} onEdit={edit} />
+          </>
         )}
       </div>
     </li>

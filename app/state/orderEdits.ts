@@ -26,6 +26,21 @@ export function newOrder(): void {
   place(emptyOrder(environment().newId(), freeName('New order')), orders().length, 'new order');
 }
 
+/** A copy of an order with a change, right after it and on screen. Returns its name. */
+export function placeCopy(orderId: string, suffix: string, change: (copy: WorkbookOrder) => void): string | undefined {
+  const at = orders().findIndex(({ id }) => id === orderId);
+  const original = orders()[at];
+  if (!original) return undefined;
+  const name = freeName(`${original.name}, ${suffix}`);
+  const copy = { ...structuredClone(original), id: environment().newId(), name };
+  change(copy);
+  editWorkbook(`copy of ${original.name}`, (draft) => {
+    draft.orders.splice(at + 1, 0, copy);
+  });
+  selectOrder(copy.id);
+  return name;
+}
+
 /** A copy of the order on screen, right after it. */
 export function duplicateOrder(): void {
   const at = orders().findIndex(({ id }) => id === useView.getState().orderId);

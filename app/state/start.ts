@@ -8,6 +8,7 @@ import { unguarded, webLock } from '../storage/writerLock';
 import { createWorker } from '../worker/createWorker';
 import { createSolverClient, type SolverClient } from '../worker/solverClient';
 import { environment } from './environment';
+import { startExplaining } from './explaining';
 import { setSave, setSetAside, useSave } from './saveStore';
 import { setShelf } from './shelf';
 import { startSolving } from './solving';
@@ -115,7 +116,12 @@ function keepSolved(createSolver: () => SolverClient): () => void {
   let end = () => {};
   let ended = false;
   environment().afterFirstPaint(() => {
-    if (!ended) end = startSolving(createSolver());
+    if (ended) return;
+    const solver = createSolver();
+    const ends = [startExplaining(solver), startSolving(solver)];
+    end = () => {
+      for (const endOne of ends) endOne();
+    };
   });
   return () => {
     ended = true;

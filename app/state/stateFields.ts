@@ -1,5 +1,6 @@
 import type { Workbook } from '../../src';
 import type { Answer } from './answerStore';
+import type { Explained, ExplainState } from './explainStore';
 import type { SaveState } from './saveStore';
 import type { ViewState } from './viewStore';
 import type { WorkbookState } from './workbookStore';
@@ -64,6 +65,21 @@ export const ANSWER_FIELDS: Classified<Answer> = {
   progress: PASSING,
   sinceMs: PASSING,
   message: PASSING,
+};
+
+/** What is told about an answer is worked out anew with it. */
+export const EXPLAIN_FIELDS: Classified<ExplainState> = {
+  explained: PASSING,
+  rounding: PASSING,
+};
+
+export const EXPLAINED_FIELDS: Classified<Explained> = {
+  recipe: PASSING,
+  impossible: PASSING,
+  alternatives: PASSING,
+  rounded: PASSING,
+  roundedTo: PASSING,
+  opinion: PASSING,
 };
 
 export const SAVE_FIELDS: Classified<SaveState> = {

@@ -1,13 +1,16 @@
 import { type BlendOutcome, type SolveOptions, solveBlend } from '../../src';
 import type { FromWorker, ToWorker } from './protocol';
+import type { Question, Told } from './questions';
 
-type Request = Extract<ToWorker, { kind: 'solve' }>;
+type Request = Extract<ToWorker, { kind: 'solve' | 'ask' }>;
 type LinearEngine = NonNullable<SolveOptions['linearEngine']>;
 
 /** What a worker's surroundings give it. */
 export interface WorkerSurroundings {
   send(message: FromWorker): void;
   loadEngine(): Promise<LinearEngine>;
+  /** Answers a question about an answered order. */
+  answerQuestion(question: Question, options: SolveOptions): Promise<Told>;
   /** Clock [ms]. */
   now(): number;
   /** Lets messages in. */
@@ -26,10 +29,11 @@ function inWords(error: unknown): string {
 }
 
 /**
- * The worker's side of the conversation: one solve at a time, a newer request supersedes the one that runs, a cancel
- * ends it with what it has. Returns the function that takes the page's messages.
+ * The worker's side of the conversation: one solve or question at a time, a newer request supersedes the one that runs,
+ * a cancel ends it with what it has. Returns the function that takes the page's messages.
  */
-export function serveSolves({ send, loadEngine, now, pause }: WorkerSurroundings): (message: ToWorker) => void {
+export function serveSolves(surroundings: WorkerSurroundings): (message: ToWorker) => void {
+  const { send, loadEngine, answerQuestion, now, pause } = surroundings;
   const engine = loadEngine();
   let newest = 0;
   let cancelled = 0;
@@ -40,19 +44,29 @@ export function serveSolves({ send, loadEngine, now, pause }: WorkerSurroundings
     (error: unknown) => send({ kind: 'no engine', message: inWords(error) }),
   );
 
-  async function answer({ id, order, timeLimitMs }: Request): Promise<void> {
+  async function reply(request: Request, options: SolveOptions): Promise<void> {
+    const { id } = request;
+    if (request.kind === 'ask') {
+      send({ kind: 'told', id, told: await answerQuestion(request.question, options) });
+      return;
+    }
+    const onProgress: SolveOptions['onProgress'] = (progress) => send({ kind: 'progress', id, progress });
+    const outcome = await solveBlend(request.order, { ...options, onProgress });
+    near = kv100Of(outcome) ?? near;
+    send({ kind: 'outcome', id, outcome });
+  }
+
+  async function answer(request: Request): Promise<void> {
+    const { id, timeLimitMs } = request;
     try {
-      const outcome = await solveBlend(order, {
+      await reply(request, {
         timeLimitMs,
         now,
         pause,
         linearEngine: await engine,
         ...(near === undefined ? {} : { near }),
         isCancelled: () => id < newest || id <= cancelled,
-        onProgress: (progress) => send({ kind: 'progress', id, progress }),
       });
-      near = kv100Of(outcome) ?? near;
-      send({ kind: 'outcome', id, outcome });
     } catch (error) {
       send({ kind: 'error', id, message: inWords(error) });
     }

@@ -1,6 +1,9 @@
 import type { BlendOutcome, Order, SolveProgress } from '../../src';
 import type { EngineKind } from './createWorker';
 import type { FromWorker, WorkerLike } from './protocol';
+import { createQuestionDesk, type QuestionListener } from './questionDesk';
+import type { Question } from './questions';
+import { askSecondEngine, type Opinion } from './secondOpinion';
 import { WORDS } from './solverWords';
 import { createWorkerSeat } from './workerSeat';
 
@@ -20,6 +23,8 @@ export interface SolverClientOptions {
   timeLimitMs?: number;
   /** The second engine is slower but may hang: it gets less [ms]. */
   secondTimeLimitMs?: number;
+  /** Time for one question about an answered order [ms]. */
+  questionTimeLimitMs?: number;
   /** Silence beyond the time limit after which a worker counts as hung [ms]. */
   graceMs?: number;
   /** Longest wait for the engine to load [ms]. */
@@ -36,6 +41,10 @@ export interface SolverClient {
   solve(order: Order, listener: SolveListener, subject?: string): void;
   /** Ends the running solve with what it has, and forgets the one that waits, where they are for this subject. */
   cancel(subject?: string): void;
+  /** Asks about an answered order, once nothing is to be solved. Any order takes the place of all questions. */
+  ask(question: Question, listener: QuestionListener): void;
+  /** Solves the order with the second engine as well. Returns the function that gives it up. */
+  secondOpinion(order: Order, onOpinion: (opinion: Opinion) => void): () => void;
   dispose(): void;
 }
 
@@ -52,6 +61,7 @@ interface Job {
 const DEFAULTS = {
   timeLimitMs: 20_000,
   secondTimeLimitMs: 8_000,
+  questionTimeLimitMs: 10_000,
   graceMs: 5_000,
   loadLimitMs: 60_000,
   patienceMs: 400,
@@ -62,6 +72,7 @@ const CANCEL_GRACE_MS = 1_500;
  * The page's side of the conversation with the solver workers. The latest order wins: one solve runs, the newest order
  * waits, older ones are dropped. A worker that crashes or hangs is replaced and the order sent once more; where HiGHS
  * cannot be loaded the second engine answers, and where that hangs it is killed. Each of these is told in a message.
+ * Questions about answered orders wait behind every order.
  */
 export function createSolverClient(options: SolverClientOptions): SolverClient {
   const settings = { ...DEFAULTS, ...options };
@@ -72,6 +83,9 @@ export function createSolverClient(options: SolverClientOptions): SolverClient {
   let lastId = 0;
   let engineNotice: string | undefined;
   let patience: ReturnType<typeof setTimeout> | undefined;
+  /** The question that the worker has in hand although an order took its place: it ends at once, or it hangs. */
+  let ending: number | undefined;
+  const desk = createQuestionDesk({ nextId: () => (lastId += 1), send: sendQuestion });
   const seat = createWorkerSeat({ createWorker: options.createWorker, hear, crashed, silent });
 
   const limit = () => (kind === 'highs' ? settings.timeLimitMs : settings.secondTimeLimitMs);
@@ -80,8 +94,17 @@ export function createSolverClient(options: SolverClientOptions): SolverClient {
   function send(job: Job): void {
     running = job;
     const { id, order } = job;
-    if (seat.post({ kind: 'solve', id, order, timeLimitMs: limit() })) watch();
+    if (!seat.post({ kind: 'solve', id, order, timeLimitMs: limit() })) return;
+    if (ending !== undefined && seat.isReady()) seat.watch(CANCEL_GRACE_MS);
+    else watch();
   }
+
+  function sendQuestion({ id, question }: { id: number; question: Question }): void {
+    const timeLimitMs = settings.questionTimeLimitMs;
+    if (seat.post({ kind: 'ask', id, question, timeLimitMs })) watchQuestion();
+  }
+
+  const watchQuestion = () => seat.watch(seat.isReady() ? settings.questionTimeLimitMs + graceMs : loadLimitMs);
 
   function end(tell: (listener: SolveListener) => void): void {
     const job = running;
@@ -90,7 +113,11 @@ export function createSolverClient(options: SolverClientOptions): SolverClient {
     running = undefined;
     if (job) tell(job.listener);
     // The listener may have sent a new order already.
-    if (running || !waiting) return;
+    if (running) return;
+    if (!waiting) {
+      desk.next();
+      return;
+    }
     const next = waiting;
     waiting = undefined;
     send(next);
@@ -107,10 +134,18 @@ export function createSolverClient(options: SolverClientOptions): SolverClient {
     if (message.kind === 'no engine') withoutEngine(message.message);
     else if (message.kind === 'ready') {
       if (running) watch();
-    } else if (running && message.id === running.id) hearOf(running, message);
+      else if (desk.isAsking()) watchQuestion();
+    } else if (message.id === ending) {
+      ending = undefined;
+      if (running && !running.cancelled) watch();
+    } else if (desk.hear(message)) {
+      if (running || desk.isAsking()) return;
+      seat.quiet();
+      desk.next();
+    } else if (running && message.id === running.id && message.kind !== 'told') hearOf(running, message);
   }
 
-  function hearOf(job: Job, message: Exclude<FromWorker, { kind: 'ready' | 'no engine' }>): void {
+  function hearOf(job: Job, message: Exclude<FromWorker, { kind: 'ready' | 'no engine' | 'told' }>): void {
     if (message.kind === 'progress') {
       if (!job.cancelled) watch();
       job.listener.onProgress?.(message.progress);
@@ -121,7 +156,7 @@ export function createSolverClient(options: SolverClientOptions): SolverClient {
 
   /** HiGHS cannot be had: the second engine takes over, and after that nobody. */
   function withoutEngine(reason: string): void {
-    seat.clear('javascript');
+    clearSeat('javascript');
     if (kind === 'javascript') {
       endLost(WORDS.noEngine(reason));
       return;
@@ -130,11 +165,24 @@ export function createSolverClient(options: SolverClientOptions): SolverClient {
     engineNotice = WORDS.secondEngine(reason);
     if (running?.cancelled) endLost('');
     else if (running) send(running);
+    else desk.again();
+  }
+
+  function clearSeat(next: EngineKind): void {
+    ending = undefined;
+    seat.clear(next);
+  }
+
+  /** A question is not asked twice of a worker that broke down over it: nobody waits for it. */
+  function endQuestion(message: string): void {
+    clearSeat(kind);
+    desk.fail(message);
+    if (!running) desk.next();
   }
 
   /** The order in hand once more, in a new worker; given up where that was done already. */
   function sendAgain(restarted: string, givenUp: string): void {
-    seat.clear(kind);
+    clearSeat(kind);
     if (!running) return;
     if (running.notice !== undefined || running.cancelled) endLost(givenUp);
     else send({ ...running, notice: restarted });
@@ -142,15 +190,17 @@ export function createSolverClient(options: SolverClientOptions): SolverClient {
 
   function crashed(reason: string, wasReady: boolean): void {
     // A worker that never came to life will not do so the second time.
-    if (wasReady) sendAgain(WORDS.restarted('broke down'), WORDS.crashed(reason));
+    if (wasReady && !running) endQuestion(WORDS.questionLost('broke down'));
+    else if (wasReady) sendAgain(WORDS.restarted('broke down'), WORDS.crashed(reason));
     else withoutEngine(reason || WORDS.notStarted);
   }
 
   function silent(wasReady: boolean): void {
     if (!wasReady) withoutEngine(WORDS.notLoaded(loadLimitMs));
+    else if (!running) endQuestion(WORDS.questionLost('did not answer in time'));
     else if (kind === 'highs') sendAgain(WORDS.restarted('stopped answering'), WORDS.hung);
     else {
-      seat.clear(kind);
+      clearSeat(kind);
       endLost(WORDS.secondEngineHung(limit() + graceMs));
     }
   }
@@ -167,6 +217,7 @@ export function createSolverClient(options: SolverClientOptions): SolverClient {
     solve(order, listener, subject) {
       lastId += 1;
       const job: Job = { id: lastId, order, listener, subject };
+      ending = desk.drop() ?? ending;
       if (!running) {
         send(job);
         return;
@@ -188,11 +239,22 @@ export function createSolverClient(options: SolverClientOptions): SolverClient {
       }
       if (running && running.subject === subject) cancelRunning('by the user');
     },
+    ask(question, listener) {
+      desk.add(question, listener);
+      if (!running) desk.next();
+    },
+    secondOpinion: (order, onOpinion) =>
+      askSecondEngine(
+        order,
+        { createWorker: options.createWorker, timeLimitMs: settings.secondTimeLimitMs, graceMs },
+        onOpinion,
+      ),
     dispose() {
       clearTimeout(patience);
+      desk.drop();
       running = undefined;
       waiting = undefined;
-      seat.clear(kind);
+      clearSeat(kind);
     },
   };
 }

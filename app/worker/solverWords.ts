@@ -16,5 +16,7 @@ export const WORDS = {
     `The slower solver did not answer in ${seconds(ms)} and was ended. Change a limit a little, or reload the page to try the main solver again.`,
   failed: (reason: string) =>
     `The solver broke off (${reason}). Change the order or reload the page. The workbook is safe.`,
+  questionLost: (what: string) =>
+    `The solver ${what} and was ended, so this part is missing; the answer itself stands. Change the order to have it worked out anew.`,
   cancelled: 'Cancelled: the solver had to be ended, so there is no answer. Solve again by changing the order.',
 };

@@ -1,3 +1,4 @@
+import { answerQuestion } from './answerQuestion';
 import type { FromWorker, ToWorker } from './protocol';
 import { channelPause, serveSolves, type WorkerSurroundings } from './serveSolves';
 
@@ -14,6 +15,7 @@ export function serveInWorker(loadEngine: WorkerSurroundings['loadEngine']): voi
   const take = serveSolves({
     send: (message) => scope.postMessage(message),
     loadEngine,
+    answerQuestion,
     now: () => performance.now(),
     pause: channelPause(),
   });

@@ -1,6 +1,7 @@
 // @vitest-environment node
 import { describe, expect, test } from 'vitest';
 import { demoWorkbook } from '../../../app/demo/demoWorkbook';
+import { answerQuestion } from '../../../app/worker/answerQuestion';
 import type { FromWorker, ToWorker } from '../../../app/worker/protocol';
 import { channelPause, serveSolves } from '../../../app/worker/serveSolves';
 import { createEngine, type Order, toOrder } from '../../../src';
@@ -22,6 +23,7 @@ function serve(loadEngine: () => ReturnType<typeof createEngine> = createEngine)
       for (const { wanted, resolve } of waiting) if (wanted(message)) resolve(message);
     },
     loadEngine,
+    answerQuestion,
     now: () => performance.now(),
     pause: () => new Promise((resolve) => setImmediate(resolve)),
   });

@@ -1,0 +1,67 @@
+import { create } from 'zustand';
+import type { BlendOutcome, Order } from '../../src';
+import type { Answers, QuestionKind } from '../worker/questions';
+import type { Opinion } from '../worker/secondOpinion';
+import { useAnswers } from './answerStore';
+
+/** One thing told about an answer. It speaks of this outcome and no other. */
+export interface Part<Value> {
+  outcome: BlendOutcome;
+  /** The engine order that `outcome` answers. */
+  order: Order;
+  /** Absent where it failed. */
+  told?: { value: Value };
+  /** Why there is none. */
+  message?: string;
+}
+
+export type Parts = { [Kind in QuestionKind]?: Part<Answers[Kind]> };
+
+/** What was told about the answer to one order. */
+export interface Explained extends Parts {
+  /** Told for this rounding. */
+  roundedTo?: Rounding;
+  /** What the second engine says; without `told` or `message` it is still being asked. */
+  opinion?: Part<Opinion>;
+}
+
+/** What can be weighed: "0.1 %", "5 kg". Empty: not asked for. */
+export type Rounding = '' | `${number} %` | `${number} kg`;
+
+export interface ExplainState {
+  explained: Readonly<Record<string, Explained>>;
+  rounding: Rounding;
+}
+
+export const useExplain = create<ExplainState>(() => ({ explained: {}, rounding: '' }));
+
+const NOTHING: Explained = {};
+
+export function explainedOf(orderId: string): Explained {
+  return useExplain.getState().explained[orderId] ?? NOTHING;
+}
+
+export function setExplained(orderId: string, change: Partial<Explained>): void {
+  useExplain.setState(({ explained }) => ({
+    explained: { ...explained, [orderId]: { ...explained[orderId], ...change } },
+  }));
+}
+
+/** A part of what was told, and whether it speaks of the answer now on screen. */
+export interface Shown<Value> {
+  part: Part<Value> | undefined;
+  stale: boolean;
+}
+
+/** One part of what was told about an order's answer. Renders anew only where the part or its standing changes. */
+export function useExplained<Kind extends QuestionKind | 'opinion'>(
+  orderId: string,
+  kind: Kind,
+): { part: Explained[Kind]; stale: boolean } {
+  const part = useExplain(({ explained }) => explained[orderId]?.[kind]);
+  const stale = useAnswers(({ answers }) => {
+    const answer = answers[orderId];
+    return part !== undefined && (answer?.stale !== false || answer.outcome !== part.outcome);
+  });
+  return { part, stale };
+}
