@@ -1,4 +1,3 @@
-import type { CostLine } from './costLine';
 import type { SolvesAgain } from './solvesAgain';
 
 /** Least difference of two weights that makes two lines cross at a place worth telling. */
@@ -32,7 +31,7 @@ export async function breakEven(
   const { line: own } = again;
   const weight = own.weight(stockId);
   const direction = farthest < present ? -1 : 1;
-  const nearest = () => nearestCrossing(again.lines, own, stockId, direction);
+  const nearest = () => nearestCrossing(again, stockId, direction);
   let steps = nearest();
   let proven = again.proven;
   for (let round = 0; round < MOST_ROUNDS; round++) {
@@ -42,7 +41,7 @@ export async function breakEven(
     const answer = await again.solveAtPrices(new Map([[stockId, price]]));
     proven &&= answer.proven;
     const stands = own.cost + weight * (price - present);
-    if (answer.cost >= stands - again.noiseAt(stands)) {
+    if (answer.cost >= stands - Math.max(again.noiseAt(stands), again.noiseAt(own.cost))) {
       return isFarthest ? { proven } : { price, proven };
     }
     const next = nearest();
@@ -52,18 +51,20 @@ export async function breakEven(
   return { price: present + direction * (steps ?? 0), proven: false };
 }
 
-/** The least way in price at which a known recipe becomes as cheap as the explained one; undefined where none does. */
-function nearestCrossing(
-  lines: readonly CostLine[],
-  own: CostLine,
-  stockId: string,
-  direction: -1 | 1,
-): number | undefined {
+/**
+ * The least way in price at which a known recipe becomes the cheaper one; undefined where none does. A recipe that costs
+ * the same to within the noise counts once it is cheaper by more than that: where the viscosity index curves, recipes
+ * change little by little with the price, and each is "cheapest" over a range that only the noise makes.
+ */
+function nearestCrossing(again: SolvesAgain, stockId: string, direction: -1 | 1): number | undefined {
+  const { line: own, lines } = again;
+  const noise = again.noiseAt(own.cost);
   let least: number | undefined;
   for (const line of lines) {
     const slope = direction * (own.weight(stockId) - line.weight(stockId));
     if (slope <= LEAST_SLOPE) continue;
-    const way = Math.max(0, line.cost - own.cost) / slope;
+    const dearer = line.cost - own.cost;
+    const way = (dearer > noise ? dearer : Math.max(0, dearer + noise)) / slope;
     if (least === undefined || way < least) least = way;
   }
   return least;

@@ -4,7 +4,6 @@ import type { SolvesAgain } from './solvesAgain';
 
 /** A price holds while the saving stays within this part of the first step's, times the steps. */
 const WITHIN = 1 / 20;
-const MOST_DOUBLINGS = 8;
 /** The end of the range is found to this part of the steps up to there, or to one step. */
 const RESOLUTION = 1 / 8;
 
@@ -36,7 +35,7 @@ export async function holdsTo(
   const most = Math.floor(Math.min(room / step, withoutSaves / (looserSaves * (1 - WITHIN))) * (1 + 1e-9));
   let good = 1;
   let bad: number | undefined;
-  for (let doubling = 0; doubling < MOST_DOUBLINGS && bad === undefined && good < most; doubling++) {
+  while (bad === undefined && good < most) {
     const steps = Math.min(2 * good, most);
     if (await keeps(steps)) good = steps;
     else bad = steps;
