@@ -6,8 +6,10 @@
 export { type PredictOptions, predictBlend } from './blend/predictBlend';
 export type { PredictedProperties, PredictedProperty, RuleSpread } from './blend/predictedProperties';
 export type { PredictionOptions, PropertyAt } from './blend/predictionOptions';
+export type { AimedRecipe } from './explain/aimedRecipe';
 export { type Alternatives, type AlternativesOptions, alternatives } from './explain/alternatives';
 export { applyRelaxation } from './explain/applyRelaxation';
+export { type BestOfProperty, bestOfProperty, type PropertyAim } from './explain/bestOfProperty';
 export { chanceOfPassing } from './explain/chanceOfPassing';
 export { demandInWords } from './explain/demandInWords';
 export { demandsOf, onlyDemands, withoutDemand } from './explain/demands';
@@ -25,7 +27,9 @@ export type {
   UsedStock,
   WithinReach,
 } from './explain/explanation';
+export { fewestStocks } from './explain/fewestStocks';
 export type { Precisions } from './explain/methodPrecision';
+export { type NearestRecipe, nearestRecipe } from './explain/nearestRecipe';
 export { type MarginOptions, marginFor } from './explain/precisionMargin';
 export { type RecipeInSteps, roundRecipe } from './explain/roundRecipe';
 export { createEngine } from './optimise/defaultEngine';

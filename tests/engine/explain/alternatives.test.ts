@@ -1,35 +1,13 @@
 import { describe, expect, test } from 'vitest';
 import { demoWorkbook } from '../../../app/demo/demoWorkbook';
 import { alternatives, type Order, predictBlend, solveBlend, toOrder } from '../../../src/index';
-import { orderRows } from '../../oracle/orderRows';
 import { CONTINUOUS, DISCRETE, type OrderShape, randomOrder } from '../../oracle/randomOrder';
-import { searchRows } from '../../oracle/sliceSearch';
 import { worstViolation } from '../../oracle/violation';
 import { seeds } from '../optimum/judge';
 import { plainOrder } from '../order/plainOrder';
-
-interface Found {
-  cost: number;
-  stocks: string[];
-}
+import { cheapestOfEverySet, type Found } from './everySet';
 
 const hasAll = (stocks: readonly string[], set: readonly string[]) => set.every((id) => stocks.includes(id));
-
-/** The cheapest recipe of every set of stocks, each set solved alone by the second way (slices over KV100, HiGHS). */
-function cheapestOfEverySet(order: Order): Found[] | undefined {
-  const rows = orderRows(order);
-  const found: Found[] = [];
-  for (let mask = 1; mask < 1 << rows.stocks.length; mask++) {
-    const upper = rows.upper.map((high, i) => (mask & (1 << i) ? high : 0));
-    if (rows.lower.some((low, i) => low > upper[i])) continue;
-    const answer = searchRows({ ...rows, upper }, Infinity);
-    if (answer.status === 'undecided') return undefined;
-    if (answer.status !== 'solved') continue;
-    const used = answer.recipe.filter((line) => line.massFraction > 1e-7);
-    found.push({ cost: answer.cost, stocks: used.map((line) => line.stockId) });
-  }
-  return found.sort((a, b) => a.cost - b.cost);
-}
 
 /** The definition, word by word: the next cheapest that lacks at least one stock of every cheaper one. */
 function byDefinition(found: readonly Found[], first: readonly string[]): Found[] {
