@@ -5,7 +5,7 @@ import { environment } from '../state/environment';
 import { type CellView, type Column, dropUnread, keepUnread } from './column';
 
 interface Amount {
-  id: 'pricePerTonne' | 'leastDoseIfUsed' | 'greatestDose' | 'availableTonnes';
+  id: 'pricePerTonne' | 'leastDoseIfUsed' | 'greatestDose' | 'availableTonnes' | 'lotTonnes' | 'flushCost';
   label: string;
   unit: string;
   title: string;
@@ -143,3 +143,36 @@ export const GREATEST_DOSE_COLUMN = amountColumn({
   },
   problem: outsideShare,
 });
+
+export const DRUM_COLUMN = amountColumn({
+  id: 'lotTonnes',
+  label: 'Drum',
+  unit: 't',
+  title:
+    'What one drum or tote holds [t]: in a batch of fixed size the stock is charged in whole ones; empty: by weight',
+  digits: 3,
+  empty: 'charged by weight',
+  get: ({ lotTonnes }) => lotTonnes,
+  set(product, value) {
+    if (value === undefined) delete product.lotTonnes;
+    else product.lotTonnes = value;
+  },
+  problem: (value) => (value <= 0 ? `A drum holds more than nothing. ${LEFT_OUT}` : undefined),
+});
+
+export function flushColumn(currency: string): Column {
+  return amountColumn({
+    id: 'flushCost',
+    label: 'Flush',
+    unit: currency,
+    title: `What using the stock costs a batch whatever its share: flushing a line, opening a tank [${currency}]`,
+    digits: 0,
+    empty: 'none',
+    get: ({ flushCost }) => flushCost,
+    set(product, value) {
+      if (value === undefined) delete product.flushCost;
+      else product.flushCost = value;
+    },
+    problem: (value) => (value < 0 ? `A flush cannot cost less than nothing. ${LEFT_OUT}` : undefined),
+  });
+}

@@ -24,5 +24,7 @@ export const HEADING_NAMES: readonly [columnId: string, names: readonly string[]
   ['availableTonnes', ['on hand', 'quantity', 'stock t', 'tonnes', 'available', 'quantity on hand']],
   ['leastDoseIfUsed', ['least if used', 'least dose', 'min dose', 'minimum dose', 'least dose if used']],
   ['greatestDose', ['greatest', 'greatest dose', 'max dose', 'maximum dose']],
+  ['lotTonnes', ['drum', 'drum size', 'tote', 'tote size', 'package size']],
+  ['flushCost', ['flush', 'flush cost', 'cleaning cost']],
   ['flags', ['flags', 'tags']],
 ];

@@ -1,5 +1,12 @@
 import { type OwnProperty, PROPERTY_TABLE, type Product, propertyDefinition, type WorkbookOrder } from '../../src';
-import { GREATEST_DOSE_COLUMN, LEAST_DOSE_COLUMN, ON_HAND_COLUMN, priceColumn } from './amountColumns';
+import {
+  DRUM_COLUMN,
+  flushColumn,
+  GREATEST_DOSE_COLUMN,
+  LEAST_DOSE_COLUMN,
+  ON_HAND_COLUMN,
+  priceColumn,
+} from './amountColumns';
 import type { Column } from './column';
 import { figureColumn } from './figureColumn';
 import { FAMILY_COLUMN, FLAGS_COLUMN, NAME_COLUMN, SUPPLIER_COLUMN } from './plainColumns';
@@ -86,6 +93,8 @@ export function stockColumns(
     ON_HAND_COLUMN,
     LEAST_DOSE_COLUMN,
     GREATEST_DOSE_COLUMN,
+    DRUM_COLUMN,
+    flushColumn(currency),
     FLAGS_COLUMN,
   ];
 }

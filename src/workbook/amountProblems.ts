@@ -6,10 +6,12 @@ const NAMES: Readonly<Record<string, string>> = {
   availableTonnes: 'quantity on hand',
   leastDoseIfUsed: 'least dose',
   greatestDose: 'greatest dose',
+  lotTonnes: 'drum size',
+  flushCost: 'flush cost',
 };
 
 /** Amounts that bound how much of a product may be used: unknown, they are not "no bound". */
-const BOUNDS = ['greatestDose', 'leastDoseIfUsed', 'availableTonnes'] as const;
+const BOUNDS = ['greatestDose', 'leastDoseIfUsed', 'availableTonnes', 'lotTonnes', 'flushCost'] as const;
 
 /** True where the cell holds an amount of the product, not a figure of it. */
 export const isAmount = (cell: string): boolean => Object.hasOwn(NAMES, cell);
@@ -31,9 +33,16 @@ export function boundProblems(product: Product): string[] {
   return BOUNDS.flatMap((cell) => {
     const typed = unreadAmount(product, cell);
     if (typed !== undefined) return [notANumber(product.name, cell, typed)];
-    const wrong = cell === 'availableTonnes' ? wrongQuantity(product) : wrongShare(product[cell]);
+    const wrong = wrongAmount(product, cell);
     return wrong ? [`${product.name}: the ${NAMES[cell]} ${wrong} Correct it or exclude the product.`] : [];
   });
+}
+
+function wrongAmount(product: Product, cell: (typeof BOUNDS)[number]): string | undefined {
+  if (cell === 'availableTonnes') return wrongQuantity(product);
+  if (cell === 'lotTonnes') return (product.lotTonnes ?? 1) > 0 ? undefined : 'must be more than zero.';
+  if (cell === 'flushCost') return (product.flushCost ?? 0) >= 0 ? undefined : 'must not be below zero.';
+  return wrongShare(product[cell]);
 }
 
 /** Shares are told as the table shows them, in per cent. */
