@@ -17,6 +17,8 @@ export interface NearestRecipe extends AimedRecipe {
 const SHARE = '\u0001share ';
 const COST = '\u0001cost';
 const PER_CENT = 100;
+/** Changes that add up to less than this are none [%]: no relative gap is small against nothing. */
+const NO_CHANGE = 1e-4;
 
 /** Cost as a property that averages: per tonne by mass, or per m³ by volume. */
 function costFigure(stock: Stock, order: Order): Figure[] {
@@ -70,7 +72,7 @@ function hasOtherCosts(order: Order): boolean {
 
 /**
  * The recipe that changes a recipe in use least, at a cost of at most `within` (default 5 %) above the cheapest, in
- * the order's cost basis: one proven search. Stocks in use that the order does not offer count as changed whatever the
+ * the order's cost basis: one proven search, to a ten-thousandth of a per cent. Stocks in use that the order does not offer count as changed whatever the
  * recipe. Aims of the order are set aside. Undefined where there is no such recipe, or where flush costs count: they
  * are no property of a mix, and a ceiling over them cannot be held exactly in this way.
  */
@@ -86,7 +88,12 @@ export async function nearestRecipe(
   if (costPerTonne === undefined || least === undefined || hasOtherCosts(order)) return undefined;
   const solves = new LimitedSolves(solveOptions, AIM_TIME_MS);
   const ceiling = least + (within + 2 * solves.relativeGap) * Math.abs(least);
-  const { recipe, proof, stopped } = await solves.solve(asChanges(order, inUse, ceiling), kv100Of(outcome));
+  const {
+    recipe,
+    proof,
+    objective = Number.NaN,
+    stopped,
+  } = await solves.solve(asChanges(order, inUse, ceiling), kv100Of(outcome));
   if (!recipe) return undefined;
   const price = new Map(order.stocks.map((stock) => [stock.id, stock.pricePerTonne]));
   const cost = recipe.reduce((sum, line) => sum + line.massFraction * (price.get(line.stockId) ?? Number.NaN), 0);
@@ -95,7 +102,7 @@ export async function nearestRecipe(
     costPerTonne: cost,
     dearerBy: cost - costPerTonne,
     totalChange: totalChange(recipe, inUse),
-    proven: proof.kind === 'least cost',
+    proven: proof.kind === 'least cost' || objective - Math.max(0, proof.lowerBound ?? 0) <= NO_CHANGE,
     stopped: stopped === 'time limit' || stopped === 'cancelled' ? stopped : 'finished',
     solves: solves.count,
   };
