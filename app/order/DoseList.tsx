@@ -5,6 +5,7 @@ import { Select } from '../parts/Select';
 import { useAnswer } from '../state/answerStore';
 import { sameButForLimits } from './butForLimits';
 import { DoseRow } from './DoseRow';
+import { batchTonnesOf } from './doseUnit';
 import { doseProblems } from './problemsAt';
 import styles from './rules.module.css';
 import { editOrder, useProducts } from './useOrder';
@@ -31,6 +32,7 @@ export const DoseList = memo(function DoseList({ order }: { order: WorkbookOrder
             key={dose.stockId}
             dose={dose}
             name={nameOf(dose.stockId)}
+            batch={batchTonnesOf(order)}
             known={products.some(({ id }) => id === dose.stockId)}
             problems={doseProblems(answer, dose)}
             onChange={(next: Dose) =>

@@ -2,7 +2,7 @@ import type { Dose } from '../../src';
 import { NumberField } from '../parts/NumberField';
 import { RangeFields } from '../parts/RangeFields';
 import { Select } from '../parts/Select';
-import { BasisSelect } from './BasisSelect';
+import { type DoseMeasure, inMeasure, measureOf } from './doseUnit';
 import { fromPercent, toPercent } from './percent';
 import { RuleRow } from './RuleRow';
 import styles from './rules.module.css';
@@ -16,11 +16,18 @@ const MANNERS = {
 
 type Manner = keyof typeof MANNERS;
 
+const MEASURES: Record<DoseMeasure, string> = {
+  mix: 'of the mix',
+  'base oil': 'of the base oil',
+  tonnes: 'in the batch',
+};
+
 /** The dose of one product: exact or a range, compulsory or not, of the mix or of the base oil. */
 export function DoseRow({
   dose,
   name,
   known,
+  batch,
   problems,
   onChange,
   onRemove,
@@ -28,11 +35,19 @@ export function DoseRow({
   dose: Dose;
   name: string;
   known: boolean;
+  /** The batch of the order [t], if it has one. */
+  batch: number | undefined;
   problems: readonly string[];
   onChange(dose: Dose): void;
   onRemove(): void;
 }) {
   const manner = mannerOf(dose);
+  const inTonnes = dose.unit === 'tonnes';
+  const field = inTonnes
+    ? { unit: 't', digits: 3, sense: { min: 0, max: 1e6 } }
+    : { unit: '%', digits: 2, sense: { min: 0, max: 100 } };
+  const shown = (value: number | undefined) => (inTonnes ? value : toPercent(value));
+  const read = (value: number | undefined) => (inTonnes ? value : fromPercent(value));
   const said = [...problems, ...ownProblems(dose, name, known)];
   return (
     <RuleRow problems={said} removeLabel={`Remove the dose of ${name}`} onRemove={onRemove}>
@@ -48,29 +63,25 @@ export function DoseRow({
         <NumberField
           label={`Dose of ${name}`}
           hideLabel
-          unit="%"
-          digits={2}
-          step={0.05}
-          sense={{ min: 0, max: 100 }}
-          value={toPercent(dose.exactly)}
-          onCommit={(value) => onChange(withField(dose, 'exactly', fromPercent(value)))}
+          {...field}
+          step={inTonnes ? 0.01 : 0.05}
+          value={shown(dose.exactly)}
+          onCommit={(value) => onChange(withField(dose, 'exactly', read(value)))}
         />
       ) : (
         <RangeFields
           context={`Dose of ${name}`}
-          unit="%"
-          digits={2}
-          sense={{ min: 0, max: 100 }}
-          value={{ min: toPercent(dose.min), max: toPercent(dose.max) }}
-          onChange={({ min, max }) =>
-            onChange(withField(withField(dose, 'min', fromPercent(min)), 'max', fromPercent(max)))
-          }
+          {...field}
+          value={{ min: shown(dose.min), max: shown(dose.max) }}
+          onChange={({ min, max }) => onChange(withField(withField(dose, 'min', read(min)), 'max', read(max)))}
         />
       )}
-      <BasisSelect
+      <Select
         label={`What the dose of ${name} is counted against`}
-        value={dose.of}
-        onChange={(of) => onChange({ ...dose, of })}
+        hideLabel
+        value={measureOf(dose)}
+        options={Object.entries(MEASURES).map(([value, label]) => ({ value: value as DoseMeasure, label }))}
+        onChange={(measure) => onChange(inMeasure(dose, measure, batch))}
       />
     </RuleRow>
   );
@@ -83,8 +94,13 @@ function mannerOf({ exactly, min, max, required }: Dose): Manner {
 
 /** Going from exact to a range and back keeps the number. */
 function inManner(dose: Dose, manner: Manner): Dose {
-  const { stockId, of, exactly, min, max } = dose;
-  const base: Dose = { stockId, ...(of && { of }), ...(manner.startsWith('if used') && { required: false }) };
+  const { stockId, of, unit, exactly, min, max } = dose;
+  const base: Dose = {
+    stockId,
+    ...(of && { of }),
+    ...(unit && { unit }),
+    ...(manner.startsWith('if used') && { required: false }),
+  };
   if (manner.endsWith('exactly')) return withField(base, 'exactly', exactly ?? min ?? max);
   return withField(withField(base, 'min', min ?? exactly ?? 0), 'max', max ?? exactly);
 }
