@@ -1,5 +1,5 @@
 import { memo } from 'react';
-import { type BlendOutcome, demandInWords, type Ladder, type Order } from '../../src';
+import { type BlendOutcome, demandInWords, type Ladder, type Order, type Relaxation } from '../../src';
 import { Conflict } from '../answer/Conflict';
 import { List } from '../answer/LeftOutList';
 import { Button } from '../parts/Button';
@@ -7,7 +7,7 @@ import { useExplained } from '../state/explainStore';
 import { useWorkbook } from '../state/workbookStore';
 import { costPer } from './costWords';
 import styles from './Explain.module.css';
-import { reachInWords, relaxationInWords, unfinishedInWords } from './ladderWords';
+import { relaxationInWords, unfinishedInWords } from './ladderWords';
 import { Told } from './Told';
 import { tryRelaxation } from './tryRelaxation';
 
@@ -21,13 +21,13 @@ export const ImpossibleLadder = memo(function ImpossibleLadder({
   order: Order;
   outcome: BlendOutcome;
 }) {
-  const { part, stale } = useExplained(orderId, 'impossible');
+  const { part, stale, due } = useExplained(orderId, 'impossible');
   const { proof } = outcome;
   if (proof.kind !== 'impossible' && proof.kind !== 'impossible with known figures') return null;
   return (
     <>
       {!part?.told && <Conflict order={order} outcome={outcome} />}
-      <Told part={part} stale={stale} waiting="Working out what is within reach …">
+      <Told part={part} stale={stale} due={due} waiting="Working out what is within reach …">
         {(ladder, { order: explained }) => <Steps orderId={orderId} ladder={ladder} order={explained} stale={stale} />}
       </Told>
     </>
@@ -42,10 +42,11 @@ interface StepsProps {
 }
 
 function Steps({ orderId, ladder, order, stale }: StepsProps) {
-  const currency = useWorkbook(({ workbook }) => workbook.settings.currency);
-  const { conflict, conflictProven, noConflict, reach, relaxations } = ladder;
-  const within = reach.map((one) => reachInWords(one, order, currency)).filter((words) => words !== undefined);
+  const { conflict, conflictProven, noConflict, relaxations } = ladder;
   const unfinished = unfinishedInWords(ladder);
+  const alone = relaxations.filter(({ changes }) => changes.length === 1);
+  const together = relaxations.filter(({ changes }) => changes.length > 1);
+  const shared = { orderId, order, stale };
   return (
     <>
       {noConflict && <List messages={noConflict.messages} />}
@@ -63,45 +64,50 @@ function Steps({ orderId, ladder, order, stale }: StepsProps) {
       {conflict.length > 0 && (
         <div>
           <h3>Within reach, one at a time</h3>
-          {within.length > 0 ? (
-            <List messages={within} />
+          {alone.length > 0 ? (
+            <Relaxations {...shared} list={alone} />
           ) : (
             <p>{unfinished ? 'Nothing found in the time.' : 'Moving one limit alone is not enough.'}</p>
           )}
         </div>
       )}
-      {relaxations.length > 0 && <WaysOut orderId={orderId} ladder={ladder} order={order} stale={stale} />}
+      {together.length > 0 && (
+        <div>
+          <h3>Several moved together</h3>
+          <Relaxations {...shared} list={together} />
+        </div>
+      )}
+      {relaxations.length > 1 && (
+        <p className={styles.soft}>The smallest change first, counted in the units the methods report in.</p>
+      )}
       {unfinished && <p className={styles.soft}>{unfinished}</p>}
     </>
   );
 }
 
-function WaysOut({ orderId, ladder, order, stale }: StepsProps) {
+/** Ways out, each with its cost and a button that tries it. */
+function Relaxations({ orderId, list, order, stale }: Omit<StepsProps, 'ladder'> & { list: readonly Relaxation[] }) {
   const currency = useWorkbook(({ workbook }) => workbook.settings.currency);
   return (
-    <div>
-      <h3>Ways out, the smallest change first</h3>
-      <ol className={styles.choices}>
-        {ladder.relaxations.map((relaxation) => {
-          const words = relaxationInWords(relaxation, order);
-          return (
-            <li key={words} className={styles.choice}>
-              <p>
-                {words}: <b>{costPer(relaxation.costPerTonne, currency)}</b>
-                {!relaxation.proven && ' (not proven the smallest change)'}
-              </p>
-              <Button
-                disabled={stale}
-                aria-label={`Try it in a copy: ${words}`}
-                onClick={() => tryRelaxation(orderId, order, relaxation, words)}
-              >
-                Try it in a copy
-              </Button>
-            </li>
-          );
-        })}
-      </ol>
-      <p className={styles.soft}>Changes are counted in the units their methods report in.</p>
-    </div>
+    <ol className={styles.choices}>
+      {list.map((relaxation) => {
+        const words = relaxationInWords(relaxation, order);
+        return (
+          <li key={words} className={styles.choice}>
+            <p>
+              {words}, at <b>{costPer(relaxation.costPerTonne, currency)}</b>
+              {!relaxation.proven && ', not proven'}
+            </p>
+            <Button
+              disabled={stale}
+              aria-label={`Try it in a copy: ${words}`}
+              onClick={() => tryRelaxation(orderId, order, relaxation, words)}
+            >
+              Try it in a copy
+            </Button>
+          </li>
+        );
+      })}
+    </ol>
   );
 }

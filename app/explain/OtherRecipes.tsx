@@ -13,10 +13,10 @@ import { productsToKeepOut, stocksToKeepOut, takeAlternative } from './takeAlter
 
 /** Recipes that do without a stock of the cheapest, with what they cost more. */
 export const OtherRecipes = memo(function OtherRecipes({ orderId }: { orderId: string }) {
-  const { part, stale } = useExplained(orderId, 'alternatives');
+  const { part, stale, due } = useExplained(orderId, 'alternatives');
   return (
     <Section title="Other recipes" level={3} className={styles.part}>
-      <Told part={part} stale={stale} waiting="Looking for other recipes …">
+      <Told part={part} stale={stale} due={due} waiting="Looking for other recipes …">
         {(alternatives, { order, outcome }) => (
           <List orderId={orderId} alternatives={alternatives} order={order} outcome={outcome} stale={stale} />
         )}

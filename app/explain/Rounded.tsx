@@ -26,7 +26,7 @@ export const Rounded = memo(function Rounded({
 }) {
   const rounding = useExplain((state) => state.rounding);
   const roundedTo = useExplain(({ explained }) => explained[orderId]?.roundedTo);
-  const { part, stale } = useExplained(orderId, 'rounded');
+  const { part, stale, due } = useExplained(orderId, 'rounded');
   const choices = roundingsOf(order);
   const chosen = choices.includes(rounding) ? rounding : '';
   return (
@@ -42,7 +42,7 @@ export const Rounded = memo(function Rounded({
         onChange={(choice) => setRounding(choice === 'no' ? '' : choice)}
       />
       {chosen !== '' && (
-        <Told part={roundedTo === chosen ? part : undefined} stale={stale} waiting="Rounding the recipe …">
+        <Told part={roundedTo === chosen ? part : undefined} stale={stale} due={due} waiting="Rounding the recipe …">
           {(rounded, { order: explained, outcome }) => (
             <RoundedRecipe rounded={rounded} rounding={chosen} title={title} order={explained} outcome={outcome} />
           )}

@@ -15,7 +15,7 @@ export const SecondOpinion = memo(function SecondOpinion({ orderId }: { orderId:
   const told = part?.told && !stale ? opinionInWords(part.told.value, part.outcome, part.order, currency) : undefined;
   return (
     <div className={styles.row}>
-      <Button tone="quiet" disabled={asking} onClick={askSecondOpinion}>
+      <Button disabled={asking} onClick={askSecondOpinion}>
         Second opinion
       </Button>
       <span role="status" className={classNames(styles.opinion, told && styles[told.tone])}>

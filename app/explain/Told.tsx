@@ -8,19 +8,20 @@ import styles from './Explain.module.css';
 export function Told<Value>({
   part,
   stale,
+  due,
   waiting,
   children,
 }: {
   part: Part<Value> | undefined;
   stale: boolean;
+  due: boolean;
   /** Said until something is told. */
   waiting: string;
   children(value: Value, part: Part<Value>): ReactNode;
 }) {
   const faded = useLasting(stale);
-  const busy = !part || stale;
   return (
-    <div aria-busy={busy || undefined} className={classNames(styles.told, faded && styles.stale)}>
+    <div aria-busy={due || undefined} className={classNames(styles.told, faded && styles.stale)}>
       {!part && <p className={styles.soft}>{waiting}</p>}
       {part?.message && <p className={styles.soft}>{part.message}</p>}
       {part?.told && children(part.told.value, part)}

@@ -16,11 +16,11 @@ const NEAREST = 6;
 
 /** What each stock in use is worth to the recipe, and what would bring another one in. */
 export const WhatWouldChange = memo(function WhatWouldChange({ orderId }: { orderId: string }) {
-  const { part, stale } = useExplained(orderId, 'recipe');
+  const { part, stale, due } = useExplained(orderId, 'recipe');
   const currency = useWorkbook(({ workbook }) => workbook.settings.currency);
   return (
     <Section title="What would change it" level={3} className={styles.part}>
-      <Told part={part} stale={stale} waiting="Working out what would change it …">
+      <Told part={part} stale={stale} due={due} waiting="Working out what would change it …">
         {(explanation, { order }) => <Stocks explanation={explanation} order={order} currency={currency} />}
       </Told>
     </Section>
@@ -30,6 +30,7 @@ export const WhatWouldChange = memo(function WhatWouldChange({ orderId }: { orde
 function Stocks({ explanation, order, currency }: { explanation: Explanation; order: Order; currency: string }) {
   const { used, entries, stopped } = explanation;
   const nearest = byNearness(entries);
+  const largestFirst = used.toSorted((a, b) => b.massFraction - a.massFraction);
   const props = { order, currency };
   return (
     <>
@@ -44,7 +45,7 @@ function Stocks({ explanation, order, currency }: { explanation: Explanation; or
             </tr>
           </thead>
           <tbody>
-            {used.map((stock) => (
+            {largestFirst.map((stock) => (
               <tr key={stock.stockId}>
                 <th scope="row">{nameOf(order, stock.stockId)}</th>
                 <td>{standsInWords(stock, currency)}</td>

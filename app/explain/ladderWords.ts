@@ -1,21 +1,8 @@
-import {
-  type Ladder,
-  type Order,
-  propertyDefinition,
-  type Relaxation,
-  VI_DEFINITION,
-  type WithinReach,
-} from '../../src';
+import { type Ladder, type Order, propertyDefinition, type Relaxation, VI_DEFINITION } from '../../src';
 import { shortLimitName, unitOf } from '../parts/limitWords';
 import { formatNumber } from '../parts/numberText';
-import { costPer } from './costWords';
 
-interface EndChange {
-  limit: number;
-  end: 'min' | 'max';
-  stated: number;
-  to: number;
-}
+type EndChange = Relaxation['changes'][number];
 
 /** "KV40 down to 44.10 mm²/s (asked at least 46.00)": an end of a limit moved out. */
 export function changeInWords({ limit: place, end, stated, to }: EndChange, { limits, ownProperties }: Order): string {
@@ -29,15 +16,7 @@ export function changeInWords({ limit: place, end, stated, to }: EndChange, { li
   return `${shortLimitName(limit, ownProperties)} ${way} ${number(to)}${unit ? ` ${unit}` : ''} ${asked}`;
 }
 
-/** "KV40 down to 44.10 mm²/s (asked at least 46.00), at €1,200.00/t"; undefined where moving it alone is no help. */
-export function reachInWords(reach: WithinReach, order: Order, currency: string): string | undefined {
-  const { reachable, costPerTonne, proven } = reach;
-  if (reachable === undefined) return undefined;
-  const cost = costPerTonne === undefined ? '' : `, at ${costPer(costPerTonne, currency)}`;
-  return `${changeInWords({ ...reach, to: reachable }, order)}${cost}${proven ? '' : ', not proven'}`;
-}
-
-/** "Noack down to …; pour point up to …". */
+/** "KV40 down to 44.10 mm²/s (asked at least 46.00); Noack up to 9.0 % m/m (asked at most 8.0)". */
 export function relaxationInWords({ changes }: Relaxation, order: Order): string {
   return changes.map((change) => changeInWords(change, order)).join('; ');
 }

@@ -6,7 +6,6 @@ import { NumberField } from '../parts/NumberField';
 import { formatNumber } from '../parts/numberText';
 import { useWorkbook } from '../state/workbookStore';
 import styles from './LimitList.module.css';
-import { precisionMargin } from './precisionMargin';
 
 /** The rest of a limit: strictness, margin, aim, temperature, and how the property is measured and blended. */
 export function LimitMore({
@@ -14,17 +13,19 @@ export function LimitMore({
   definition,
   name,
   unit,
+  margin,
   onEdit,
 }: {
   limit: Limit;
   definition: PropertyDefinition;
   name: string;
   unit: string | undefined;
+  /** What the method's precision asks to stay inside by. */
+  margin: number | undefined;
   onEdit(label: string, change: (limit: Limit) => void): void;
 }) {
   const currency = useWorkbook(({ workbook }) => workbook.settings.currency);
   const { digits, reportingUnit } = definition;
-  const margin = precisionMargin(limit, definition);
   const shared = { digits, step: reportingUnit, context: name };
   return (
     <div className={styles.more}>

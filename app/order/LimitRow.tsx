@@ -1,6 +1,6 @@
 import { useEffect, useId, useRef, useState } from 'react';
 import { type Limit, propertyDefinition } from '../../src';
-import { LimitPriceLine, LimitPriceStory } from '../explain/LimitPriceLine';
+import { LimitPriceLine } from '../explain/LimitPriceLine';
 import { IconButton } from '../parts/IconButton';
 import { type End, setEnd, upperEnd } from '../parts/limitEnds';
 import { contradiction, limitName, shortLimitName, unitOf } from '../parts/limitWords';
@@ -8,8 +8,8 @@ import { NumberField } from '../parts/NumberField';
 import { useLasting } from '../parts/useLasting';
 import type { Answer } from '../state/answerStore';
 import { endEdit, useWorkbook } from '../state/workbookStore';
+import { LimitDetails } from './LimitDetails';
 import styles from './LimitList.module.css';
-import { LimitMore } from './LimitMore';
 import { LimitName } from './LimitName';
 import { checkOf, marksOf, mixValue } from './limitAnswer';
 import { problemsAt } from './problemsAt';
@@ -143,10 +143,16 @@ export function LimitRow({ orderId, limit, index, answer, isNew }: LimitRowProps
       )}
       <div id={`${id}-more`} hidden={!open}>
         {open && (
-          <>
-            <LimitPriceStory orderId={orderId} index={index} property={limit.property} celsius={limit.celsius} />
-            <LimitMore limit={limit} definition={definition} name={name} unit={unitOf(definition)} onEdit={edit} />
-          </>
+          <LimitDetails
+            orderId={orderId}
+            index={index}
+            limit={limit}
+            definition={definition}
+            name={name}
+            answer={answer}
+            stale={faded}
+            onEdit={edit}
+          />
         )}
       </div>
     </li>

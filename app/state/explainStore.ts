@@ -2,7 +2,7 @@ import { create } from 'zustand';
 import type { BlendOutcome, Order } from '../../src';
 import type { Answers, QuestionKind } from '../worker/questions';
 import type { Opinion } from '../worker/secondOpinion';
-import { useAnswers } from './answerStore';
+import { type Answer, useAnswers } from './answerStore';
 
 /** One thing told about an answer. It speaks of this outcome and no other. */
 export interface Part<Value> {
@@ -47,21 +47,29 @@ export function setExplained(orderId: string, change: Partial<Explained>): void 
   }));
 }
 
-/** A part of what was told, and whether it speaks of the answer now on screen. */
+/** One part of what was told, and how it stands to the answer on screen. */
 export interface Shown<Value> {
-  part: Part<Value> | undefined;
+  part: Value;
+  /** It speaks of another answer. */
   stale: boolean;
+  /** The answer is there, and this part of it is not told yet. */
+  due: boolean;
 }
 
 /** One part of what was told about an order's answer. Renders anew only where the part or its standing changes. */
 export function useExplained<Kind extends QuestionKind | 'opinion'>(
   orderId: string,
   kind: Kind,
-): { part: Explained[Kind]; stale: boolean } {
+): Shown<Explained[Kind]> {
   const part = useExplain(({ explained }) => explained[orderId]?.[kind]);
+  const isOfThis = (answer: Answer | undefined) => answer !== undefined && answer.outcome === part?.outcome;
   const stale = useAnswers(({ answers }) => {
     const answer = answers[orderId];
-    return part !== undefined && (answer?.stale !== false || answer.outcome !== part.outcome);
+    return part !== undefined && (answer?.stale !== false || !isOfThis(answer));
   });
-  return { part, stale };
+  const due = useAnswers(({ answers }) => {
+    const answer = answers[orderId];
+    return answer?.phase === 'answered' && !answer.stale && !isOfThis(answer);
+  });
+  return { part, stale, due };
 }

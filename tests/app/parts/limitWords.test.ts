@@ -1,5 +1,4 @@
 import { describe, expect, it } from 'vitest';
-import { precisionMargin } from '../../../app/order/precisionMargin';
 import { contradiction, limitName, rangeInWords, roomInWords, shortLimitName } from '../../../app/parts/limitWords';
 import { type Limit, type LimitCheck, type PropertyDefinition, propertyDefinition } from '../../../src';
 
@@ -54,18 +53,5 @@ describe('a limit in words', () => {
     expect(contradiction({ ...KV100, min: 6, below: 6 }, KV)).toMatch(/Nothing lies at or above/);
     expect(contradiction({ ...KV100, min: 5.8, max: 6.2, insideBy: 0.3 }, KV)).toMatch(/margin inside leaves nothing/);
     expect(contradiction({ ...KV100, min: 5.8, max: 6.2, insideBy: 0.2 }, KV)).toBeUndefined();
-  });
-});
-
-describe('the margin from the method', () => {
-  // ISO 4259-2 / ASTM D3244: one result, 95 %, one-sided, 1.645/2.772 R = 0.59 R.
-  it('is 0.59 R, rounded up to the digits shown', () => {
-    expect(precisionMargin({ property: 'pourPoint', max: -24 }, definitionOf('pourPoint'))).toBe(4);
-    expect(precisionMargin({ ...KV100, min: 5.8, max: 6.2 }, KV)).toBe(0.06);
-  });
-
-  it('is not offered without an end or a known precision', () => {
-    expect(precisionMargin(KV100, KV)).toBeUndefined();
-    expect(precisionMargin({ property: 'sulphur', max: 10 }, definitionOf('sulphur'))).toBeUndefined();
   });
 });
