@@ -29,14 +29,17 @@ export class LimitedSolves {
     return this.#restMs() > 0 ? undefined : 'time limit';
   }
 
-  /** @param near KV100 [mm²/s] of a similar recipe, where one is known. */
-  async solve(order: Order, near?: number): Promise<BlendOutcome> {
+  /**
+   * @param near KV100 [mm²/s] of a similar recipe, where one is known.
+   * @param part greatest part of the time left that this solve may take [-].
+   */
+  async solve(order: Order, near?: number, part = 1): Promise<BlendOutcome> {
     this.#count++;
     const { near: first, onProgress: _, ...options } = this.#options;
     const start = near ?? first;
     return solveBlend(order, {
       ...options,
-      timeLimitMs: Math.max(0, this.#restMs()),
+      timeLimitMs: Math.max(0, part * this.#restMs()),
       ...(start === undefined ? {} : { near: start }),
     });
   }

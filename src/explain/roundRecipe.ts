@@ -1,19 +1,26 @@
 import type { Order } from '../optimise/order';
 import type { BlendOutcome } from '../optimise/outcome';
-import { doseShares } from '../optimise/rows/doseShares';
+import { isCompulsory } from '../optimise/rows/candidates';
 import type { SolveOptions } from '../optimise/solveOptions';
 import type { Recipe } from '../stock/stock';
 import type { RoundedRecipe } from './explanation';
 import { fixedRecipe, quickCheck } from './fixedRecipe';
 import { kv100Of, LimitedSolves } from './limitedSolves';
+import { inLots, snapped } from './orderInLots';
 import { roundingCandidates } from './roundingCandidates';
-import { comesInDrums, exactShare, isWholeSteps, type RoundingGrid, roundingGrid, shareOfSteps } from './roundingGrid';
+import { isWholeSteps, roundingGrid } from './roundingGrid';
+import { withoutStocks } from './withoutStocks';
 
 /** A recipe in steps, and the stocks whose share is no whole number of them. */
 export interface RecipeInSteps extends RoundedRecipe {
   /** Exact doses and whole drums that are no whole number of steps, and the stock that makes up the mix for them. */
   offStep: string[];
 }
+
+/** Part of the time for steps of the stocks in use alone: few enough for a quick answer where there are many stocks. */
+const PART_FOR_OWN_STOCKS = 0.3;
+/** What is left after them is for looking at what was found. */
+const PART_FOR_ALL_STOCKS = 0.9;
 
 interface Checked {
   recipe: Recipe;
@@ -22,46 +29,9 @@ interface Checked {
 }
 
 /**
- * The order with every stock in lots of a step, so that solving it finds the cheapest recipe in steps. Exact doses and
- * drums stay as they are; the stock that makes up the mix is free, and so follows from the others.
- */
-function inLots(order: Order, { step, fill }: RoundingGrid): Order {
-  const { batchTonnes } = order;
-  const isFixed = typeof batchTonnes === 'number';
-  const batch = typeof batchTonnes === 'object' ? batchTonnes.min : (batchTonnes ?? 1);
-  const stocks = order.stocks.map((stock) => {
-    const { lotTonnes: _, flushCost, availableTonnes, ...rest } = stock;
-    const kept = exactShare(order, stock.id) !== undefined || fill?.stockId === stock.id;
-    return {
-      ...rest,
-      // Without a batch nothing on hand is counted, without a fixed one no flush cost: nor are they here.
-      ...(availableTonnes !== undefined && batchTonnes !== undefined ? { availableTonnes } : {}),
-      ...(flushCost !== undefined && isFixed ? { flushCost } : {}),
-      ...(comesInDrums(order, stock.id) ? { lotTonnes: stock.lotTonnes } : kept ? {} : { lotTonnes: step * batch }),
-    };
-  });
-  const doses = order.doses?.map((dose) => doseShares(dose, order));
-  return { ...order, stocks, batchTonnes: batch, ...(doses ? { doses } : {}) };
-}
-
-/** The exact shares that a solution in lots stands for. */
-function snapped(order: Order, { step, fill }: RoundingGrid, recipe: Recipe): Recipe {
-  const lines = recipe.map(({ stockId, massFraction }) => {
-    const exactly = exactShare(order, stockId);
-    if (exactly !== undefined) return { stockId, massFraction: exactly };
-    if (comesInDrums(order, stockId)) return { stockId, massFraction };
-    return { stockId, massFraction: shareOfSteps(Math.round(massFraction / step), step) };
-  });
-  if (!fill) return lines.filter((line) => line.massFraction > 0);
-  const others = lines.filter((line) => line.stockId !== fill.stockId && line.massFraction > 0);
-  const massFraction = 1 - others.reduce((sum, line) => sum + line.massFraction, 0);
-  return massFraction > 1e-9 ? [...others, { stockId: fill.stockId, massFraction }] : others;
-}
-
-/**
  * The recipe in whole steps of the mass fraction, on specification still. First every share of the recipe is rounded up
  * or down so that they add up, the cheapest on specification first; then the order is solved with every stock in lots
- * of a step, unused ones too, which betters the recipe or proves it. What keeps the order is judged by solving it with
+ * of a step, those of the recipe alone and then all, which betters the recipe or proves it. What keeps the order is judged by solving it with
  * the rounded shares as exact doses, so every rule counts.
  *
  * An exact dose stays what it is, and so does a stock in whole drums. Where these are no whole number of steps, or one
@@ -91,10 +61,16 @@ export async function roundRecipe(
     const sorted = [...candidate].sort((a, b) => (a.stockId < b.stockId ? -1 : 1));
     return { recipe: sorted, costPerTonne: found.costPerTonne, objective: found.objective };
   };
-  const nearby = await firstThatKeeps(roundingCandidates(grid, order.stocks), quickCheck(order), check, solves);
-  const lots = solves.stopped ? undefined : await solves.solve(inLots(order, grid), near);
-  const solved = lots?.recipe && (await check(snapped(order, grid, lots.recipe)));
-  const best = solved && !(nearby && nearby.objective <= solved.objective) ? solved : nearby;
+  let best = await firstThatKeeps(roundingCandidates(grid, order.stocks), quickCheck(order), check, solves);
+  const solveInLots = async (offered: Order, part: number): Promise<BlendOutcome | undefined> => {
+    if (solves.stopped) return undefined;
+    const lots = await solves.solve(inLots(offered, grid), near, part);
+    const found = lots.recipe && (await check(snapped(order, grid, lots.recipe)));
+    if (found && !(best && best.objective <= found.objective)) best = found;
+    return lots;
+  };
+  await solveInLots(onlyStocksOf(order, recipe), PART_FOR_OWN_STOCKS);
+  const lots = await solveInLots(order, PART_FOR_ALL_STOCKS);
   if (!best) return undefined;
 
   const least = lots?.proof.kind === 'least cost' ? lots.objective : lots?.proof.lowerBound;
@@ -107,6 +83,16 @@ export async function roundRecipe(
     proven: least !== undefined && best.objective <= least + 2 * solves.relativeGap * Math.abs(best.objective),
     offStep: best.recipe.filter((line) => !isWholeSteps(line.massFraction, step)).map((line) => line.stockId),
   };
+}
+
+/** The order with what a recipe does not use left out, but for compulsory stocks. */
+function onlyStocksOf(order: Order, recipe: Recipe): Order {
+  const used = new Set(recipe.map((line) => line.stockId));
+  const others = order.stocks.filter(({ id }) => !used.has(id) && !isCompulsory(order, id));
+  return withoutStocks(
+    order,
+    others.map((stock) => stock.id),
+  );
 }
 
 async function firstThatKeeps(
