@@ -105,6 +105,17 @@ export class SolvesAgain {
     return answer;
   }
 
+  /** Whether nothing is cheaper than the explained recipe at lower prices of stocks that it does not use: proven. */
+  async staysCheapest(prices: ReadonlyMap<string, number>): Promise<boolean> {
+    const { cost, proven } = await this.solveAtPrices(prices);
+    return proven && cost >= this.cost - this.noiseAt(this.cost);
+  }
+
+  /** Price per tonne of a stock as the order states it. */
+  presentPrice(stockId: string): number {
+    return this.order.stocks.find((stock) => stock.id === stockId)?.pricePerTonne ?? Number.NaN;
+  }
+
   /** Differences between costs of this size say nothing up to here. */
   noiseAt(cost: number): number {
     return 2 * Math.max(this.#solves.relativeGap, LEAST_GAP) * gapReference(cost, this.#prices);

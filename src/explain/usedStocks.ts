@@ -14,7 +14,7 @@ export async function* usedStocks(again: SolvesAgain): AsyncGenerator<UsedStock>
 
 async function usedStock(again: SolvesAgain, { stockId, massFraction }: RecipeLine): Promise<UsedStock> {
   const { order } = again;
-  const present = order.stocks.find((stock) => stock.id === stockId)?.pricePerTonne ?? Number.NaN;
+  const present = again.presentPrice(stockId);
   const loss = await lossOf(again, stockId);
   const fixed = { least: isAtLeast(order, stockId, massFraction), most: isAtMost(order, stockId, massFraction) };
   const stands: BreakEven = { proven: again.proven };
