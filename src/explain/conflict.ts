@@ -57,6 +57,14 @@ async function isIrreducible(enquiry: Enquiry, order: Order, conflict: readonly 
   return true;
 }
 
+async function smallestOf(enquiry: Enquiry, order: Order, outcome: BlendOutcome): Promise<Demand[]> {
+  const all = demandsOf(order);
+  const involved = all.filter((demand) => seemsInvolved(demand, order, outcome));
+  const isEnough =
+    involved.length < all.length && (await enquiry.isPossible(onlyDemands(order, involved))).state === 'impossible';
+  return smallest(enquiry, order, [], true, isEnough ? involved : all);
+}
+
 /**
  * A smallest set of demands of an impossible order that cannot hold together. The set itself is always proven
  * impossible; `isProven` adds that a recipe was found without each single one of them. Empty where the order is
@@ -67,10 +75,12 @@ export async function smallestConflict(
   order: Order,
   outcome: BlendOutcome,
 ): Promise<{ conflict: Demand[]; isProven: boolean }> {
-  const all = demandsOf(order);
-  const involved = all.filter((demand) => seemsInvolved(demand, order, outcome));
-  const isEnough =
-    involved.length < all.length && (await enquiry.isPossible(onlyDemands(order, involved))).state === 'impossible';
-  const conflict = await smallest(enquiry, order, [], true, isEnough ? involved : all);
+  const conflict = await smallestOf(enquiry, order, outcome);
   return { conflict, isProven: await isIrreducible(enquiry, order, conflict) };
+}
+
+/** Some demands of an order that cannot hold together; none where the order is not proven impossible. */
+export async function oneConflict(enquiry: Enquiry, order: Order): Promise<Demand[]> {
+  const { state, outcome } = await enquiry.isPossible(order);
+  return state === 'impossible' && outcome ? smallestOf(enquiry, order, outcome) : [];
 }

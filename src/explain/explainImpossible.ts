@@ -7,8 +7,8 @@ import { effortOf, type Movable } from './effort';
 import { EndSteps } from './endSteps';
 import { Enquiry, type Finding } from './enquiry';
 import type { Demand, Ladder, Relaxation, WithinReach } from './explanation';
-import { jointRelaxations } from './jointRelaxation';
 import { type LimitEnd, statedEnds } from './limitEnd';
+import { findRelaxations } from './relaxations';
 import { withinReach } from './withinReach';
 
 /** How to explain; every field has a default. `timeLimitMs` counts for all solves together, default 5 000. */
@@ -62,7 +62,8 @@ function singleRelaxations(reach: readonly WithinReach[], movable: readonly Mova
  * `reach` says, and moving several together where no single one is enough or less effort was found.
  *
  * Proven of a relaxation: that the order it makes has a recipe, of which cost, and that no single change can be taken
- * back by one reporting unit. Least among those of one end; of several together another may take less effort.
+ * back by one reporting unit. `leastEffort` is a proven bound for every change of limits in whole reporting units: the
+ * first relaxation is the cheapest possible only where its effort is no more than that.
  *
  * Nothing but `noConflict` is told of an order that is possible, refused, or not proven impossible in time. Throws
  * RangeError for options that are no numbers.
@@ -103,12 +104,8 @@ export async function explainImpossible(order: Order, options: LadderOptions = {
 
   const all = ends.map(({ movable }) => movable);
   const singles = singleRelaxations(reach, all);
-  const least = Math.min(...singles.map(({ effort }) => effort));
   const own = ends.filter(({ isInConflict }) => isInConflict).map(({ movable }) => movable);
-  let joint = own.length > 1 ? await jointRelaxations(enquiry, order, own, least) : [];
-  if (joint.length === 0 && singles.length === 0 && all.length > own.length) {
-    joint = await jointRelaxations(enquiry, order, all, least);
-  }
-  const relaxations = [...singles, ...joint].sort((a, b) => a.effort - b.effort);
-  return ladder({ conflict, conflictProven: isProven, reach, relaxations });
+  const found = await findRelaxations(enquiry, order, own, all, singles);
+  const bound = found.relaxations.length > 0 ? { leastEffort: found.leastEffort } : {};
+  return ladder({ conflict, conflictProven: isProven, reach, relaxations: found.relaxations, ...bound });
 }

@@ -104,6 +104,11 @@ export interface Ladder {
   reach: WithinReach[];
   /** Ways to change limits so that the order becomes possible, the cheapest in weighted reporting units first. */
   relaxations: Relaxation[];
+  /**
+   * No change of limits, by whole reporting units, takes less effort than this: proven. Where several limits may move
+   * it comes within a twentieth of the first relaxation's effort if that is the cheapest and solves and time suffice.
+   */
+  leastEffort?: number;
   stopped: 'finished' | 'time limit' | 'cancelled';
   solves: number;
 }

@@ -46,6 +46,9 @@ describe('two stocks (source: hand calculation)', () => {
       [[640], 240],
       [[33.3], 267],
     ]);
+    // So 240 is the least there is; the bound comes within a twentieth of it.
+    expect(ladder.leastEffort).toBeGreaterThanOrEqual(0.95 * 240);
+    expect(ladder.leastEffort).toBeLessThanOrEqual(240);
   });
 
   test('a stated end between reporting units moves to whole ones', async () => {
@@ -101,6 +104,9 @@ describe('three stocks, two limits of which must move (source: hand calculation)
       Array.from({ length: 3 }, () => ({ reachable: undefined, proven: true })),
     );
     expect(ladder.relaxations.length).toBeGreaterThan(0);
+    // Every way of sharing the 800 is as good as any other: the hardest case for the bound, which runs out of solves.
+    expect(ladder.leastEffort).toBeGreaterThanOrEqual(0.85 * 800);
+    expect(ladder.leastEffort).toBeLessThanOrEqual(800);
     for (const { changes, effort, proven } of ladder.relaxations) {
       expect(changes.length).toBeGreaterThan(1);
       expect(effort).toBeCloseTo(800, 6);

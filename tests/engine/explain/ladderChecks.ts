@@ -8,6 +8,7 @@ import {
   type WithinReach,
 } from '../../../src/index';
 import { unitOf } from '../../oracle/figures';
+import type { Draw } from '../../oracle/mulberry32';
 import { sliceSearch } from '../../oracle/sliceSearch';
 
 /** Drops a demand in place, the test's own way: dropped doses and rules are marked and swept afterwards. */
@@ -143,5 +144,38 @@ export async function expectRelaxations(
       expect(await possibility(withEndAt(applied, { limit, end }, back))).toBe('impossible');
     }
     expect(relaxation.effort).toBeCloseTo(effort, 6);
+  }
+}
+
+/** Ends of limits, whatever states them. */
+function ends({ limits }: Order): { limit: number; end: 'min' | 'max'; stated: number }[] {
+  return limits.flatMap(({ min, max }, limit) => [
+    ...(min === undefined ? [] : [{ limit, end: 'min' as const, stated: min }]),
+    ...(max === undefined ? [] : [{ limit, end: 'max' as const, stated: max }]),
+  ]);
+}
+
+/**
+ * Attacks the bound on effort: whatever moves of whole reporting units share out a little less than it, no recipe may
+ * come of them. For orders without weights and "below".
+ */
+export async function expectBound(order: Order, { leastEffort, relaxations }: Ladder, draw: Draw): Promise<void> {
+  if (relaxations.length === 0) return;
+  expect(leastEffort).toBeGreaterThan(0);
+  expect(leastEffort).toBeLessThanOrEqual(relaxations[0].effort);
+  for (let turn = 0; turn < 8; turn++) {
+    let left = (leastEffort ?? 0) * (1 - 1e-6);
+    let changed = order;
+    for (const { limit, end, stated } of draw.shuffled(ends(order))) {
+      const unit = unitOf(order.limits[limit]);
+      const own = left * draw.next();
+      const outward = end === 'max' ? 1 : -1;
+      const to = Math.floor(outward * (stated / unit) + own) * outward * unit;
+      if (outward * (to - stated) <= 0) continue;
+      left -= Math.abs(to - stated) / unit;
+      changed = withEndAt(changed, { limit, end }, to);
+    }
+    expect(await possibility(changed)).toBe('impossible');
+    if (turn === 0) expect(secondOpinion(changed)).not.toBe('solved');
   }
 }

@@ -26,6 +26,7 @@ async function expectHonest(order: Order, told: Ladder, truth: Ladder): Promise<
       expect(await possibility(withEndAt(order, entry, entry.reachable))).toBe('possible');
     }
   }
+  if (told.leastEffort !== undefined) expect(told.leastEffort).toBeLessThanOrEqual(truth.relaxations[0].effort);
   for (const { changes, proven } of told.relaxations) {
     const applied = changes.reduce((changed, change) => withEndAt(changed, change, change.to), order);
     expect(await possibility(applied)).toBe('possible');
