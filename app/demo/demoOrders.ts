@@ -5,8 +5,10 @@ import { emptyOrder, type WorkbookOrder } from '../../src';
  * checked in tests/engine/demoOrders.test.ts.
  */
 const NO_ADDITIVES = ['ocp-concentrate', 'hydraulic-package', 'gear-package', 'depressant'];
+/** Bought for small batches only. */
+const DRUMMED = ['pao-6-drums', 'polyol-ester-drums'];
 
-const without = (...kept: string[]) => NO_ADDITIVES.filter((id) => !kept.includes(id));
+const without = (...kept: string[]) => [...NO_ADDITIVES, ...DRUMMED].filter((id) => !kept.includes(id));
 
 function order(id: string, name: string, fields: Partial<WorkbookOrder>): WorkbookOrder {
   return { ...emptyOrder(id, name), batchTonnes: 10, ...fields };
@@ -120,6 +122,23 @@ const shortOfBrightStock: WorkbookOrder = {
   shares: [{ kind: 'share', set: { stockIds: ['bright-stock'] }, max: 0.3 }],
 };
 
+const compressorOil = order('vg-32-compressor', 'VG 32 compressor oil from drums, Hallmoor Air', {
+  note: 'Three tonnes: ester and PAO come in whole drums, opening one costs a flush, and five stocks are the most.',
+  batchTonnes: 3,
+  excludedProductIds: [...without('hydraulic-package', ...DRUMMED), 'pao-4', 'pao-6', 'polyol-ester'],
+  limits: [
+    { property: 'kv', celsius: 40, min: 28.8, max: 35.2 },
+    { property: 'vi', min: 125 },
+    { property: 'noack', max: 9 },
+    { property: 'pourPoint', max: -24 },
+  ],
+  doses: [{ stockId: 'hydraulic-package', exactly: 0.0085 }],
+  // A seal swell that the customer asks for.
+  shares: [{ kind: 'share', set: { families: ['ester'] }, min: 0.05, max: 0.15 }],
+  mostStocks: 5,
+  laboratoryOnly: ['Foam, ASTM D892', 'Demulsibility, ASTM D1401', 'Copper strip, ASTM D130'],
+});
+
 /** The demo's orders, made afresh on every call. */
 export function demoOrders(): WorkbookOrder[] {
   return structuredClone([
@@ -130,5 +149,6 @@ export function demoOrders(): WorkbookOrder[] {
     impossibleBase,
     mineralGearOil,
     shortOfBrightStock,
+    compressorOil,
   ]);
 }

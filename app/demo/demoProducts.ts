@@ -29,6 +29,8 @@ interface Described {
   lot: { name: string; tank: string; tonnes: number; date: string; drift: number };
   flags?: string[];
   note?: string;
+  /** What one drum holds [t], what opening it costs a batch [€], and the least share it is worth opening for. */
+  drums?: { tonnes: number; flush: number; leastDose: number };
 }
 
 const DATA_SHEET = '2026-01-05';
@@ -183,6 +185,26 @@ const DESCRIBED: Described[] = [
     flags: SYNTHETIC,
   },
   {
+    id: 'pao-6-drums',
+    name: 'PAO 6, drums',
+    family: 'PAO',
+    supplier: 'Tarnvarre Synthetics',
+    row: [2390, 827, 30.9, 5.88, 6.6, -57, undefined, 246, 0],
+    lot: { name: 'TV-D18', tank: 'Drums, bay 1', tonnes: 2, date: '2026-02-03', drift: 0 },
+    flags: SYNTHETIC,
+    drums: { tonnes: 0.165, flush: 60, leastDose: 0.05 },
+  },
+  {
+    id: 'polyol-ester-drums',
+    name: 'Polyol ester, drums',
+    family: 'ester',
+    supplier: 'Lindemoor Esters',
+    row: [3120, 946, 19.8, 4.38, 3.2, -51, undefined, 250, 0],
+    lot: { name: 'LM-D07', tank: 'Drums, bay 1', tonnes: 1.2, date: '2026-02-03', drift: 0 },
+    flags: SYNTHETIC,
+    drums: { tonnes: 0.19, flush: 90, leastDose: 0.03 },
+  },
+  {
     id: 'ocp-concentrate',
     name: 'Olefin copolymer concentrate',
     family: 'thickener',
@@ -220,7 +242,7 @@ const DESCRIBED: Described[] = [
 ];
 
 function productOf(described: Described): Product {
-  const { id, name, family, supplier, row, flags, note } = described;
+  const { id, name, family, supplier, row, flags, note, drums } = described;
   return {
     id,
     name,
@@ -229,6 +251,7 @@ function productOf(described: Described): Product {
     pricePerTonne: row[0],
     figures: figuresOf(family, row),
     ...(flags ? { flags } : {}),
+    ...(drums ? { lotTonnes: drums.tonnes, flushCost: drums.flush, leastDoseIfUsed: drums.leastDose } : {}),
     lots: [lotOf(described)],
     ...(note ? { note } : {}),
   };

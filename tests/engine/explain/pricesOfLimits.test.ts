@@ -87,8 +87,8 @@ describe('prices of limits', () => {
         };
         const slack = (3 * entry.noise) / looserSaves;
         expect(Math.abs((await ratioAt(steps)) - 1), message).toBeLessThanOrEqual(0.05 + slack);
-        // Searched to an eighth of the way or one step: what lies beyond twice that no longer saves at the price.
-        const beyond = Math.ceil(steps * 1.25) + 2;
+        // Searched to a quarter of the way or one step: a little beyond that it no longer saves at the price.
+        const beyond = Math.ceil(steps * 1.5) + 1;
         if (Math.abs((await ratioAt(beyond)) - 1) > 0.05 - slack) ended++;
       }
     }
