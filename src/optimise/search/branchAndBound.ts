@@ -194,12 +194,13 @@ export class BranchAndBound {
 
   /**
    * A recipe is sought in every part until there is one, and in narrow parts, where it is the answer. Elsewhere now and
-   * then: with discrete choices in every fourth part after the first twenty, else ever more rarely.
+   * then, and ever more rarely: a best-first search hardly needs them.
    */
   #isWorthTrying(node: SearchNode): boolean {
     const { presences, wholeLots } = this.model;
     if (!this.#finder.best || isNarrow(node.kv100)) return true;
-    if (presences.length > 0 || wholeLots.length > 0) return Number.isInteger(Math.log2(this.#nodes)) || this.#nodes % 16 === 0;
+    if (presences.length > 0 || wholeLots.length > 0)
+      return Number.isInteger(Math.log2(this.#nodes)) || this.#nodes % 16 === 0;
     return Number.isInteger(Math.log2(this.#nodes) / 2);
   }
 
