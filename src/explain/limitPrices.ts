@@ -2,7 +2,7 @@ import { limitDefinition } from '../optimise/rows/limitEnds';
 import type { LimitPrice } from './explanation';
 import { type LimitEnd, statedEnd, statedEnds, withoutEnd } from './limitEnd';
 import { limitStep, loosened, roomToLoosen } from './limitStep';
-import { holdsTo } from './priceHolds';
+import { holdsTo, kv100Along } from './priceHolds';
 import type { SolvesAgain } from './solvesAgain';
 
 /**
@@ -54,9 +54,10 @@ async function priceOf(again: SolvesAgain, at: LimitEnd): Promise<LimitPrice> {
   // A tightened end may be refused (it crosses the other one, or leaves what the property can be): impossible, surely.
   const proven = again.proven && without.proven && (tighter.proven || tighter.outcome.stopped === 'refused');
   if (withoutSaves === 0 || room <= 0) return { ...price, looserSaves: 0, proven };
-  const looser = await again.solve(loosened(order, at, step));
+  const looser = await again.solve(loosened(order, at, step), kv100Along(again, tighter, -1));
   const looserSaves = Math.min(withoutSaves, again.amount(again.cost - looser.cost));
-  const held = looserSaves === 0 ? undefined : await holdsTo(again, at, { step, room, looserSaves, withoutSaves });
+  const held =
+    looserSaves === 0 ? undefined : await holdsTo(again, at, { step, room, looser, looserSaves, withoutSaves });
   return {
     ...price,
     looserSaves,

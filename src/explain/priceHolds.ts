@@ -1,11 +1,12 @@
 import type { LimitEnd } from './limitEnd';
+import { kv100Of } from './limitedSolves';
 import { loosened, movedOutward } from './limitStep';
-import type { SolvesAgain } from './solvesAgain';
+import type { Answer, SolvesAgain } from './solvesAgain';
 
 /** A price holds while the saving stays within this part of the first step's, times the steps. */
 const WITHIN = 1 / 20;
 /** The end of the range is found to this part of the steps up to there, or to one step. */
-const RESOLUTION = 1 / 8;
+const RESOLUTION = 1 / 4;
 
 /** What is known of an end before its range is sought. Lengths in the property's unit, savings in cost. */
 export interface KnownSavings {
@@ -13,6 +14,8 @@ export interface KnownSavings {
   /** How far the end can be loosened at all. */
   room: number;
   looserSaves: number;
+  /** The order with the end one step looser. */
+  looser: Answer;
   withoutSaves: number;
 }
 
@@ -23,11 +26,11 @@ export interface KnownSavings {
 export async function holdsTo(
   again: SolvesAgain,
   end: LimitEnd,
-  { step, room, looserSaves, withoutSaves }: KnownSavings,
+  { step, room, looser, looserSaves, withoutSaves }: KnownSavings,
 ): Promise<{ to: number; proven: boolean }> {
   let proven = true;
   const keeps = async (steps: number): Promise<boolean> => {
-    const answer = await again.solve(loosened(again.order, end, steps * step));
+    const answer = await again.solve(loosened(again.order, end, steps * step), kv100Along(again, looser, steps));
     proven &&= answer.proven;
     return Math.abs((again.cost - answer.cost) / (looserSaves * steps) - 1) <= WITHIN;
   };
@@ -46,4 +49,12 @@ export async function holdsTo(
     else bad = steps;
   }
   return { to: movedOutward(again.order, end, good * step), proven };
+}
+
+/** KV100 [mm²/s] to expect so many steps along: the recipe moves about evenly with the end. */
+export function kv100Along({ kv100 }: SolvesAgain, { outcome }: Answer, steps: number): number | undefined {
+  const afterOne = kv100Of(outcome);
+  if (kv100 === undefined || afterOne === undefined) return undefined;
+  const expected = kv100 + steps * (afterOne - kv100);
+  return expected > 0 ? expected : undefined;
 }

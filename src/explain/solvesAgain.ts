@@ -42,7 +42,8 @@ export class SolvesAgain {
   readonly line: CostLine;
   readonly #solves: LimitedSolves;
   readonly #pause: () => Promise<void>;
-  readonly #near: number | undefined;
+  /** KV100 of the recipe to be explained [mm²/s], where it is known: where to look first in an order much like it. */
+  readonly kv100: number | undefined;
   readonly #prices: readonly number[];
 
   /** Throws RangeError for an outcome without a recipe. */
@@ -58,9 +59,11 @@ export class SolvesAgain {
     this.cost = objective;
     this.proven = outcome.proof.kind === 'least cost';
     this.line = costLine(order, recipe, objective);
-    this.#solves = new LimitedSolves(options, DEFAULT_LIMIT_MS);
+    // A recipe named near the order as stated says nothing of a changed one.
+    const { near: _, ...others } = options;
+    this.#solves = new LimitedSolves(others, DEFAULT_LIMIT_MS);
     this.#pause = resolveOptions(options).pause;
-    this.#near = kv100Of(outcome);
+    this.kv100 = kv100Of(outcome);
     this.#prices = order.stocks.map((stock) => stock.pricePerTonne);
   }
 
@@ -68,12 +71,16 @@ export class SolvesAgain {
     return this.#solves.count;
   }
 
-  /** Solves a changed order. Throws StoppedEarly where time is up, before or during. */
-  async solve(order: Order, near?: BlendOutcome): Promise<Answer> {
+  /**
+   * Solves a changed order. Throws StoppedEarly where time is up, before or during.
+   *
+   * @param near KV100 [mm²/s] where the recipe is expected; a wrong one costs more time than none.
+   */
+  async solve(order: Order, near?: number): Promise<Answer> {
     await this.#pause();
     const before = this.#solves.stopped;
     if (before) throw new StoppedEarly(before);
-    const outcome = await this.#solves.solve(order, (near && kv100Of(near)) ?? this.#near);
+    const outcome = await this.#solves.solve(order, near);
     const { stopped, proof, objective } = outcome;
     if (stopped === 'time limit' || stopped === 'cancelled' || stopped === 'engine failed') {
       throw new StoppedEarly(stopped);
@@ -89,14 +96,14 @@ export class SolvesAgain {
     return answer;
   }
 
-  /** Solves the order with other prices of some stocks. */
+  /** Solves the order with other prices of some stocks, where the explained recipe may well stay. */
   async solveAtPrices(prices: ReadonlyMap<string, number>): Promise<Answer> {
     const stocks = this.order.stocks.map((stock) => {
       const pricePerTonne = prices.get(stock.id);
       return pricePerTonne === undefined ? stock : { ...stock, pricePerTonne };
     });
     const changed = { ...this.order, stocks };
-    const answer = await this.solve(changed);
+    const answer = await this.solve(changed, this.kv100);
     const { recipe } = answer.outcome;
     if (recipe) {
       const line = costLine(changed, recipe, answer.cost);

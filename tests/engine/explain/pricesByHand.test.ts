@@ -141,3 +141,17 @@ test('cost per m³: savings per m³, prices of stocks per tonne', async () => {
   // The oil between weighs a tonne per m³: it comes in where its tonne costs what a m³ of the recipe does.
   expect(explanation.entries[0].entersBelow).toBeCloseTo(perCubicMetre, 2);
 });
+
+test('a stock that is paid for being used up has an entry price and a range like any other', async () => {
+  // A third of the slop: (-50 + 2 · 1200) / 3 = 783.33; it is worth using until it is as dear as the clean oil.
+  const order: Order = {
+    stocks: [oil('slop', 1000, -50), CLEAN, BETWEEN],
+    limits: [{ property: 'sulphur', max: 400 }],
+  };
+  const { outcome, explanation } = await explain(order);
+  expect(outcome.costPerTonne).toBeCloseTo(2350 / 3, 6);
+  expect(explanation.entries[0].entersBelow).toBeCloseTo(2350 / 3, 4);
+  const slop = explanation.used.find((stock) => stock.stockId === 'slop');
+  expect(slop?.standsTo).toBeCloseTo(1200, 4);
+  expect(slop?.standsFrom).toBeUndefined();
+});
