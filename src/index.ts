@@ -48,7 +48,7 @@ export type {
   SolveProgress,
   Stopped,
 } from './optimise/outcome';
-export { flushCostPerTonne } from './optimise/outcomeOf';
+export { costOfShare } from './optimise/outcomeOf';
 export { solveBlend } from './optimise/solveBlend';
 export type { SolveOptions } from './optimise/solveOptions';
 export {

@@ -1,4 +1,4 @@
-import { type BlendOutcome, type Family, flushCostPerTonne, type Order, type Recipe } from '../../src';
+import { type BlendOutcome, costOfShare, type Family, type Order, type Recipe } from '../../src';
 
 /** One stock of the recipe, with everything the table says of it. */
 export interface RecipeRow {
@@ -10,7 +10,7 @@ export interface RecipeRow {
   kilograms: number;
   /** At 15 °C. */
   litres?: number;
-  /** Share of the cost of the mix, what using it costs included [0..1]. */
+  /** Share of the cost of the mix, price steps and what using it costs included [0..1]. */
   costShare?: number;
   /** What is left on hand after the batch [t]. */
   leftTonnes?: number;
@@ -66,7 +66,7 @@ export function recipeRows(
         ...(volumeFraction !== undefined && { volumeFraction }),
         ...(volumeFraction !== undefined && totalLitres !== undefined && { litres: volumeFraction * totalLitres }),
         ...(hasShares && {
-          costShare: (massFraction * stock.pricePerTonne + flushCostPerTonne(stock, order)) / costPerTonne,
+          costShare: costOfShare(stock, massFraction, order) / costPerTonne,
         }),
         ...(batch.given && left !== undefined && { leftTonnes: left - kilograms / 1000 }),
       },

@@ -132,10 +132,15 @@ function uncounted(order: Order, recipe: Recipe): Caution[] {
     cautions.push({ kind: 'model', message: `${names(inDrums)}: whole drums are counted for a fixed batch only.` });
   }
   const flushed = order.stocks.filter(
-    (stock) => (stock.flushCost ?? 0) > 0 && recipe.some((line) => line.stockId === stock.id),
+    (stock) =>
+      ((stock.flushCost ?? 0) > 0 || (stock.priceSteps?.length ?? 0) > 0) &&
+      recipe.some((line) => line.stockId === stock.id),
   );
   if (flushed.length > 0 && typeof order.batchTonnes !== 'number') {
-    cautions.push({ kind: 'model', message: `${names(flushed)}: flush costs are counted for a fixed batch only.` });
+    cautions.push({
+      kind: 'model',
+      message: `${names(flushed)}: flush costs and price steps are counted for a fixed batch only.`,
+    });
   }
   const bent = order.limits.filter((limit) => limit.aim !== undefined && !averagesByMass(limit, order));
   for (const limit of bent) {

@@ -56,6 +56,8 @@ function checkStockShape(shape: Shape, stock: Data, place: number): void {
   if (flags !== undefined && !(Array.isArray(flags) && flags.every((flag) => typeof flag === 'string'))) {
     shape.fail(at('flags'), '"flags" must be a list of texts.');
   }
+  shape.list(at('priceSteps'), stock.priceSteps, false);
+  shape.word(at('priceStepsFor'), stock.priceStepsFor, ['all tonnes', 'the excess']);
   for (const figure of shape.list(at('figures'), stock.figures, true)) {
     shape.text(at('figures'), figure.property);
     shape.word(at('figures'), figure.origin, FIGURE_ORIGINS, true);

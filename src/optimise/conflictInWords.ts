@@ -22,7 +22,8 @@ function rowInWords({ source }: ModelRow, order: Order, model: SearchModel): str
     return rule && ruleInWords(rule, order.stocks);
   }
   if (source.kind === 'most stocks') return `at most ${order.mostStocks} stocks, compulsory ones included`;
-  if (source.kind === 'presence' && source.end === 'least') {
+  // A stretch of a price has a presence too; its rows tell the user nothing.
+  if (source.kind === 'presence' && source.end === 'least' && source.stock < model.stocks.length) {
     const least = model.presences.find(({ stock }) => stock === source.stock)?.least ?? 0;
     return `${model.stocks[source.stock].name} absent or at least ${percent(least)} of the mix`;
   }

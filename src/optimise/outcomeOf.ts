@@ -9,6 +9,7 @@ import type { Order } from './order';
 import type { BlendOutcome, LeftOut, OrderProblem, Proof } from './outcome';
 import { recipeOf } from './recipeCheck';
 import { type Candidates, neededProperties, predictionOptions } from './rows/candidates';
+import { costOfTonnes } from './rows/priceSegments';
 import type { SearchModel } from './rows/searchModel';
 import type { SearchResult } from './search/branchAndBound';
 import { gapReference } from './search/gapReference';
@@ -120,9 +121,13 @@ export function cubicMetresPerTonne(stock: Stock): number | undefined {
   return density.state === 'known' ? 1000 / density.value : undefined;
 }
 
-/** What using a stock costs per tonne of mix, beside its price: nothing where the batch is not fixed. */
-export function flushCostPerTonne({ flushCost }: Stock, { batchTonnes }: Order): number {
-  return flushCost && typeof batchTonnes === 'number' ? flushCost / batchTonnes : 0;
+/**
+ * What a share of a stock costs per tonne of mix: its price, and in a batch of fixed size its price steps and what
+ * using it costs at all.
+ */
+export function costOfShare(stock: Stock, massFraction: number, { batchTonnes }: Order): number {
+  if (typeof batchTonnes !== 'number') return stock.pricePerTonne * massFraction;
+  return costOfTonnes(stock, massFraction * batchTonnes) / batchTonnes;
 }
 
 /** Cost per tonne from prices, shares and flush costs alone, and per m³ where every density is known. */
@@ -133,7 +138,7 @@ function costsOf(order: Order, recipe: Recipe): Pick<BlendOutcome, 'costPerTonne
   for (const { stockId, massFraction } of recipe) {
     const stock = stocks.find((candidate) => candidate.id === stockId);
     if (!stock) continue;
-    costPerTonne += stock.pricePerTonne * massFraction + (massFraction > 0 ? flushCostPerTonne(stock, order) : 0);
+    costPerTonne += costOfShare(stock, massFraction, order);
     const specific = cubicMetresPerTonne(stock);
     volume = volume === undefined || specific === undefined ? undefined : volume + specific * massFraction;
   }

@@ -5,6 +5,7 @@ import { checkShape } from './checkShape';
 import type { Dose, Limit, Order, ShareRule } from './order';
 import type { OrderProblem } from './outcome';
 import { limitDefinition, limitEnds } from './rows/limitEnds';
+import { priceSegments } from './rows/priceSegments';
 import { isInSet } from './stockSet';
 
 type Path = (string | number)[];
@@ -37,6 +38,25 @@ class Problems {
   }
 }
 
+function checkPriceSteps(stock: Stock, problems: Problems): void {
+  const { id, name, priceSteps = [] } = stock;
+  const path: Path = ['stocks', id, 'priceSteps'];
+  const seen = new Set<number>();
+  for (const { fromTonnes, pricePerTonne } of priceSteps) {
+    problems.number(path, fromTonnes, `Quantity of a price step of ${name}`, 1e-6);
+    problems.number(path, pricePerTonne, `Price of a step of ${name}`);
+    if (typeof fromTonnes !== 'number' || typeof pricePerTonne !== 'number') {
+      problems.add(path, `${name}: a price step needs a quantity and a price. Enter both, or remove the step.`);
+    }
+    if (seen.has(fromTonnes)) problems.add(path, `${name}: two price steps start at ${fromTonnes} t. Remove one.`);
+    seen.add(fromTonnes);
+  }
+  const prices = priceSegments(stock).map(({ pricePerTonne }) => pricePerTonne);
+  if (stock.priceStepsFor !== 'the excess' && prices.some((price, place) => price > prices[place - 1])) {
+    problems.add(path, `${name}: a price for all tonnes cannot rise with the quantity. Let it count for the excess.`);
+  }
+}
+
 function checkStock(stock: Stock, problems: Problems): void {
   const at = (key: string): Path => ['stocks', stock.id, key];
   if (typeof stock.pricePerTonne !== 'number' || !Number.isFinite(stock.pricePerTonne)) {
@@ -48,6 +68,7 @@ function checkStock(stock: Stock, problems: Problems): void {
   problems.number(at('leastDoseIfUsed'), stock.leastDoseIfUsed, `Least dose of ${stock.name}`, 0, 1);
   problems.number(at('greatestDose'), stock.greatestDose, `Greatest dose of ${stock.name}`, 0, 1);
   problems.number(at('availableTonnes'), stock.availableTonnes, `Quantity on hand of ${stock.name}`, 0);
+  checkPriceSteps(stock, problems);
   problems.number(at('flushCost'), stock.flushCost, `Flush cost of ${stock.name}`, 0);
   problems.number(at('lotTonnes'), stock.lotTonnes, `Drum size of ${stock.name}`, 1e-6);
   problems.number(at('blendWeight'), stock.blendWeight, `Blending weight of ${stock.name}`, 1e-3, 1e3);

@@ -1,6 +1,12 @@
 import type { Family } from './family';
 import type { Figure } from './figure';
 
+/** A price that holds from a quantity on. */
+export interface PriceStep {
+  fromTonnes: number;
+  pricePerTonne: number;
+}
+
 /** A stock as the engine sees it: one product or one lot. Plain JSON data. */
 export interface Stock {
   id: string;
@@ -19,6 +25,10 @@ export interface Stock {
   availableTonnes?: number;
   /** Size of one whole drum or tote [t]: with a fixed batch the stock is charged in whole ones. */
   lotTonnes?: number;
+  /** Prices that hold from so many tonnes in one batch on, beside `pricePerTonne` below them. Need a fixed batch. */
+  priceSteps?: PriceStep[];
+  /** Whether a step's price holds for all tonnes, or for those beyond the step. Default 'all tonnes'. */
+  priceStepsFor?: 'all tonnes' | 'the excess';
   /** What using the stock costs a batch whatever its share: flushing a line, opening a tank [currency]. Needs a fixed batch. */
   flushCost?: number;
   /** Flags such as "food contact" or "no zinc" that an order may ask every stock to carry. */

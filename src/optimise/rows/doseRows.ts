@@ -3,6 +3,7 @@ import type { Dose, Order } from '../order';
 import { greatestDoseAsTheRest, isCompulsory } from './candidates';
 import { doseShares } from './doseShares';
 import { LEAST_SHARE_THAT_COUNTS, type ModelBuilder } from './modelBuilder';
+import { priceSegments } from './priceSegments';
 
 /** Smallest batch of the order [t]: the one for which stock on hand lasts longest. */
 function smallestBatch(order: Order): number | undefined {
@@ -22,6 +23,9 @@ export function addStockBounds(builder: ModelBuilder, order: Order, takingTheRes
     if (least > 0) {
       if (isCompulsory(order, stock.id)) builder.raiseLower(place, least);
       else builder.presenceOf(place);
+    }
+    if (stock.priceSteps?.length && typeof order.batchTonnes === 'number') {
+      builder.addPriceSegments(place, priceSegments(stock), order.batchTonnes);
     }
     if (stock.flushCost && typeof order.batchTonnes === 'number') {
       builder.payForPresence(place, stock.flushCost / order.batchTonnes);

@@ -1,4 +1,5 @@
 import type { Stock } from '../../stock/stock';
+import type { PriceSegment } from './priceSegments';
 import type { ModelRow, Presence, RowSource, SearchModel, WholeLots } from './searchModel';
 
 /** From this share on a stock counts as used where a rule asks for "at least so many" and it has no least dose. */
@@ -79,6 +80,25 @@ export class ModelBuilder {
   /** Makes the presence of a stock cost something per tonne of mix. */
   payForPresence(stock: number, cost: number): void {
     this.#cost[this.presenceOf(stock).column] += cost;
+  }
+
+  /**
+   * Spreads a stock's share over the stretches of its price: the stock's own column then costs nothing, each stretch is
+   * absent or within its tonnes, and one at most is used.
+   */
+  addPriceSegments(stock: number, segments: readonly PriceSegment[], batchTonnes: number): void {
+    this.#cost[stock] = 0;
+    const used: [number, number][] = [];
+    const shares: [number, number][] = [[stock, 1]];
+    for (const { from, to, pricePerTonne, fixed } of segments) {
+      const share = this.addColumn(pricePerTonne, 0, Math.min(1, to / batchTonnes));
+      const presence = { stock: share, column: this.addColumn(fixed / batchTonnes, 0, 1), least: from / batchTonnes };
+      this.presences.push(presence);
+      used.push([presence.column, 1]);
+      shares.push([share, -1]);
+    }
+    this.addRow({ kind: 'price step' }, 0, 0, shares);
+    this.addRow({ kind: 'price step' }, -Infinity, 1, used);
   }
 
   /** Ties every presence to its share: share ≤ upper · presence, share ≥ least · presence. */

@@ -9,6 +9,8 @@ export type RowSource =
   | { kind: 'dose'; dose: number }
   | { kind: 'share'; share: number }
   | { kind: 'most stocks' }
+  /** A stock's share is the sum over the stretches of its price, of which one at most is used. */
+  | { kind: 'price step' }
   /** share ≤ greatest · presence; share ≥ least · presence. */
   | { kind: 'presence'; stock: number; end: 'least' | 'most' };
 
@@ -17,7 +19,8 @@ export interface ModelRow extends LinearRow {
   source: RowSource;
 }
 
-/** A stock whose presence is a yes-or-no: column of the binary (which may cost something), least share when present. */
+/** A share (of a stock, or of a stretch of its price) that is absent or at least `least`: the column of the share, and that
+ * of the binary, which may cost something. */
 export interface Presence {
   stock: number;
   column: number;

@@ -1,0 +1,34 @@
+import type { Stock } from '../../stock/stock';
+
+/**
+ * A stretch of tonnes over which the cost of a stock in a batch is a straight line: fixed + price · tonnes. With prices
+ * for all tonnes the line starts at zero; with prices for the excess it carries what the tonnes before cost more.
+ */
+export interface PriceSegment {
+  /** Tonnes [t] from which on, and up to which, the line holds. */
+  from: number;
+  to: number;
+  pricePerTonne: number;
+  fixed: number;
+}
+
+/** The stretches of a stock's cost, in order. One alone where it has no price steps. */
+export function priceSegments({ pricePerTonne, priceSteps = [], priceStepsFor }: Stock): PriceSegment[] {
+  const steps = [{ fromTonnes: 0, pricePerTonne }, ...[...priceSteps].sort((a, b) => a.fromTonnes - b.fromTonnes)];
+  let before = 0;
+  return steps.map((step, place) => {
+    const to = steps[place + 1]?.fromTonnes ?? Infinity;
+    const fixed = priceStepsFor === 'the excess' ? before - step.pricePerTonne * step.fromTonnes : 0;
+    before = fixed + step.pricePerTonne * to;
+    return { from: step.fromTonnes, to, pricePerTonne: step.pricePerTonne, fixed };
+  });
+}
+
+/** What so many tonnes of a stock cost in a batch, flush included. At a step the price from there on holds. */
+export function costOfTonnes(stock: Stock, tonnes: number): number {
+  if (!(tonnes > 0)) return 0;
+  // A whole step that comes out a rounding below its quantity is that quantity.
+  const reached = tonnes * (1 + 1e-9);
+  const segment = priceSegments(stock).findLast(({ from }) => reached >= from);
+  return (segment?.fixed ?? 0) + (segment?.pricePerTonne ?? stock.pricePerTonne) * tonnes + (stock.flushCost ?? 0);
+}
