@@ -51,7 +51,7 @@ export const Recipe = memo(function Recipe({
         batch={batch}
         text={() => recipeText({ title, proof, remarks, rows, totals, batch })}
       />
-      <Rounded orderId={orderId} title={title} order={order} />
+      <Rounded orderId={orderId} title={title} batchTonnes={order.batchTonnes} />
       <Section title="Viscosity and temperature" level={3} className={styles.part}>
         <LazyViscosityChart order={order} outcome={outcome} />
       </Section>

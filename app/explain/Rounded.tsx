@@ -9,7 +9,7 @@ import { setRounding } from '../state/explaining';
 import { type Rounding, useExplain, useExplained } from '../state/explainStore';
 import { roundingsOf } from '../state/rounding';
 import { useWorkbook } from '../state/workbookStore';
-import { added, costPer } from './costWords';
+import { costPer, difference } from './costWords';
 import styles from './Explain.module.css';
 import { namesOf } from './stockNames';
 import { Told } from './Told';
@@ -18,16 +18,16 @@ import { Told } from './Told';
 export const Rounded = memo(function Rounded({
   orderId,
   title,
-  order,
+  batchTonnes,
 }: {
   orderId: string;
   title: string;
-  order: Order;
+  batchTonnes: Order['batchTonnes'];
 }) {
   const rounding = useExplain((state) => state.rounding);
   const roundedTo = useExplain(({ explained }) => explained[orderId]?.roundedTo);
   const { part, stale, due } = useExplained(orderId, 'rounded');
-  const choices = roundingsOf(order);
+  const choices = roundingsOf({ batchTonnes });
   const chosen = choices.includes(rounding) ? rounding : '';
   return (
     <>
@@ -62,6 +62,15 @@ function decimals(rounding: Rounding): number {
   return rounding.split(' ')[0]?.split('.')[1]?.length ?? 0;
 }
 
+const MOST_DIGITS = 6;
+
+/** A weighed amount with every decimal it has: what is off its step must not look as if it were on it. */
+export function everyDigit(value: number, least: number): string {
+  let digits = least;
+  while (digits < MOST_DIGITS && Math.abs(Number(value.toFixed(digits)) - value) > 1e-7) digits++;
+  return formatNumber(value, digits);
+}
+
 /** The mix that the rounded shares make, as an outcome whose rows can be shown and copied. */
 function outcomeOfRounded({ recipe, costPerTonne }: RecipeInSteps, order: Order, outcome: BlendOutcome): BlendOutcome {
   const { viscosityRule, depressant, ownProperties } = order;
@@ -88,8 +97,8 @@ function RoundedRecipe({
   const { rows, totals, batch } = recipeRows(order, outcomeOfRounded(rounded, order, outcome));
   const proof = rounded.proven ? 'proven best' : 'not proven best';
   const inKilograms = rounding.endsWith('kg');
-  const percentDigits = inKilograms ? 3 : decimals(rounding);
-  const kilogramDigits = inKilograms ? decimals(rounding) : 1;
+  const percentDigits = inKilograms ? 2 : decimals(rounding);
+  const kilogramDigits = inKilograms ? decimals(rounding) : 0;
   const offStep = rounded.offStep.length > 0 && `Not in steps of ${to}: ${namesOf(order, rounded.offStep)}.`;
   const text = () =>
     recipeText({
@@ -115,14 +124,14 @@ function RoundedRecipe({
           {rows.map(({ stockId, name, massFraction, kilograms }) => (
             <tr key={stockId}>
               <th scope="row">{name}</th>
-              <td>{formatNumber(massFraction * 100, percentDigits)}</td>
-              <td>{formatNumber(kilograms, kilogramDigits)}</td>
+              <td>{everyDigit(massFraction * 100, percentDigits)}</td>
+              <td>{everyDigit(kilograms, kilogramDigits)}</td>
             </tr>
           ))}
         </tbody>
       </table>
       <p>
-        <b>{costPer(rounded.costPerTonne, currency)}</b>; rounding costs {added(rounded.roundingCosts, currency)};{' '}
+        <b>{costPer(rounded.costPerTonne, currency)}</b>; rounding costs {difference(rounded.roundingCosts, currency)};{' '}
         {proof} in these steps.
       </p>
       {offStep && <p className={styles.soft}>{offStep}</p>}

@@ -31,9 +31,9 @@ export function endInWords(
   return `${end === 'min' ? 'least' : 'most'} ${inUnit(stated, definition)}`;
 }
 
-/** "0.10 mm²/s looser saves €1.20/t": what stands beside the rail. */
+/** "0.10 mm²/s looser saves €1.20/t", "1 unit looser saves €34.84/t": what stands beside the rail. */
 export function priceInShort(price: LimitPrice, definition: PropertyDefinition, { currency, unit }: Money): string {
-  const step = inUnit(price.step, definition);
+  const step = unitOf(definition) ? inUnit(price.step, definition) : `${inUnit(price.step, definition)} unit`;
   const saves = difference(price.looserSaves, currency, unit);
   return `${step} looser saves ${saves}${price.proven ? '' : ' (not proven)'}`;
 }

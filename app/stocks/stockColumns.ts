@@ -10,6 +10,7 @@ import {
 import type { Column } from './column';
 import { figureColumn } from './figureColumn';
 import { FAMILY_COLUMN, FLAGS_COLUMN, NAME_COLUMN, SUPPLIER_COLUMN } from './plainColumns';
+import { PRICE_STEPS_COLUMN } from './priceStepsColumn';
 import { figureKey } from './productFigures';
 import { VI_COLUMN } from './viColumn';
 
@@ -95,6 +96,7 @@ export function stockColumns(
     GREATEST_DOSE_COLUMN,
     DRUM_COLUMN,
     flushColumn(currency),
+    PRICE_STEPS_COLUMN,
     FLAGS_COLUMN,
   ];
 }

@@ -1,5 +1,6 @@
 import type { EngineKind } from '../../../app/worker/createWorker';
 import type { FromWorker, ToWorker, WorkerLike } from '../../../app/worker/protocol';
+import type { Told } from '../../../app/worker/questions';
 import type { BlendOutcome, Order } from '../../../src';
 
 /** A worker that says only what the test makes it say. */
@@ -33,12 +34,28 @@ export class FakeWorker implements WorkerLike {
     return this.heard.filter((message) => message.kind === 'solve');
   }
 
+  /** The questions it was asked. */
+  get questions(): Extract<ToWorker, { kind: 'ask' }>[] {
+    return this.heard.filter((message) => message.kind === 'ask');
+  }
+
+  /** Answers the latest question. */
+  tell(told: Told): void {
+    this.say({ kind: 'told', id: this.questions.at(-1)?.id ?? Number.NaN, told });
+  }
+
   /** Answers the latest order. */
   answer(costPerTonne: number, stopped: BlendOutcome['stopped'] = 'finished'): void {
     const id = this.asked.at(-1)?.id ?? Number.NaN;
     this.say({ kind: 'outcome', id, outcome: outcomeOf(costPerTonne, stopped) });
   }
 }
+
+/** What is told of a recipe: nothing, after so many solves. */
+export const explanationOf = (solves: number): Told => ({
+  kind: 'recipe',
+  value: { limits: [], entries: [], used: [], stopped: 'finished', solves },
+});
 
 export function outcomeOf(costPerTonne: number, stopped: BlendOutcome['stopped'] = 'finished'): BlendOutcome {
   return {

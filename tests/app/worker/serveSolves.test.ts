@@ -72,6 +72,33 @@ describe('the worker side', () => {
     expect(second.kind === 'outcome' && second.outcome.stopped).toBe('finished');
   });
 
+  test('answers a question about an answered order', async () => {
+    const { take, until, outcomeOf } = serve();
+    take(request(1));
+    const answer = await outcomeOf(1);
+    const outcome = answer.kind === 'outcome' ? answer.outcome : undefined;
+    if (!outcome) throw new Error('There is no outcome.');
+    take({ kind: 'ask', id: 2, question: { kind: 'recipe', order: demoOrder(), outcome }, timeLimitMs: 20_000 });
+    const told = await until((message) => message.kind === 'told' && message.id === 2);
+    expect(told).toMatchObject({ told: { kind: 'recipe', value: { stopped: 'finished' } } });
+    expect(told.kind === 'told' && told.told.kind === 'recipe' && told.told.value.limits.length).toBeGreaterThan(0);
+  });
+
+  test('a newer order ends a question that runs', async () => {
+    const { take, until, outcomeOf } = serve();
+    const order = demoOrder();
+    take(request(1));
+    const answer = await outcomeOf(1);
+    const outcome = answer.kind === 'outcome' ? answer.outcome : undefined;
+    if (!outcome) throw new Error('There is no outcome.');
+    take({ kind: 'ask', id: 2, question: { kind: 'alternatives', order, outcome }, timeLimitMs: 20_000 });
+    take(request(3));
+    const told = await until((message) => message.kind === 'told');
+    const next = await outcomeOf(3);
+    expect(told).toMatchObject({ id: 2, told: { value: { stopped: 'cancelled' } } });
+    expect(next.kind === 'outcome' && next.outcome.stopped).toBe('finished');
+  });
+
   test('says why there is no engine', async () => {
     const { until } = serve(() => Promise.reject(new Error('wasm refused')));
     const message = await until(({ kind }) => kind === 'no engine');

@@ -1,6 +1,6 @@
 import { afterEach, beforeEach, describe, expect, test, vi } from 'vitest';
 import { createSolverClient, type SolverClient } from '../../../app/worker/solverClient';
-import { FakeWorkers, orderOf } from './fakeWorker';
+import { explanationOf, FakeWorkers, orderOf, outcomeOf } from './fakeWorker';
 
 let workers: FakeWorkers;
 let client: SolverClient;
@@ -268,5 +268,89 @@ describe('the second engine', () => {
     const said = solve(1);
     expect(said).toHaveLength(1);
     expect(said[0]).toMatch(/^failed: No solver can be started here \(workers refused\)/);
+  });
+});
+
+describe('questions', () => {
+  function ask(batchTonnes: number): string[] {
+    const said: string[] = [];
+    const order = orderOf(batchTonnes);
+    client.ask(
+      { kind: 'recipe', order, outcome: outcomeOf(900) },
+      {
+        onTold: ({ value }) => void said.push(`told after ${value && 'solves' in value ? value.solves : '?'}`),
+        onFailed: (message) => void said.push(`failed: ${message}`),
+        onDropped: () => void said.push('dropped'),
+      },
+    );
+    return said;
+  }
+  const askedAbout = () => workers.last.questions.map(({ question }) => question.order.batchTonnes);
+
+  test('are asked one after the other, once nothing is to be solved', () => {
+    solve(1);
+    const said = [ask(1), ask(2)];
+    workers.last.say({ kind: 'ready' });
+    expect(askedAbout()).toEqual([]);
+    workers.last.answer(900);
+    expect(askedAbout()).toEqual([1]);
+    workers.last.tell(explanationOf(7));
+    expect(askedAbout()).toEqual([1, 2]);
+    workers.last.tell(explanationOf(8));
+    expect(said).toEqual([['told after 7'], ['told after 8']]);
+  });
+
+  test('give way to an order, which is sent at once and under a newer number', () => {
+    const said = [ask(1), ask(2)];
+    workers.last.say({ kind: 'ready' });
+    const solved = solve(3);
+    expect(said).toEqual([['dropped'], ['dropped']]);
+    expect(workers.last.asked.at(-1)?.id).toBeGreaterThan(workers.last.questions.at(-1)?.id ?? Infinity);
+    // The question ends with what it has, which nobody waits for any more.
+    workers.last.tell(explanationOf(1));
+    workers.last.answer(950);
+    expect(said).toEqual([['dropped'], ['dropped']]);
+    expect(solved).toEqual(['finished 950']);
+  });
+
+  test('that does not end for an order costs its worker, and the order is sent anew', () => {
+    ask(1);
+    workers.last.say({ kind: 'ready' });
+    const solved = solve(3);
+    vi.advanceTimersByTime(1500);
+    expect(workers.made).toHaveLength(2);
+    workers.last.say({ kind: 'ready' });
+    workers.last.answer(950);
+    expect(solved[0]).toMatch(/^finished 950 .*started again/);
+  });
+
+  test('that gets no answer is told as missing, and the next one goes to a new worker', () => {
+    const said = [ask(1), ask(2)];
+    workers.last.say({ kind: 'ready' });
+    vi.advanceTimersByTime(15_000);
+    expect(said[0]?.[0]).toMatch(/did not answer in time.*the answer itself stands/);
+    expect(workers.made).toHaveLength(2);
+    workers.last.say({ kind: 'ready' });
+    workers.last.tell(explanationOf(9));
+    expect(said[1]).toEqual(['told after 9']);
+  });
+
+  test('that breaks off says so, and does not keep an order waiting', () => {
+    const said = ask(1);
+    workers.last.say({ kind: 'ready' });
+    workers.last.say({ kind: 'error', id: workers.last.questions[0]?.id ?? 0, message: 'out of memory' });
+    expect(said).toEqual(['failed: out of memory']);
+    const solved = solve(2);
+    workers.last.answer(900);
+    expect(solved).toEqual(['finished 900']);
+  });
+
+  test('are asked of the second engine where the first cannot be had', () => {
+    const said = ask(1);
+    workers.last.say({ kind: 'no engine', message: 'wasm refused' });
+    expect(workers.last.kind).toBe('javascript');
+    workers.last.say({ kind: 'ready' });
+    workers.last.tell(explanationOf(3));
+    expect(said).toEqual(['told after 3']);
   });
 });
