@@ -17,8 +17,11 @@ export interface NearestRecipe extends AimedRecipe {
 const SHARE = '\u0001share ';
 const COST = '\u0001cost';
 const PER_CENT = 100;
-/** Changes that add up to less than this are none [%]: no relative gap is small against nothing. */
-const NO_CHANGE = 1e-4;
+/**
+ * What every stock costs while changes are counted: the same for every mix, so that a gap relative to the whole is an
+ * absolute one of the changes, 1e-4 %. No gap is small against nothing.
+ */
+const PRICE_OF_ANY = 100;
 
 /** Cost as a property that averages: per tonne by mass, or per m³ by volume. */
 function costFigure(stock: Stock, order: Order): Figure[] {
@@ -31,7 +34,7 @@ function costFigure(stock: Stock, order: Order): Figure[] {
 }
 
 /**
- * The order with nothing to pay but changes: the share of every stock is a property with the share in use as its aim,
+ * The order with changes in place of prices: the share of every stock is a property with the share in use as its aim,
  * one a per cent; the cost is a property with the ceiling as its limit. Both average exactly, so the search is exact.
  */
 function asChanges(order: Order, inUse: Recipe, ceiling: number): Order {
@@ -55,7 +58,7 @@ function asChanges(order: Order, inUse: Recipe, ceiling: number): Order {
   return {
     ...order,
     costBasis: 'tonne',
-    stocks: order.stocks.map((stock) => ({ ...stock, pricePerTonne: 0, figures: figures(stock) })),
+    stocks: order.stocks.map((stock) => ({ ...stock, pricePerTonne: PRICE_OF_ANY, figures: figures(stock) })),
     limits: [...order.limits.map(({ aim: _, ...limit }) => limit), ...aims, { property: COST, max: ceiling }],
     ownProperties: [
       ...(order.ownProperties ?? []),
@@ -88,12 +91,7 @@ export async function nearestRecipe(
   if (costPerTonne === undefined || least === undefined || hasOtherCosts(order)) return undefined;
   const solves = new LimitedSolves(solveOptions, AIM_TIME_MS);
   const ceiling = least + (within + 2 * solves.relativeGap) * Math.abs(least);
-  const {
-    recipe,
-    proof,
-    objective = Number.NaN,
-    stopped,
-  } = await solves.solve(asChanges(order, inUse, ceiling), kv100Of(outcome));
+  const { recipe, proof, stopped } = await solves.solve(asChanges(order, inUse, ceiling), kv100Of(outcome));
   if (!recipe) return undefined;
   const price = new Map(order.stocks.map((stock) => [stock.id, stock.pricePerTonne]));
   const cost = recipe.reduce((sum, line) => sum + line.massFraction * (price.get(line.stockId) ?? Number.NaN), 0);
@@ -102,7 +100,7 @@ export async function nearestRecipe(
     costPerTonne: cost,
     dearerBy: cost - costPerTonne,
     totalChange: totalChange(recipe, inUse),
-    proven: proof.kind === 'least cost' || objective - Math.max(0, proof.lowerBound ?? 0) <= NO_CHANGE,
+    proven: proof.kind === 'least cost',
     stopped: stopped === 'time limit' || stopped === 'cancelled' ? stopped : 'finished',
     solves: solves.count,
   };
