@@ -8,10 +8,11 @@ const NAMES: Readonly<Record<string, string>> = {
   greatestDose: 'greatest dose',
   lotTonnes: 'drum size',
   flushCost: 'flush cost',
+  priceSteps: 'price steps',
 };
 
 /** Amounts that bound how much of a product may be used: unknown, they are not "no bound". */
-const BOUNDS = ['greatestDose', 'leastDoseIfUsed', 'availableTonnes', 'lotTonnes', 'flushCost'] as const;
+const BOUNDS = ['greatestDose', 'leastDoseIfUsed', 'availableTonnes', 'lotTonnes', 'flushCost', 'priceSteps'] as const;
 
 /** True where the cell holds an amount of the product, not a figure of it. */
 export const isAmount = (cell: string): boolean => Object.hasOwn(NAMES, cell);
@@ -42,6 +43,7 @@ function wrongAmount(product: Product, cell: (typeof BOUNDS)[number]): string | 
   if (cell === 'availableTonnes') return wrongQuantity(product);
   if (cell === 'lotTonnes') return (product.lotTonnes ?? 1) > 0 ? undefined : 'must be more than zero.';
   if (cell === 'flushCost') return (product.flushCost ?? 0) >= 0 ? undefined : 'must not be below zero.';
+  if (cell === 'priceSteps') return undefined;
   return wrongShare(product[cell]);
 }
 

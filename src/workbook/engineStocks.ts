@@ -51,8 +51,18 @@ function stockOf(
   product: Product,
   own: Pick<Stock, 'id' | 'name' | 'pricePerTonne' | 'figures' | 'availableTonnes'>,
 ): Stock {
-  const { family, blendWeight, leastDoseIfUsed, greatestDose, lotTonnes, flushCost, flags } = product;
-  const optional = { blendWeight, leastDoseIfUsed, greatestDose, lotTonnes, flushCost, flags };
+  const { family, blendWeight, leastDoseIfUsed, greatestDose, lotTonnes, flushCost, priceSteps, priceStepsFor, flags } =
+    product;
+  const optional = {
+    blendWeight,
+    leastDoseIfUsed,
+    greatestDose,
+    lotTonnes,
+    flushCost,
+    priceSteps,
+    priceStepsFor,
+    flags,
+  };
   const given = Object.entries(optional).filter(([, value]) => value !== undefined);
   const { availableTonnes, ...rest } = own;
   const onHand = availableTonnes === undefined ? {} : { availableTonnes };

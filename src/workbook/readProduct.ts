@@ -1,5 +1,6 @@
 import { FAMILIES } from '../stock/family';
 import { FIGURE_ORIGINS, type Figure } from '../stock/figure';
+import type { PriceStep } from '../stock/stock';
 import { dictionaryOf, identity, listOf, number, oneOf, optional, record, text } from './readers';
 import type { Lot, Product } from './workbook';
 
@@ -35,6 +36,8 @@ export const readProduct = record<Product>({
   leastDoseIfUsed: optional(number),
   greatestDose: optional(number),
   lotTonnes: optional(number),
+  priceSteps: optional(listOf(record<PriceStep>({ fromTonnes: number, pricePerTonne: number }))),
+  priceStepsFor: optional(oneOf<NonNullable<Product['priceStepsFor']>>('all tonnes', 'the excess')),
   flushCost: optional(number),
   flags: optional(listOf(text)),
   lots: listOf(readLot),

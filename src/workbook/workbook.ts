@@ -2,6 +2,7 @@ import type { Dose, Limit, Order, ShareRule } from '../optimise/order';
 import type { OwnProperty } from '../property/ownProperty';
 import type { Family } from '../stock/family';
 import type { Figure } from '../stock/figure';
+import type { PriceStep, Stock } from '../stock/stock';
 
 export const WORKBOOK_FORMAT = 'basewright-workbook';
 export const WORKBOOK_VERSION = 1;
@@ -34,6 +35,9 @@ export interface Product {
   leastDoseIfUsed?: number;
   greatestDose?: number;
   lotTonnes?: number;
+  /** Prices that hold from so many tonnes in one batch on. */
+  priceSteps?: PriceStep[];
+  priceStepsFor?: Stock['priceStepsFor'];
   /** What using it costs a batch, whatever its share: flushing a line, opening a tank. */
   flushCost?: number;
   flags?: string[];

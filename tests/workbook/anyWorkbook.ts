@@ -71,6 +71,8 @@ const product = partly<Product>(
     greatestDose: number,
     lotTonnes: number,
     flushCost: number,
+    priceSteps: fc.array(fc.record({ fromTonnes: number, pricePerTonne: number }), { maxLength: 3 }),
+    priceStepsFor: fc.constantFrom('all tonnes', 'the excess'),
     flags: fc.array(text, { maxLength: 3 }),
     lots: fc.uniqueArray(lot, { maxLength: 3, selector: (entry) => entry.id }),
     note: text,
