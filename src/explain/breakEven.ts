@@ -38,7 +38,8 @@ export async function breakEven(
     const isFarthest = steps === undefined || steps >= Math.abs(farthest - present);
     const price = isFarthest ? farthest : present + direction * (steps ?? 0);
     if (price === present) return { price, proven };
-    const answer = await again.solveAtPrices(new Map([[stockId, price]]));
+    const near = isFarthest ? undefined : again.kv100;
+    const answer = await again.solveAtPrices(new Map([[stockId, price]]), near);
     proven &&= answer.proven;
     const stands = own.cost + weight * (price - present);
     if (answer.cost >= stands - Math.max(again.noiseAt(stands), again.noiseAt(own.cost))) {

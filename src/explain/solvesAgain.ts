@@ -96,14 +96,14 @@ export class SolvesAgain {
     return answer;
   }
 
-  /** Solves the order with other prices of some stocks, where the explained recipe may well stay. */
-  async solveAtPrices(prices: ReadonlyMap<string, number>): Promise<Answer> {
+  /** Solves the order with other prices of some stocks. */
+  async solveAtPrices(prices: ReadonlyMap<string, number>, near?: number): Promise<Answer> {
     const stocks = this.order.stocks.map((stock) => {
       const pricePerTonne = prices.get(stock.id);
       return pricePerTonne === undefined ? stock : { ...stock, pricePerTonne };
     });
     const changed = { ...this.order, stocks };
-    const answer = await this.solve(changed, this.kv100);
+    const answer = await this.solve(changed, near);
     const { recipe } = answer.outcome;
     if (recipe) {
       const line = costLine(changed, recipe, answer.cost);
