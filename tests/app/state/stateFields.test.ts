@@ -1,8 +1,11 @@
 import { beforeEach, describe, expect, test } from 'vitest';
 import { useAnswer } from '../../../app/state/answerStore';
+import { useExplain } from '../../../app/state/explainStore';
 import { useSave } from '../../../app/state/saveStore';
 import {
   ANSWER_FIELDS,
+  EXPLAIN_FIELDS,
+  EXPLAINED_FIELDS,
   SAVE_FIELDS,
   VIEW_FIELDS,
   WORKBOOK_DOCUMENT_FIELDS,
@@ -22,9 +25,11 @@ describe('the table of state fields', () => {
     expect(unnamed(useWorkbook.getState(), WORKBOOK_FIELDS)).toEqual([]);
     expect(unnamed(useView.getState(), VIEW_FIELDS)).toEqual([]);
     expect(unnamed(useSave.getState(), SAVE_FIELDS)).toEqual([]);
+    expect(unnamed(useExplain.getState(), EXPLAIN_FIELDS)).toEqual([]);
     expect(Object.keys(WORKBOOK_DOCUMENT_FIELDS)).toEqual(Object.keys(useWorkbook.getState().workbook));
     expect(useAnswer).toBeTypeOf('function');
-    expect(Object.values(ANSWER_FIELDS).some(({ stored }) => stored)).toBe(false);
+    for (const passing of [ANSWER_FIELDS, EXPLAIN_FIELDS, EXPLAINED_FIELDS])
+      expect(Object.values(passing).some(({ stored, exported }) => stored || exported)).toBe(false);
   });
 
   test('is right about what stands in the file', () => {

@@ -1,5 +1,6 @@
 import { useAnswers } from '../../../app/state/answerStore';
 import { type Environment, setEnvironment } from '../../../app/state/environment';
+import { useExplain } from '../../../app/state/explainStore';
 import { useSave } from '../../../app/state/saveStore';
 import { useView } from '../../../app/state/viewStore';
 import { openWorkbook } from '../../../app/state/workbookStore';
@@ -48,5 +49,6 @@ export function resetStores(): void {
   openWorkbook(emptyWorkbook('w', 'W'));
   useView.setState({ orderId: undefined, theme: 'system', announcement: '', message: '' });
   useAnswers.setState({ answers: {} });
+  useExplain.setState({ explained: {}, rounding: '' });
   useSave.setState({ state: 'saved', message: undefined, setAside: undefined, unguarded: undefined });
 }
