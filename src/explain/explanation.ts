@@ -26,7 +26,7 @@ export interface LimitPrice {
   proven: boolean;
 }
 
-/** A stock that is not used: the price at which it would come in. */
+/** A stock that is not used: the price at which it would come in. Its price steps, if any, move along with the price. */
 export interface EntryPrice {
   stockId: string;
   pricePerTonne: number;
@@ -38,7 +38,10 @@ export interface EntryPrice {
   proven: boolean;
 }
 
-/** A stock that is used: the prices at which the recipe stands, and what its loss would cost. */
+/**
+ * A stock that is used: the prices at which the recipe stands, and what its loss would cost. Its price steps, if any,
+ * move along with the price.
+ */
 export interface UsedStock {
   stockId: string;
   pricePerTonne: number;

@@ -2,6 +2,7 @@ import type { Order } from '../optimise/order';
 import type { BlendOutcome } from '../optimise/outcome';
 import { gapReference } from '../optimise/search/gapReference';
 import { resolveOptions, type SolveOptions } from '../optimise/solveOptions';
+import type { Stock } from '../stock/stock';
 import { type CostLine, costLine } from './costLine';
 import { kv100Of, LimitedSolves } from './limitedSolves';
 
@@ -96,11 +97,11 @@ export class SolvesAgain {
     return answer;
   }
 
-  /** Solves the order with other prices of some stocks. */
+  /** Solves the order with other prices of some stocks; price steps move along, so that the cost moves with the share. */
   async solveAtPrices(prices: ReadonlyMap<string, number>, near?: number): Promise<Answer> {
     const stocks = this.order.stocks.map((stock) => {
-      const pricePerTonne = prices.get(stock.id);
-      return pricePerTonne === undefined ? stock : { ...stock, pricePerTonne };
+      const price = prices.get(stock.id);
+      return price === undefined ? stock : atPrice(stock, price);
     });
     const changed = { ...this.order, stocks };
     const answer = await this.solve(changed, near);
@@ -132,4 +133,10 @@ export class SolvesAgain {
   amount(difference: number): number {
     return difference > this.noiseAt(this.cost) ? difference : 0;
   }
+}
+
+function atPrice(stock: Stock, pricePerTonne: number): Stock {
+  const by = pricePerTonne - stock.pricePerTonne;
+  const priceSteps = stock.priceSteps?.map((step) => ({ ...step, pricePerTonne: step.pricePerTonne + by }));
+  return { ...stock, pricePerTonne, ...(priceSteps ? { priceSteps } : {}) };
 }

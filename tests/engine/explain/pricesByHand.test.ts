@@ -155,3 +155,18 @@ test('a stock that is paid for being used up has an entry price and a range like
   expect(slop?.standsTo).toBeCloseTo(1200, 4);
   expect(slop?.standsFrom).toBeUndefined();
 });
+
+test('price steps move along with the price', async () => {
+  // Three tonnes of nine at 700, the price from two tonnes on; as dear as the clean oil where that is 1200, at 1300.
+  const stepped: Stock = { ...CHEAP, priceSteps: [{ fromTonnes: 2, pricePerTonne: 700 }] };
+  const order: Order = {
+    stocks: [stepped, CLEAN],
+    limits: [{ property: 'sulphur', max: 400 }],
+    batchTonnes: 9,
+  };
+  const { outcome, explanation } = await explain(order);
+  expect(outcome.objective).toBeCloseTo(3100 / 3, 6);
+  const cheap = explanation.used.find((stock) => stock.stockId === 'cheap');
+  expect(cheap?.standsTo).toBeCloseTo(1300, 4);
+  expect(cheap?.lossCosts).toBeCloseTo(500 / 3, 6);
+});
