@@ -2,7 +2,9 @@ import { expect } from 'vitest';
 import {
   applyRelaxation,
   type Demand,
+  explainImpossible,
   type Ladder,
+  type LadderOptions,
   type Order,
   solveBlend,
   type WithinReach,
@@ -10,6 +12,11 @@ import {
 import { unitOf } from '../../oracle/figures';
 import type { Draw } from '../../oracle/mulberry32';
 import { sliceSearch } from '../../oracle/sliceSearch';
+
+/** A ladder with time enough on a busy machine too. */
+export function ladderOf(order: Order, options: LadderOptions = {}): Promise<Ladder> {
+  return explainImpossible(order, { timeLimitMs: 60_000, ...options });
+}
 
 /** Drops a demand in place, the test's own way: dropped doses and rules are marked and swept afterwards. */
 function drop(order: Order, demand: Demand): void {

@@ -1,7 +1,7 @@
 import { expect, test } from 'vitest';
 import { demoWorkbook } from '../../../app/demo/demoWorkbook';
-import { demandInWords, explainImpossible, type Order, toOrder } from '../../../src/index';
-import { expectIrreducible, expectReach, expectRelaxations } from './ladderChecks';
+import { demandInWords, type Order, toOrder } from '../../../src/index';
+import { expectIrreducible, expectReach, expectRelaxations, ladderOf } from './ladderChecks';
 
 function impossibleDemo(): Order {
   const workbook = demoWorkbook();
@@ -12,7 +12,7 @@ function impossibleDemo(): Order {
 
 test('the impossible order of the demo: what conflicts, and each of it is needed', async () => {
   const order = impossibleDemo();
-  const ladder = await explainImpossible(order);
+  const ladder = await ladderOf(order);
   expect(ladder).toMatchObject({ stopped: 'finished', conflictProven: true });
   expect(ladder.noConflict).toBeUndefined();
   expect(ladder.conflict.map((demand) => demandInWords(demand, order))).toEqual([
@@ -25,7 +25,7 @@ test('the impossible order of the demo: what conflicts, and each of it is needed
 
 test('what is within reach of it: no Noack volatility of 10, but 11 (source: the scenario, found by an earlier slice search)', async () => {
   const order = impossibleDemo();
-  const ladder = await explainImpossible(order);
+  const ladder = await ladderOf(order);
   const noack = ladder.reach.find(({ limit }) => order.limits[limit].property === 'noack');
   expect(noack?.reachable).toBeGreaterThan(10);
   expect(noack?.reachable).toBeLessThanOrEqual(11);
@@ -37,7 +37,7 @@ test('what is within reach of it: no Noack volatility of 10, but 11 (source: the
 
 test('its relaxations give proven recipes', async () => {
   const order = impossibleDemo();
-  const ladder = await explainImpossible(order);
+  const ladder = await ladderOf(order);
   expect(ladder.relaxations.length).toBeGreaterThanOrEqual(2);
   await expectRelaxations(order, ladder);
 });
@@ -45,10 +45,10 @@ test('its relaxations give proven recipes', async () => {
 test('weights change which relaxation comes first', async () => {
   const order = impossibleDemo();
   const noack = order.limits.findIndex(({ property }) => property === 'noack');
-  const plain = await explainImpossible(order);
+  const plain = await ladderOf(order);
   expect(plain.relaxations[0].changes.map(({ limit }) => limit)).toEqual([noack]);
   const weights = { [noack]: 100 };
-  const weighted = await explainImpossible(order, { weights });
+  const weighted = await ladderOf(order, { weights });
   expect(weighted.relaxations[0].changes.map(({ limit }) => limit)).toEqual([0]);
   await expectRelaxations(order, weighted, weights);
 });

@@ -1,15 +1,8 @@
 import { describe, expect, test } from 'vitest';
-import {
-  type Demand,
-  demandInWords,
-  explainImpossible,
-  type Order,
-  type ShareRule,
-  type Stock,
-} from '../../../src/index';
+import { type Demand, demandInWords, type Order, type ShareRule, type Stock } from '../../../src/index';
 import { demo, without } from '../optimum/consistency';
 import { demoStock, plainOrder } from '../order/plainOrder';
-import { expectIrreducible } from './ladderChecks';
+import { expectIrreducible, ladderOf } from './ladderChecks';
 
 const KV_AT_LEAST_10: Demand = { kind: 'limit', limit: 0, end: 'min' };
 
@@ -85,7 +78,7 @@ describe('a rule that stands in the way is the conflict, together with the limit
       [KV_AT_LEAST_10, { kind: 'limit', limit: 0, end: 'max' }, share(0)],
     ],
   ])('%s', async (words, order, conflict) => {
-    const ladder = await explainImpossible(order);
+    const ladder = await ladderOf(order);
     expect(ladder.conflict).toEqual(conflict);
     expect(demandInWords(conflict[conflict.length - 1], order)).toBe(words);
     await expectIrreducible(order, ladder);
@@ -98,7 +91,7 @@ describe('a rule that stands in the way is the conflict, together with the limit
       limits: [],
       doses: [{ stockId: 'PAO 40', min: 0.1, max: 0.25 }],
     };
-    const ladder = await explainImpossible(order);
+    const ladder = await ladderOf(order);
     expect(ladder.conflict).toEqual([
       { kind: 'dose', dose: 0 },
       { kind: 'whole drums', stockId: 'PAO 40' },
@@ -112,7 +105,7 @@ describe('a rule that stands in the way is the conflict, together with the limit
 
   test('a flag that no stock carries: the one reason there is', async () => {
     const order: Order = { ...plainOrder(), shares: [{ kind: 'flag', flag: 'food contact' }] };
-    const ladder = await explainImpossible(order);
+    const ladder = await ladderOf(order);
     expect(ladder.conflict).toEqual([share(0)]);
     expect(demandInWords(share(0), order)).toBe('every stock carries "food contact"');
     expect(ladder.reach.every(({ reachable, proven }) => reachable === undefined && proven)).toBe(true);
@@ -128,7 +121,7 @@ describe('a rule that stands in the way is the conflict, together with the limit
         { stockId: 'PAO 6', exactly: 0.5 },
       ],
     };
-    const ladder = await explainImpossible(order);
+    const ladder = await ladderOf(order);
     expect(ladder.conflict).toEqual([
       { kind: 'dose', dose: 1 },
       { kind: 'dose', dose: 2 },
@@ -139,7 +132,7 @@ describe('a rule that stands in the way is the conflict, together with the limit
   test('greatest doses of less than the whole', async () => {
     const order = thick({ greatestDose: 0.4 }, { limits: [] });
     order.stocks[0].greatestDose = 0.5;
-    const ladder = await explainImpossible(order);
+    const ladder = await ladderOf(order);
     expect(ladder.conflict).toEqual([
       { kind: 'greatest dose', stockId: 'PAO 4' },
       { kind: 'greatest dose', stockId: 'PAO 40' },
@@ -160,7 +153,7 @@ test('a limit dropped lets in no stock whose figure of it is unknown', async () 
     },
   );
   order.stocks = [demoStock('SN 150'), without(demoStock('polyol ester'), 'noack')];
-  const ladder = await explainImpossible(order);
+  const ladder = await ladderOf(order);
   expect(ladder.conflict).toEqual([{ kind: 'limit', limit: 1, end: 'max' }]);
   expect(ladder.reach).toMatchObject([
     { limit: 1, reachable: -12, proven: true },
@@ -170,14 +163,14 @@ test('a limit dropped lets in no stock whose figure of it is unknown', async () 
 
 describe('where no demand is at fault it is said why', () => {
   test('the order is possible', async () => {
-    const ladder = await explainImpossible(plainOrder());
+    const ladder = await ladderOf(plainOrder());
     expect(ladder).toMatchObject({ conflict: [], reach: [], relaxations: [], noConflict: { why: 'possible' } });
   });
 
   test('the order is no question', async () => {
     const order = plainOrder();
     order.limits = [{ property: 'kv', celsius: 100, min: 7, max: 6 }];
-    const { noConflict } = await explainImpossible(order);
+    const { noConflict } = await ladderOf(order);
     expect(noConflict?.why).toBe('refused');
     expect(noConflict?.messages[0]).toMatch(/the least \(7\) is above the most \(6\)/);
   });
@@ -185,7 +178,7 @@ describe('where no demand is at fault it is said why', () => {
   test('no stock is usable for want of figures', async () => {
     const order = plainOrder();
     order.stocks = order.stocks.slice(0, 2).map((stock) => without(stock, 'kv'));
-    const { conflict, noConflict } = await explainImpossible(order);
+    const { conflict, noConflict } = await ladderOf(order);
     expect(conflict).toEqual([]);
     expect(noConflict?.why).toBe('no mix at all');
     expect(noConflict?.messages[0]).toBe('no stock can be used: every one was left out');
@@ -199,7 +192,7 @@ describe('where no demand is at fault it is said why', () => {
       figures: [...without(stock, 'noack').figures, { property: 'noack', origin: 'as the rest' as const }],
     }));
     order.limits = [{ property: 'noack', max: 10 }];
-    const { noConflict } = await explainImpossible(order);
+    const { noConflict } = await ladderOf(order);
     expect(noConflict?.why).toBe('no mix at all');
     expect(noConflict?.messages.length).toBeGreaterThan(0);
   });
@@ -207,7 +200,7 @@ describe('where no demand is at fault it is said why', () => {
 
 test('weights that are no weights are refused', async () => {
   for (const weight of [0, -1, Number.NaN]) {
-    await expect(explainImpossible(demo('impossible at 10'), { weights: { 1: weight } })).rejects.toThrow(
+    await expect(ladderOf(demo('impossible at 10'), { weights: { 1: weight } })).rejects.toThrow(
       /weight of limit 2 must be above 0/,
     );
   }
