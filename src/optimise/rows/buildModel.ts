@@ -7,6 +7,7 @@ import { ModelBuilder } from './modelBuilder';
 import type { SearchModel } from './searchModel';
 import { addMostStocks, addShares } from './shareRows';
 import { viLimits } from './viLimits';
+import { drumsThatDoNotAddUp } from './wholeDrums';
 
 /** Turns a valid order and its usable stocks into columns and rows, or says what is wrong. */
 export function buildModel(order: Order, candidates: Candidates): { model: SearchModel; problems: OrderProblem[] } {
@@ -19,5 +20,8 @@ export function buildModel(order: Order, candidates: Candidates): { model: Searc
   const limitProblems = addLimits(builder, order, quantities);
   const { vi, problems: viProblems } = viLimits(order, quantities);
   const model = builder.build();
-  return { model: vi ? { ...model, vi } : model, problems: [...limitProblems, ...viProblems] };
+  return {
+    model: vi ? { ...model, vi } : model,
+    problems: [...limitProblems, ...viProblems, ...drumsThatDoNotAddUp(order, model)],
+  };
 }
