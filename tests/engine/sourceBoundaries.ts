@@ -4,8 +4,9 @@ export const LAYERS: Readonly<Record<string, readonly string[]>> = {
   property: ['stock'],
   blend: ['property', 'stock'],
   optimise: ['blend', 'property', 'stock'],
+  explain: ['optimise', 'blend', 'property', 'stock'],
   workbook: ['optimise', 'blend', 'property', 'stock'],
-  index: ['workbook', 'optimise', 'blend', 'property', 'stock'],
+  index: ['workbook', 'explain', 'optimise', 'blend', 'property', 'stock'],
 };
 
 /** The packages the engine stands on: linear programs only. */

@@ -212,10 +212,13 @@ describe('the nearest recipe', () => {
     expect(found?.totalChange).toBeGreaterThan(0.001);
   });
 
-  test('flush costs are no property of a mix: no answer rather than a wrong one', async () => {
-    const order: Order = { ...plainOrder(), batchTonnes: 10 };
-    order.stocks[0].flushCost = 50;
-    const outcome = await solveBlend(order);
-    expect(await nearestRecipe(order, outcome, outcome.recipe ?? [])).toBeUndefined();
-  });
+  test.each([{ flushCost: 50 }, { priceSteps: [{ fromTonnes: 1, pricePerTonne: 700 }] }])(
+    'what is no property of a mix (%o) gives no answer rather than a wrong one',
+    async (costs) => {
+      const order: Order = { ...plainOrder(), batchTonnes: 10 };
+      Object.assign(order.stocks[0], costs);
+      const outcome = await solveBlend(order);
+      expect(await nearestRecipe(order, outcome, outcome.recipe ?? [])).toBeUndefined();
+    },
+  );
 });

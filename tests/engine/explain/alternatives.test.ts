@@ -43,7 +43,7 @@ async function compare(order: Order): Promise<{ listed: number; problems: string
 describe('against every set of stocks solved alone', () => {
   test.each([
     ['shares, doses and limits', { ...CONTINUOUS, stocks: [4, 6] }, 1, 14],
-    ['least doses, counts and exclusions too', { ...DISCRETE, stocks: [4, 6] }, 501, 5],
+    ['least doses, counts and exclusions too', { ...DISCRETE, stocks: [4, 5] }, 501, 8],
   ] satisfies [string, OrderShape, number, number][])('%s', async (_name, shape, from, count) => {
     const problems: string[] = [];
     let listed = 0;
@@ -53,7 +53,7 @@ describe('against every set of stocks solved alone', () => {
       problems.push(...(found?.problems ?? []).map((problem) => `seed ${seed}: ${problem}`));
     }
     expect(problems).toEqual([]);
-    expect(listed).toBeGreaterThanOrEqual(count / 2);
+    expect(listed).toBeGreaterThanOrEqual(count / 3);
   });
 });
 

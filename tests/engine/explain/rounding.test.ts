@@ -32,7 +32,7 @@ describe('against every mix on a grid of 1 %', () => {
   test('two and three stocks: the same cost, proven, and none where the grid has none', async () => {
     const problems: string[] = [];
     let rounded = 0;
-    for (const seed of seeds(40, 31)) {
+    for (const seed of seeds(24, 31)) {
       const order = randomOrder(seed, { ...CONTINUOUS, stocks: [2, 3], rules: false });
       const outcome = await solveBlend(order);
       if (!outcome.recipe) continue;
@@ -135,6 +135,21 @@ describe('rules', () => {
   });
 });
 
+test('prices that fall with the quantity are counted', async () => {
+  const order = { ...plainOrder(), batchTonnes: 10 };
+  const first = await solveBlend(order);
+  const bought = first.recipe?.reduce((a, b) => (b.massFraction > a.massFraction ? b : a)).stockId;
+  const stock = order.stocks.find((candidate) => candidate.id === bought);
+  const cheap = (stock?.pricePerTonne ?? 0) - 100;
+  Object.assign(stock ?? {}, { priceSteps: [{ fromTonnes: 1, pricePerTonne: cheap }] });
+  const found = await roundRecipe(order, await solveBlend(order), 0.01, LONG);
+  const price = (id: string) =>
+    id === bought ? cheap : (order.stocks.find((other) => other.id === id)?.pricePerTonne ?? Number.NaN);
+  const byHand = (found?.recipe ?? []).reduce((sum, line) => sum + line.massFraction * price(line.stockId), 0);
+  expect(shareIn(found?.recipe ?? [], bought ?? '')).toBeGreaterThan(0.1);
+  expect(found?.costPerTonne).toBeCloseTo(byHand, 6);
+});
+
 describe('the demo', () => {
   test.each([0.001, 0.0001])(
     'every order in steps of %d: on specification, the cost of rounding is the difference',
@@ -154,7 +169,7 @@ describe('the demo', () => {
         expect(found.roundingCosts).toBeGreaterThan(-2e-6 * found.costPerTonne);
         expect(found.roundingCosts).toBeLessThan(0.02 * found.costPerTonne);
       }
-      expect(rounded).toBe(6);
+      expect(rounded).toBeGreaterThan(5);
       expect(proven).toBeGreaterThan(0);
     },
   );
