@@ -70,14 +70,15 @@ function asChanges(order: Order, inUse: Recipe, ceiling: number): Order {
 
 /** True where the cost is more than prices and shares, and so no property of the mix. */
 function hasOtherCosts(order: Order): boolean {
-  return order.stocks.some((stock) => (stock.flushCost ?? 0) > 0) && typeof order.batchTonnes === 'number';
+  const has = order.stocks.some(({ flushCost = 0, priceSteps = [] }) => flushCost > 0 || priceSteps.length > 0);
+  return has && typeof order.batchTonnes === 'number';
 }
 
 /**
  * The recipe that changes a recipe in use least, at a cost of at most `within` (default 5 %) above the cheapest, in
  * the order's cost basis: one proven search, to a ten-thousandth of a per cent. Stocks in use that the order does not offer count as changed whatever the
- * recipe. Aims of the order are set aside. Undefined where there is no such recipe, or where flush costs count: they
- * are no property of a mix, and a ceiling over them cannot be held exactly in this way.
+ * recipe. Aims of the order are set aside. Undefined where there is no such recipe, or where flush costs or price
+ * steps count: they are no property of a mix, and a ceiling over them cannot be held exactly in this way.
  */
 export async function nearestRecipe(
   order: Order,

@@ -12,13 +12,14 @@ export function inLots(order: Order, { step, fill }: RoundingGrid): Order {
   const isFixed = typeof batchTonnes === 'number';
   const batch = typeof batchTonnes === 'object' ? batchTonnes.min : (batchTonnes ?? 1);
   const stocks = order.stocks.map((stock) => {
-    const { lotTonnes: _, flushCost, availableTonnes, ...rest } = stock;
+    const { lotTonnes: _, flushCost, priceSteps, availableTonnes, ...rest } = stock;
     const kept = exactShare(order, stock.id) !== undefined || fill?.stockId === stock.id;
     return {
       ...rest,
-      // Without a batch nothing on hand is counted, without a fixed one no flush cost: nor are they here.
+      // Without a batch nothing on hand is counted, without a fixed one no flush cost and no price step: nor are they here.
       ...(availableTonnes !== undefined && batchTonnes !== undefined ? { availableTonnes } : {}),
       ...(flushCost !== undefined && isFixed ? { flushCost } : {}),
+      ...(priceSteps !== undefined && isFixed ? { priceSteps } : {}),
       ...(comesInDrums(order, stock.id) ? { lotTonnes: stock.lotTonnes } : kept ? {} : { lotTonnes: step * batch }),
     };
   });
