@@ -1,6 +1,6 @@
 import type { PropertyAt } from '../blend/predictionOptions';
 import type { Order } from '../optimise/order';
-import type { Reproducibility } from '../property/propertyDefinition';
+import { type Reproducibility, reproducibilityOf } from '../property/propertyDefinition';
 import { propertyDefinition } from '../property/propertyTable';
 import { hasViscosityIndex, viscosityIndex } from '../property/viscosityIndex';
 
@@ -29,13 +29,14 @@ export function reproducibilityAt(
   order: Pick<Order, 'ownProperties'>,
   precisions: Precisions = {},
 ): number | undefined {
-  const stated =
-    precisions[`${property}@${celsius}`] ??
-    precisions[property] ??
-    propertyDefinition(property, order.ownProperties)?.reproducibility;
-  if (!stated) return undefined;
-  const r = 'absolute' in stated ? stated.absolute : stated.relative * Math.abs(value);
-  return r > 0 && Number.isFinite(r) ? r : undefined;
+  const definition = propertyDefinition(property, order.ownProperties);
+  const own = precisions[`${property}@${celsius}`] ?? precisions[property];
+  const r = own
+    ? 'absolute' in own
+      ? own.absolute
+      : own.relative * Math.abs(value)
+    : definition && reproducibilityOf(definition, value, celsius);
+  return r !== undefined && r > 0 && Number.isFinite(r) ? r : undefined;
 }
 
 /** d VI by one viscosity; from the side where the index is defined at its ends. */

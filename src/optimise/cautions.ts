@@ -1,4 +1,5 @@
 import type { PredictedProperties } from '../blend/predictedProperties';
+import { reproducibilityOf } from '../property/propertyDefinition';
 import { propertyDefinition } from '../property/propertyTable';
 import { VISCOSITY_RULE_TABLE, type ViscosityRule } from '../property/viscosityRule';
 import { findFigure } from '../stock/findFigure';
@@ -12,11 +13,10 @@ const RULES_THAT_COUNT = new Set(['wright', 'walther', 'refutas', 'logarithmic']
 /** R of a viscosity index that follows from those of KV40 and KV100 [-]; from memory, 2.6 to 7 for a PAO 6. */
 const VI_REPRODUCIBILITY = 3;
 
-function reproducibility(property: string, value: number): number {
+function reproducibility({ property, celsius, value }: LimitCheck): number {
   if (property === 'vi') return VI_REPRODUCIBILITY;
-  const found = propertyDefinition(property)?.reproducibility;
-  if (!found) return 0;
-  return 'relative' in found ? found.relative * Math.abs(value) : found.absolute;
+  const definition = propertyDefinition(property);
+  return (definition && reproducibilityOf(definition, value, celsius)) ?? 0;
 }
 
 const LIST = new Intl.ListFormat('en-GB');
@@ -27,7 +27,7 @@ const WIDE_DISAGREEMENT = 2;
 /** Rules that put the mix outside a limit, and by how many reproducibilities of the method. */
 function disagreeing(check: LimitCheck, predicted: PredictedProperties): { rule: ViscosityRule; times: number }[] {
   const spread = predicted.spread.find((entry) => entry.property === check.property && entry.celsius === check.celsius);
-  const slack = reproducibility(check.property, check.value);
+  const slack = reproducibility(check);
   return (spread?.byRule ?? []).flatMap(({ rule, value }) => {
     if (value === undefined || !RULES_THAT_COUNT.has(rule)) return [];
     const outside = Math.max((check.min ?? -Infinity) - value, value - (check.max ?? Infinity));

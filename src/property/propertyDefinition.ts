@@ -27,9 +27,22 @@ export interface PropertyDefinition {
   /** Values outside cannot be right: refused at the door. */
   sense: { min: number; max: number };
   reproducibility?: Reproducibility;
+  /** Where the method's reproducibility differs at a temperature [°C]. */
+  reproducibilityAt?: Readonly<Record<number, Reproducibility>>;
   /** Which way is better, for pictures and wording only. */
   direction: 'lower' | 'higher' | 'range';
   /** How it blends and where that comes from, in a sentence or two for the help. */
   blending: string;
   source: string;
+}
+
+/** R of a property's method at a value, in the property's unit; undefined where none is known. */
+export function reproducibilityOf(
+  { reproducibility, reproducibilityAt }: PropertyDefinition,
+  value: number,
+  celsius?: number,
+): number | undefined {
+  const stated = (celsius === undefined ? undefined : reproducibilityAt?.[celsius]) ?? reproducibility;
+  if (!stated) return undefined;
+  return 'absolute' in stated ? stated.absolute : stated.relative * Math.abs(value);
 }

@@ -44,7 +44,9 @@ export const PROPERTY_TABLE: readonly PropertyDefinition[] = [
     digits: 2,
     reportingUnit: 0.01,
     sense: { min: 0.3, max: 1e6 },
+    // ASTM D445, base oils, at 40 °C and at 100 °C (from memory; editions differ).
     reproducibility: { relative: 0.0136 },
+    reproducibilityAt: { 100: { relative: 0.019 } },
     direction: 'range',
     blending: 'Blends by the viscosity rule of the order; the Wright method of ASTM D7152 unless another is chosen.',
     source: 'ASTM D7152, ASTM D341.',
