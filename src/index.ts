@@ -6,15 +6,12 @@
 export { type PredictOptions, predictBlend } from './blend/predictBlend';
 export type { PredictedProperties, PredictedProperty, RuleSpread } from './blend/predictedProperties';
 export type { PredictionOptions, PropertyAt } from './blend/predictionOptions';
-export type { AimedRecipe } from './explain/aimedRecipe';
-export { type Alternatives, type AlternativesOptions, alternatives } from './explain/alternatives';
-export { applyRelaxation } from './explain/applyRelaxation';
-export { type BestOfProperty, bestOfProperty, type PropertyAim } from './explain/bestOfProperty';
-export { chanceOfPassing } from './explain/chanceOfPassing';
-export { demandInWords } from './explain/demandInWords';
-export { demandsOf, onlyDemands, withoutDemand } from './explain/demands';
-export { explainImpossible, type LadderOptions } from './explain/explainImpossible';
-export { type ExplainOptions, explainRecipe } from './explain/explainRecipe';
+export type { AimedRecipe } from './explain/choices/aimedRecipe';
+export { type Alternatives, type AlternativesOptions, alternatives } from './explain/choices/alternatives';
+export { type BestOfProperty, bestOfProperty, type PropertyAim } from './explain/choices/bestOfProperty';
+export { fewestStocks } from './explain/choices/fewestStocks';
+export { type NearestRecipe, nearestRecipe } from './explain/choices/nearestRecipe';
+export { type RecipeInSteps, roundRecipe } from './explain/choices/roundRecipe';
 export type {
   Alternative,
   Demand,
@@ -27,11 +24,14 @@ export type {
   UsedStock,
   WithinReach,
 } from './explain/explanation';
-export { fewestStocks } from './explain/fewestStocks';
-export type { Precisions } from './explain/methodPrecision';
-export { type NearestRecipe, nearestRecipe } from './explain/nearestRecipe';
-export { type MarginOptions, marginFor } from './explain/precisionMargin';
-export { type RecipeInSteps, roundRecipe } from './explain/roundRecipe';
+export { applyRelaxation } from './explain/ladder/applyRelaxation';
+export { demandInWords } from './explain/ladder/demandInWords';
+export { demandsOf, onlyDemands, withoutDemand } from './explain/ladder/demands';
+export { explainImpossible, type LadderOptions } from './explain/ladder/explainImpossible';
+export { chanceOfPassing } from './explain/precision/chanceOfPassing';
+export type { Precisions } from './explain/precision/methodPrecision';
+export { type MarginOptions, marginFor } from './explain/precision/precisionMargin';
+export { type ExplainOptions, explainRecipe } from './explain/prices/explainRecipe';
 export { createEngine } from './optimise/defaultEngine';
 export { createCompactEngine } from './optimise/linear/compact/compactEngine';
 export { createHighsEngine, type HighsLoading } from './optimise/linear/highsEngine';

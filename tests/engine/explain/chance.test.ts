@@ -1,7 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import { demoWorkbook } from '../../../app/demo/demoWorkbook';
-import { reproducibilityOfIndex } from '../../../src/explain/methodPrecision';
-import { normalBelow } from '../../../src/explain/normalDistribution';
+import { reproducibilityOfIndex } from '../../../src/explain/precision/methodPrecision';
+import { normalBelow } from '../../../src/explain/precision/normalDistribution';
 import {
   chanceOfPassing,
   type Limit,
