@@ -56,12 +56,21 @@ export interface Shown<Value> {
   due: boolean;
 }
 
+const OF_ANY_ANSWER = { impossible: true, opinion: true };
+
+function isWithoutRecipe(answer: Answer | undefined): boolean {
+  return answer?.phase === 'answered' && !answer.stale && !answer.outcome?.recipe;
+}
+
 /** One part of what was told about an order's answer. Renders anew only where the part or its standing changes. */
 export function useExplained<Kind extends QuestionKind | 'opinion'>(
   orderId: string,
   kind: Kind,
 ): Shown<Explained[Kind]> {
-  const part = useExplain(({ explained }) => explained[orderId]?.[kind]);
+  const told = useExplain(({ explained }) => explained[orderId]?.[kind]);
+  // An answer without a recipe leaves nothing to be told of one, and no news is on its way.
+  const applies = useAnswers(({ answers }) => kind in OF_ANY_ANSWER || !isWithoutRecipe(answers[orderId]));
+  const part = applies ? told : undefined;
   const isOfThis = (answer: Answer | undefined) => answer !== undefined && answer.outcome === part?.outcome;
   const stale = useAnswers(({ answers }) => {
     const answer = answers[orderId];

@@ -12,7 +12,7 @@ import { setExplained, useExplain } from '../../../app/state/explainStore';
 import { useView } from '../../../app/state/viewStore';
 import { undo, useWorkbook } from '../../../app/state/workbookStore';
 import type { Alternative, Explanation, LimitPrice } from '../../../src';
-import { LIGHT, mixOf, orderOf } from '../answer/answers';
+import { LIGHT, mixOf, orderOf, outcomeOf } from '../answer/answers';
 import { answerOnPage, ID } from './explainedOnPage';
 
 const KV40 = { property: 'kv', celsius: 40, min: 38 };
@@ -55,6 +55,13 @@ describe('the price of a limit', () => {
     expect(line).not.toHaveClass('stale');
     answeredAnew();
     await expect.poll(() => line.className).toMatch('stale');
+  });
+
+  it('goes with an answer that has no recipe', () => {
+    explainedAs(explanationOf({ limits: [PRICE] }));
+    const { container } = render(<LimitPriceLine {...place} />);
+    act(() => setAnswer(ID, { outcome: outcomeOf({ stopped: 'refused' }) }));
+    expect(container).toBeEmptyDOMElement();
   });
 
   it('is counted on what the order counts its cost on', () => {
