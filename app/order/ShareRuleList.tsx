@@ -14,6 +14,7 @@ const NEW_RULES: Record<ShareRule['kind'], { label: string; rule: ShareRule }> =
   share: { label: 'share of some stocks', rule: { kind: 'share', set: {} } },
   ratio: { label: 'ratio of some stocks to others', rule: { kind: 'ratio', set: {}, to: {} } },
   count: { label: 'number of stocks used', rule: { kind: 'count', set: {} } },
+  'one of': { label: 'one of some stocks, at a share', rule: { kind: 'one of', set: {} } },
   excludes: { label: 'this stock not with those', rule: { kind: 'excludes', stockId: '', set: {} } },
   needs: { label: 'this stock only with those', rule: { kind: 'needs', stockId: '', set: {} } },
   flag: { label: 'flag that every stock carries', rule: { kind: 'flag', flag: '' } },

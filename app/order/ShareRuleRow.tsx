@@ -1,6 +1,6 @@
 import type { Product, ShareRule } from '../../src';
 import { RuleRow } from './RuleRow';
-import { CountRule, ExcludesRule, FlagRule, NeedsRule, RatioRule, ShareOfSetRule } from './ruleFields';
+import { CountRule, ExcludesRule, FlagRule, NeedsRule, OneOfRule, RatioRule, ShareOfSetRule } from './ruleFields';
 
 export interface RuleFieldsProps<Kind extends ShareRule['kind']> {
   rule: Extract<ShareRule, { kind: Kind }>;
@@ -38,6 +38,8 @@ function fieldsOf(rule: ShareRule, products: readonly Product[], onChange: (rule
       return <RatioRule rule={rule} {...shared} />;
     case 'count':
       return <CountRule rule={rule} {...shared} />;
+    case 'one of':
+      return <OneOfRule rule={rule} {...shared} />;
     case 'excludes':
       return <ExcludesRule rule={rule} {...shared} />;
     case 'needs':

@@ -36,6 +36,30 @@ export function ShareOfSetRule({ rule, products, onChange }: RuleFieldsProps<'sh
   );
 }
 
+/** A place in a formula with its approved alternatives. */
+export function OneOfRule({ rule, products, onChange }: RuleFieldsProps<'one of'>) {
+  return (
+    <>
+      <span className={styles.words}>One of</span>
+      <StockSetField
+        label="Stocks to choose from"
+        value={rule.set}
+        products={products}
+        onChange={(set) => onChange({ ...rule, set })}
+      />
+      <RangeFields
+        context="Share of the one chosen"
+        unit="%"
+        digits={2}
+        sense={{ min: 0, max: 100 }}
+        value={{ min: toPercent(rule.min), max: toPercent(rule.max) }}
+        onChange={({ min, max }) => onChange(withRange(rule, { min: fromPercent(min), max: fromPercent(max) }))}
+      />
+      <span className={styles.words}>of the mix</span>
+    </>
+  );
+}
+
 export function RatioRule({ rule, products, onChange }: RuleFieldsProps<'ratio'>) {
   return (
     <>

@@ -9,7 +9,7 @@ import type { OrderProblem } from './outcome';
 
 type Data = Record<string, unknown>;
 
-const SHARE_KINDS = ['share', 'ratio', 'count', 'excludes', 'needs', 'flag'];
+const SHARE_KINDS = ['share', 'ratio', 'count', 'one of', 'excludes', 'needs', 'flag'];
 const COST_BASES = ['tonne', 'cubic metre'];
 const DOSE_UNITS = ['share', 'tonnes'];
 const SHARE_BASES = ['mix', 'base oil'];

@@ -65,6 +65,8 @@ export type ShareRule =
   | { kind: 'ratio'; set: StockSet; to: StockSet; min?: number; max?: number }
   /** At least / at most so many stocks of a set. */
   | { kind: 'count'; set: StockSet; min?: number; max?: number }
+  /** A place in a formula: one stock of the set and no other, at a share within the range; none where `min` is 0 or absent. */
+  | { kind: 'one of'; set: StockSet; min?: number; max?: number }
   /** Where this stock is used, none of that set is. */
   | { kind: 'excludes'; stockId: string; set: StockSet }
   /** Where this stock is used, at least one of that set is. */

@@ -43,6 +43,8 @@ export function ruleInWords(rule: ShareRule, stocks: readonly Stock[]): string {
     }
     case 'count':
       return `${rangeInWords(rule.min, rule.max, String)} of ${setInWords(rule.set, stocks)}`;
+    case 'one of':
+      return `one of ${setInWords(rule.set, stocks)}, ${rangeInWords(rule.min, rule.max, percent)} of the mix`;
     case 'excludes':
       return `${nameOf(stocks, rule.stockId)} not together with ${setInWords(rule.set, stocks)}`;
     case 'needs':

@@ -178,7 +178,7 @@ function checkShare(rule: ShareRule, place: number, order: Order, problems: Prob
     problems.add(path, 'The rule names a stock that is not in this order.');
   }
   if (rule.kind === 'excludes' || rule.kind === 'needs' || rule.kind === 'flag') return;
-  const top = rule.kind === 'share' ? 1 : LARGEST;
+  const top = rule.kind === 'share' || rule.kind === 'one of' ? 1 : LARGEST;
   problems.number([...path, 'min'], rule.min, 'The least of the rule', 0, top);
   problems.number([...path, 'max'], rule.max, 'The most of the rule', 0, top);
   problems.range(path, rule.min, rule.max, 'The rule');

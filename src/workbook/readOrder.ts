@@ -56,13 +56,14 @@ const RULES: { readonly [Kind in ShareRule['kind']]: Reader<RuleOf<Kind>> } = {
   share: record<RuleOf<'share'>>({ kind: oneOf('share'), set: readSet, ...ends, of: readBasis }),
   ratio: record<RuleOf<'ratio'>>({ kind: oneOf('ratio'), set: readSet, to: readSet, ...ends }),
   count: record<RuleOf<'count'>>({ kind: oneOf('count'), set: readSet, ...ends }),
+  'one of': record<RuleOf<'one of'>>({ kind: oneOf('one of'), set: readSet, ...ends }),
   // A rule may be unfinished: no stock chosen yet, no set, no ends.
   excludes: record<RuleOf<'excludes'>>({ kind: oneOf('excludes'), stockId: text, set: readSet }),
   needs: record<RuleOf<'needs'>>({ kind: oneOf('needs'), stockId: text, set: readSet }),
   flag: record<RuleOf<'flag'>>({ kind: oneOf('flag'), flag: text }),
 };
 
-const RULE_KINDS = ['share', 'ratio', 'count', 'excludes', 'needs', 'flag'] as const;
+const RULE_KINDS = ['share', 'ratio', 'count', 'one of', 'excludes', 'needs', 'flag'] as const;
 
 function readShare(value: unknown, place: Place): ShareRule {
   const kind = oneOf(...RULE_KINDS)(object(value, place).get('kind'), { ...place, path: `${place.path}.kind` });

@@ -55,8 +55,9 @@ export function applyShares(order: Order, built: OrderRows): void {
     if (rule.kind === 'flag') continue;
     const members = stocks.map((stock) => inSet(stock, rule.set));
     const places = members.flatMap((member, i) => (member ? [i] : []));
-    if (rule.kind === 'share') {
-      const whole = stocks.map((stock) => rule.of !== 'base oil' || isBase(stock));
+    if (rule.kind === 'one of') built.choices.counts.push({ members: places, min: 0, max: 1 });
+    if (rule.kind === 'share' || rule.kind === 'one of') {
+      const whole = stocks.map((stock) => rule.kind === 'one of' || rule.of !== 'base oil' || isBase(stock));
       built.rows.push(...shareRows(name, members, whole, rule.min, rule.max));
     } else if (rule.kind === 'ratio') {
       const to = stocks.map((stock) => inSet(stock, rule.to));

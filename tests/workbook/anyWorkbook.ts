@@ -110,6 +110,11 @@ const share: fc.Arbitrary<ShareRule> = fc.oneof(
     'kind',
     'set',
   ),
+  partly<Extract<ShareRule, { kind: 'one of' }>>(
+    { kind: fc.constant('one of'), set, min: number, max: number },
+    'kind',
+    'set',
+  ),
   partly<Extract<ShareRule, { kind: 'excludes' }>>(
     { kind: fc.constant('excludes'), stockId: id, set },
     'kind',

@@ -44,6 +44,20 @@ function addCount(builder: ModelBuilder, rule: Extract<ShareRule, { kind: 'count
   builder.addRow(source, rule.min ?? -Infinity, rule.max ?? Infinity, entries);
 }
 
+/** A place in a formula: the share of the set, and a count of its stocks. */
+function addOneOf(
+  builder: ModelBuilder,
+  { set, min, max }: Extract<ShareRule, { kind: 'one of' }>,
+  source: RowSource,
+): void {
+  addShare(
+    builder,
+    { kind: 'share', set, ...(min === undefined ? {} : { min }), ...(max === undefined ? {} : { max }) },
+    source,
+  );
+  addCount(builder, { kind: 'count', set, max: 1 }, source);
+}
+
 function addExcludes(builder: ModelBuilder, rule: Extract<ShareRule, { kind: 'excludes' }>, source: RowSource): void {
   const place = builder.placeOf(rule.stockId);
   if (place === undefined) return;
@@ -79,6 +93,7 @@ export function addShares(builder: ModelBuilder, order: Order): void {
     if (rule.kind === 'share') addShare(builder, rule, source);
     else if (rule.kind === 'ratio') addRatio(builder, rule, source);
     else if (rule.kind === 'count') addCount(builder, rule, source);
+    else if (rule.kind === 'one of') addOneOf(builder, rule, source);
     else if (rule.kind === 'excludes') addExcludes(builder, rule, source);
     else if (rule.kind === 'needs') addNeeds(builder, rule, source);
   });

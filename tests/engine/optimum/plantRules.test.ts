@@ -30,6 +30,17 @@ const RULES: PlantRule[] = [
     },
   },
   {
+    name: 'a place in the formula, with alternatives',
+    add(order, draw) {
+      const ids = draw.shuffled(order.stocks).map((stock) => stock.id);
+      const [from, to] = [draw.between(0.05, 0.2), draw.between(0.25, 0.6)];
+      order.shares = [
+        ...(order.shares ?? []),
+        { kind: 'one of', set: { stockIds: ids.slice(0, 3) }, min: from, max: to },
+      ];
+    },
+  },
+  {
     name: 'a stock to be used up, in tonnes',
     add(order, draw) {
       order.batchTonnes = draw.chance(0.5) ? 10 : { min: 10, max: 14 };
@@ -83,5 +94,5 @@ test('all rules of the plant at once: status and cost as by trying every set of 
     if (entry) found.push(...(await disagreements(solveBlend, [entry])));
   }
   expect(found).toEqual([]);
-  expect(solved).toBeGreaterThan(12);
+  expect(solved).toBeGreaterThan(6);
 });
