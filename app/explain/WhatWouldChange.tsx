@@ -30,6 +30,8 @@ export const WhatWouldChange = memo(function WhatWouldChange({ orderId }: { orde
 function Stocks({ explanation, order, currency }: { explanation: Explanation; order: Order; currency: string }) {
   const { used, entries, stopped } = explanation;
   const nearest = byNearness(entries);
+  // One more is no less than a line that unfolds it.
+  const shown = entries.length === NEAREST + 1 ? entries.length : NEAREST;
   const largestFirst = used.toSorted((a, b) => b.massFraction - a.massFraction);
   const props = { order, currency };
   return (
@@ -55,10 +57,10 @@ function Stocks({ explanation, order, currency }: { explanation: Explanation; or
           </tbody>
         </table>
       )}
-      {entries.length > 0 && <EntryTable {...props} caption="Stocks not in use" entries={nearest.slice(0, NEAREST)} />}
-      {entries.length > NEAREST && (
-        <Disclosure title={`${entries.length - NEAREST} more stocks not in use`}>
-          <EntryTable {...props} caption="More stocks not in use" entries={nearest.slice(NEAREST)} />
+      {entries.length > 0 && <EntryTable {...props} caption="Stocks not in use" entries={nearest.slice(0, shown)} />}
+      {entries.length > shown && (
+        <Disclosure title={`${entries.length - shown} more stocks not in use`}>
+          <EntryTable {...props} caption="More stocks not in use" entries={nearest.slice(shown)} />
         </Disclosure>
       )}
       <p className={styles.soft}>
