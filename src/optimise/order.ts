@@ -69,7 +69,7 @@ export type ShareRule =
   | { kind: 'one of'; set: StockSet; min?: number; max?: number }
   /** Where this stock is used, none of that set is. */
   | { kind: 'excludes'; stockId: string; set: StockSet }
-  /** Where this stock is used, at least one of that set is. */
+  /** Where this stock is used, at least one other of that set is. */
   | { kind: 'needs'; stockId: string; set: StockSet }
   /** Every stock in the mix carries the flag. */
   | { kind: 'flag'; flag: string };

@@ -99,7 +99,7 @@ function proofOf(found: SearchResult, model: SearchModel, candidates: Candidates
   }
   if (!Number.isFinite(lowerBound)) return { kind: 'none' };
   const missing = best.cost - lowerBound;
-  const gap = missing > 0 ? missing / gapReference(best.cost, model.cost) : 0;
+  const gap = missing > 0 ? missing / gapReference(best.cost, model.prices) : 0;
   // A part closed at the cut-off lies one rounding beyond the gap asked for.
   return { kind: gap <= relativeGap * (1 + 1e-6) + 1e-12 ? 'least cost' : 'within gap', lowerBound, gap };
 }
@@ -121,16 +121,19 @@ export function cubicMetresPerTonne(stock: Stock): number | undefined {
   return density.state === 'known' ? 1000 / density.value : undefined;
 }
 
+/** A share this little below a price step has reached it: the tolerance of shares (see recipeCheck). */
+const STEP_TOLERANCE = 1e-8;
+
 /**
  * What a share of a stock costs per tonne of mix: its price, and in a batch of fixed size its price steps and what
  * using it costs at all.
  */
 export function costOfShare(stock: Stock, massFraction: number, { batchTonnes }: Order): number {
   if (typeof batchTonnes !== 'number') return stock.pricePerTonne * massFraction;
-  return costOfTonnes(stock, massFraction * batchTonnes) / batchTonnes;
+  return costOfTonnes(stock, massFraction * batchTonnes, STEP_TOLERANCE * batchTonnes) / batchTonnes;
 }
 
-/** Cost per tonne from prices, shares and flush costs alone, and per m³ where every density is known. */
+/** Cost per tonne from shares and what they cost alone, and per m³ where every density is known. */
 function costsOf(order: Order, recipe: Recipe): Pick<BlendOutcome, 'costPerTonne' | 'costPerCubicMetre'> {
   const { stocks } = order;
   let costPerTonne = 0;

@@ -13,7 +13,7 @@ export interface SolveOptions {
   now?: () => number;
   /** Lets the surroundings breathe (read messages) from time to time. Default: does nothing. */
   pause?: () => Promise<void>;
-  /** Default: HiGHS, loaded once. */
+  /** Default: the compact engine with HiGHS in reserve, loaded once. */
   linearEngine?: LinearEngine;
   /** KV100 [mm²/s] of a recipe for a similar order: where to look first. Changes the time, not the answer. */
   near?: number;

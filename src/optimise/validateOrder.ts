@@ -4,12 +4,15 @@ import { limitInWords } from './checkLimits';
 import { checkShape } from './checkShape';
 import type { Dose, Limit, Order, ShareRule } from './order';
 import type { OrderProblem } from './outcome';
+import { doseShares } from './rows/doseShares';
 import { limitDefinition, limitEnds } from './rows/limitEnds';
 import { priceSegments } from './rows/priceSegments';
 import { isInSet } from './stockSet';
 
 type Path = (string | number)[];
 
+/** A compulsory share below this cannot be told from none. */
+const LEAST_DOSE = 1e-7;
 /** No quantity of an order is larger; beyond it the engines lose their digits. */
 const LARGEST = 1e9;
 
@@ -138,6 +141,12 @@ function checkDoseInTonnes(dose: Dose, path: Path, name: string, order: Order, p
     );
   } else if (dose.exactly !== undefined && typeof order.batchTonnes === 'object') {
     problems.add([...path, 'exactly'], `Dose of ${name}: an exact number of tonnes needs a fixed batch size.`);
+  } else {
+    const least = dose.exactly ?? dose.min ?? 0;
+    const batch = typeof order.batchTonnes === 'object' ? order.batchTonnes.min : order.batchTonnes;
+    if (least > batch) {
+      problems.add(path, `Dose of ${name}: ${least} t are more than the batch of ${batch} t. Reduce it, or make more.`);
+    }
   }
 }
 
@@ -153,6 +162,11 @@ function checkDose(dose: Dose, place: number, order: Order, problems: Problems):
   }
   if (dose.unit === 'tonnes') checkDoseInTonnes(dose, path, stock.name, order, problems);
   problems.range(path, dose.min, dose.max, `Dose of ${stock.name}`);
+  const share = doseShares(dose, order);
+  const stated = share.exactly ?? share.min ?? 0;
+  if (stated > 0 && stated < LEAST_DOSE) {
+    problems.add(path, `Dose of ${stock.name}: less than 0.00001 % of the mix is no dose. Raise it, or remove it.`);
+  }
   if (dose.exactly !== undefined && (dose.min !== undefined || dose.max !== undefined)) {
     problems.add([...path, 'exactly'], `Dose of ${stock.name}: give either an exact dose or a range.`);
   }

@@ -1,5 +1,5 @@
 import type { Stock } from '../../stock/stock';
-import type { PriceSegment } from './priceSegments';
+import { type PriceSegment, priceSegments } from './priceSegments';
 import type { ModelRow, Presence, RowSource, SearchModel, WholeLots } from './searchModel';
 
 /** From this share on a stock counts as used where a rule asks for "at least so many" and it has no least dose. */
@@ -118,11 +118,20 @@ export class ModelBuilder {
     }
   }
 
+  /** No more than whole drums of a stock that comes in them. */
+  #cutToWholeLots(): void {
+    for (const { stock, share } of this.wholeLots) {
+      this.cutUpper(stock, Math.floor(this.#upper[stock] / share + 1e-9) * share);
+    }
+  }
+
   build(): SearchModel {
+    this.#cutToWholeLots();
     this.#tiePresences();
     return {
       stocks: this.stocks,
       cost: Float64Array.from(this.#cost),
+      prices: this.stocks.flatMap((stock) => priceSegments(stock).map(({ pricePerTonne }) => pricePerTonne)),
       lower: Float64Array.from(this.#lower),
       upper: Float64Array.from(this.#upper),
       rows: this.rows,

@@ -24,11 +24,12 @@ export function priceSegments({ pricePerTonne, priceSteps = [], priceStepsFor }:
   });
 }
 
-/** What so many tonnes of a stock cost in a batch, flush included. At a step the price from there on holds. */
-export function costOfTonnes(stock: Stock, tonnes: number): number {
+/**
+ * What so many tonnes of a stock cost in a batch, flush included. From a step on its price holds; a quantity that is
+ * below it by no more than `slack` [t] is at it.
+ */
+export function costOfTonnes(stock: Stock, tonnes: number, slack: number): number {
   if (!(tonnes > 0)) return 0;
-  // A whole step that comes out a rounding below its quantity is that quantity.
-  const reached = tonnes * (1 + 1e-9);
-  const segment = priceSegments(stock).findLast(({ from }) => reached >= from);
+  const segment = priceSegments(stock).findLast(({ from }) => tonnes + slack >= from);
   return (segment?.fixed ?? 0) + (segment?.pricePerTonne ?? stock.pricePerTonne) * tonnes + (stock.flushCost ?? 0);
 }

@@ -48,12 +48,14 @@ export interface ViLimits {
 }
 
 /**
- * An order as columns and rows. Columns: the shares of the stocks (mass fractions), then presences (0/1), then
- * deviations from aims (reporting units). Everything is linear but the presences, whole drums and the viscosity index.
+ * An order as columns and rows. Columns: the shares of the stocks (mass fractions), then presences (0/1) and the
+ * stretches of stepped prices (mass fractions), then deviations from aims (reporting units). Everything is linear but the presences, whole drums and the viscosity index.
  */
 export interface SearchModel {
   stocks: Stock[];
   cost: Float64Array;
+  /** Prices of the stocks, steps included: what a gap near a cost of nothing is counted on. */
+  prices: readonly number[];
   lower: Float64Array;
   upper: Float64Array;
   rows: ModelRow[];

@@ -35,18 +35,25 @@ function nearestSums(drums: readonly number[], wanted: number): number[] {
  * A batch that no whole drums add up to, where everything in it comes in drums or at an exact dose: which sizes would
  * do. Nothing where some stock can make up the difference.
  */
-export function drumsThatDoNotAddUp(order: Order, { stocks, lower, upper, wholeLots }: SearchModel): OrderProblem[] {
+export function drumsThatDoNotAddUp(
+  order: Order,
+  { stocks, lower, upper, presences, wholeLots }: SearchModel,
+): OrderProblem[] {
   const { batchTonnes } = order;
   if (typeof batchTonnes !== 'number' || wholeLots.length === 0) return [];
   const inDrums = new Set(wholeLots.map(({ stock }) => stock));
-  const others = stocks.flatMap((_, place) => (inDrums.has(place) || upper[place] === 0 ? [] : [place]));
+  const leastIfUsed = new Map(presences.map(({ stock, least }) => [stock, least]));
+  const isUsable = (place: number) => upper[place] > 0 && (leastIfUsed.get(place) ?? 0) <= upper[place];
+  const others = stocks.flatMap((_, place) => (inDrums.has(place) || !isUsable(place) ? [] : [place]));
   if (others.some((place) => lower[place] < upper[place])) return [];
   const rest = 1 - others.reduce((sum, place) => sum + lower[place], 0);
   const drums = wholeLots.map(({ share }) => Math.round(share * batchTonnes * GRAMS));
   const wanted = Math.round(rest * batchTonnes * GRAMS);
   if (!(rest > 0) || drums.some((drum) => drum <= 0)) return [];
   const sums = nearestSums(drums, wanted);
-  if (sums.length === 0 || sums.includes(wanted)) return [];
+  // Each drum was rounded to a gram: so many roundings may lie between the sum and the batch.
+  const rounding = 1 + wanted / Math.min(...drums) / 2;
+  if (sums.length === 0 || sums.some((sum) => Math.abs(sum - wanted) <= rounding)) return [];
   const sizes = sums.map((sum) => `${Number((sum / GRAMS / rest).toPrecision(7))} t`).join(' or ');
   const message = `A batch of ${batchTonnes} t cannot be charged in whole drums. Make it ${sizes}, or let a stock be charged by weight.`;
   return [{ path: ['batchTonnes'], message }];

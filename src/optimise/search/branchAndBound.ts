@@ -3,7 +3,7 @@ import type { ModelRow, SearchModel } from '../rows/searchModel';
 import type { ResolvedOptions } from '../solveOptions';
 import { type Box, boxOf } from './box';
 import type { StockBound } from './certificate';
-import { nextChoice, presenceRows } from './discreteChoices';
+import { type Choice, nextChoice, presenceRows, undecidedChoice } from './discreteChoices';
 import { gapReference } from './gapReference';
 import { splitPoints } from './kv100Split';
 import { mixViscosity } from './mixViscosity';
@@ -153,7 +153,9 @@ export class BranchAndBound {
   #cutoff(): number {
     const { best } = this.#finder;
     if (!best) return Infinity;
-    return best.cost - this.options.relativeGap * (this.model.gapReference ?? gapReference(best.cost, this.model.cost));
+    return (
+      best.cost - this.options.relativeGap * (this.model.gapReference ?? gapReference(best.cost, this.model.prices))
+    );
   }
 
   #close(bound: number): void {
@@ -210,13 +212,16 @@ export class BranchAndBound {
     const mix = vi && { missed: mixViscosity(vi, values).missed, kv100: mixViscosity(vi, place).kv100 };
     if (mix && mix.missed > FAR_OFF && this.#splitKv100(node, mix.kv100)) return;
     const choice = nextChoice(this.model, this.#rows, values, lower, upper);
-    if (choice) {
-      for (const alternative of choice.alternatives) {
-        let { changes } = node;
-        for (const bounds of alternative) changes = changes ? { ...bounds, parent: changes } : { ...bounds };
-        this.#open.push({ ...node, depth: node.depth + 1, ...(changes ? { changes } : {}) });
-      }
-    } else if (!mix || !this.#splitKv100(node, mix.kv100)) this.#close(node.bound);
+    if (choice) this.#splitChoice(node, choice);
+    else if (!mix || !this.#splitKv100(node, mix.kv100)) this.#close(node.bound);
+  }
+
+  #splitChoice(node: SearchNode, { alternatives }: Choice): void {
+    for (const alternative of alternatives) {
+      let { changes } = node;
+      for (const bounds of alternative) changes = changes ? { ...bounds, parent: changes } : { ...bounds };
+      this.#open.push({ ...node, depth: node.depth + 1, ...(changes ? { changes } : {}) });
+    }
   }
 
   /** Splits the interval of KV100 at a solution's value; false where it is too narrow. */
@@ -235,6 +240,14 @@ export class BranchAndBound {
   /** The engine gave no answer that can be trusted: split where possible, else the part keeps its bound. */
   #splitBlindly(node: SearchNode): void {
     const middle = node.kv100 ? Math.sqrt(node.kv100.from * node.kv100.to) : 0;
+    if (isNarrow(node.kv100) || !node.kv100) {
+      const box = boxOf(this.model, node.changes);
+      const choice = box && undecidedChoice(this.model, box.lower, box.upper);
+      if (choice) {
+        this.#splitChoice(node, choice);
+        return;
+      }
+    }
     if (!this.#splitKv100(node, middle)) this.#close(node.bound);
   }
 

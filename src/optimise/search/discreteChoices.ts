@@ -2,15 +2,16 @@ import type { ModelRow, SearchModel } from '../rows/searchModel';
 
 /** A share below this is no share: the engines' tolerance. */
 export const NO_SHARE = 1e-9;
-/** How far from a whole drum a share may be, in drums. */
+/** How far from a whole drum a share may be: in drums, and as a share of the mix. */
 const WHOLE = 1e-6;
+const WHOLE_SHARE = 1e-8;
 
 /** A choice to branch on: two alternatives, each a list of column bounds. */
 export interface Choice {
   alternatives: { column: number; lower: number; upper: number }[][];
 }
 
-/** Rows over presences: counts, exclusions, most stocks. */
+/** Rows over presences: counts, places, exclusions, needs, most stocks, one stretch of a price. */
 export function presenceRows(model: SearchModel): ModelRow[] {
   const columns = new Set(model.presences.map((presence) => presence.column));
   return model.rows.filter(
@@ -48,11 +49,16 @@ function drums(values: ArrayLike<number>, stock: number, share: number): number 
   return values[stock] / share;
 }
 
+/** How far from a whole number of drums a count may be. */
+function wholeWithin(share: number): number {
+  return Math.min(WHOLE, WHOLE_SHARE / share);
+}
+
 /** True where every stock that comes in drums is charged in whole ones. */
 export function keepsWholeLots(model: SearchModel, values: ArrayLike<number>): boolean {
   return model.wholeLots.every(({ stock, share }) => {
     const count = drums(values, stock, share);
-    return Math.abs(count - Math.round(count)) <= WHOLE;
+    return Math.abs(count - Math.round(count)) <= wholeWithin(share);
   });
 }
 
@@ -99,11 +105,11 @@ function drumChoice(
   upper: Float64Array,
 ): Choice | undefined {
   let best: Choice | undefined;
-  let worst = WHOLE;
+  let worst = 0;
   for (const { stock, share } of model.wholeLots) {
     const count = drums(values, stock, share);
     const off = Math.abs(count - Math.round(count));
-    if (off <= worst) continue;
+    if (off <= Math.max(worst, wholeWithin(share))) continue;
     worst = off;
     const floor = Math.floor(count);
     best = {
@@ -114,6 +120,11 @@ function drumChoice(
     };
   }
   return best;
+}
+
+/** A presence that is not decided yet, whatever it is: where no solution says which matters. */
+export function undecidedChoice(model: SearchModel, lower: Float64Array, upper: Float64Array): Choice | undefined {
+  return presenceChoice(model, new Float64Array(model.cost.length), lower, upper);
 }
 
 /** The next discrete choice to branch on at a solution that breaks one; undefined where none is left to make. */

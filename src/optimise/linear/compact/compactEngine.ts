@@ -55,10 +55,10 @@ class CompactProgram {
     if (dictionary.exchanges > MOST_EXCHANGES || !this.#takeChanges()) dictionary.rebuild();
     this.#changed.clear();
     const result = this.#run();
-    if (result.status !== 'unknown') return result;
+    if (this.#stands(result)) return result;
     dictionary.reset();
     const cold = this.#run();
-    return cold.status === 'unknown' ? this.#askReserve() : cold;
+    return this.#stands(cold) ? cold : this.#askReserve();
   }
 
   /** Takes changed rows into the dictionary where they are few and short; false where it must be made anew. */
@@ -86,6 +86,37 @@ class CompactProgram {
     }
     const values = this.#values();
     return this.#keepsRows(values) ? { status: 'optimal', values, duals: this.#duals() } : { status: 'unknown' };
+  }
+
+  /** Whether an answer can be used: known, and an infeasible one with a ray that proves it on the program's own rows. */
+  #stands(result: LinearResult): boolean {
+    if (result.status !== 'infeasible') return result.status === 'optimal';
+    return result.ray !== undefined && this.#proves(result.ray);
+  }
+
+  /** Whether Σ ray · (row - activity) = 0 has no solution within all bounds. */
+  #proves(ray: Float64Array): boolean {
+    const { rows, columns, matrix, lower, upper } = this.#dictionary;
+    let least = 0;
+    let most = 0;
+    const add = (factor: number, low: number, high: number) => {
+      if (factor === 0) return;
+      least += factor > 0 ? factor * low : factor * high;
+      most += factor > 0 ? factor * high : factor * low;
+    };
+    for (let column = 0; column < columns; column++) {
+      let factor = 0;
+      let size = 0;
+      for (let row = 0; row < rows; row++) {
+        const part = ray[row] * matrix[row * columns + column];
+        factor += part;
+        size += Math.abs(part);
+      }
+      // What cancels to a rounding is zero: a free column would otherwise undo any proof.
+      if (Math.abs(factor) > 1e-12 * size) add(factor, lower[column], upper[column]);
+    }
+    for (let row = 0; row < rows; row++) add(-ray[row], lower[columns + row], upper[columns + row]);
+    return least > 0 || most < 0;
   }
 
   #values(): Float64Array {
