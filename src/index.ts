@@ -73,6 +73,7 @@ export { FAMILIES, type Family, isBaseOil } from './stock/family';
 export { FIGURE_ORIGINS, type Figure, type FigureOrigin } from './stock/figure';
 export { findFigure } from './stock/findFigure';
 export type { Recipe, RecipeLine, Stock } from './stock/stock';
+export { pricesRise } from './workbook/amountProblems';
 export { emptyOrder } from './workbook/emptyOrder';
 export { emptyWorkbook } from './workbook/emptyWorkbook';
 export type { OmittedProduct, UnreadCell } from './workbook/engineStocks';

@@ -48,7 +48,10 @@ export function RecipeTable({
                   <span className={styles.stock}>
                     <Swatch look={looks[place]} />
                     <span>{row.name}</span>
-                    <span className={styles.family}>{row.family}</span>
+                    <span className={styles.family}>
+                      {row.drums !== undefined && `${row.drums} ${row.drums === 1 ? 'drum' : 'drums'}, `}
+                      {row.family}
+                    </span>
                   </span>
                 </th>
               </tr>

@@ -60,8 +60,11 @@ export function proofInWords(
     const ofAll = proof.kind === 'impossible';
     // Proven of all stocks with a price, those without the figures too: then only a missing price bears on it.
     const spoken = ofAll && notCounted.omitted.length === 0 ? '' : whom;
-    const these = ofAll ? 'these stocks' : 'the stocks whose figures are known';
-    return { text: `No mix of ${spoken || these} can meet the order: proven.${unread}`, tone: 'bad' };
+    // Nothing is unknown: the proof leans on a stock "as the rest" being held to its small dose.
+    const isHeld = !ofAll && left === 0;
+    const these = ofAll || isHeld ? 'these stocks' : 'the stocks whose figures are known';
+    const held = isHeld ? ' It counts on the small dose allowed “as the rest”.' : '';
+    return { text: `No mix of ${spoken || these} can meet the order: proven.${held}${unread}`, tone: 'bad' };
   }
   const why = WHY_STOPPED[stopped];
   if (!recipe) return { text: `No recipe found, and nothing proven yet (${why}).`, tone: 'warn' };

@@ -12,6 +12,8 @@ export interface RecipeRow {
   litres?: number;
   /** Share of the cost of the mix, price steps and what using it costs included [0..1]. */
   costShare?: number;
+  /** Whole drums, where the stock comes in them and the batch is fixed. */
+  drums?: number;
   /** What is left on hand after the batch [t]. */
   leftTonnes?: number;
 }
@@ -68,6 +70,8 @@ export function recipeRows(
         ...(hasShares && {
           costShare: costOfShare(stock, massFraction, order) / costPerTonne,
         }),
+        ...(stock.lotTonnes !== undefined &&
+          typeof order.batchTonnes === 'number' && { drums: Math.round(kilograms / 1000 / stock.lotTonnes) }),
         ...(batch.given && left !== undefined && { leftTonnes: left - kilograms / 1000 }),
       },
     ];

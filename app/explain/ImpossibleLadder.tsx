@@ -56,7 +56,7 @@ function Steps({ orderId, ladder, order, stale }: StepsProps) {
           <List messages={conflict.map((demand) => demandInWords(demand, order))} />
           <p className={styles.soft}>
             {conflictProven
-              ? 'Without any one of them the others can: proven.'
+              ? 'Any one of them dropped ends this conflict: proven. Another may remain.'
               : 'Fewer of them may do: which ones is not proven.'}
           </p>
         </div>

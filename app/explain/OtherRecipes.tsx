@@ -27,7 +27,7 @@ export const OtherRecipes = memo(function OtherRecipes({ orderId }: { orderId: s
 
 function endInWords({ list, stopped }: Alternatives): string | undefined {
   if (stopped !== 'finished') return 'The time ran out: there may be more.';
-  return list.length === 0 ? 'No other set of stocks comes near this cost.' : undefined;
+  return list.length === 0 ? 'No other set of stocks within 5 % of this cost.' : undefined;
 }
 
 function List({

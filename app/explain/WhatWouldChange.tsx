@@ -98,10 +98,17 @@ function EntryTable({
           <tr key={entry.stockId}>
             <th scope="row">{nameOf(order, entry.stockId)}</th>
             <td>{formatMoney(entry.pricePerTonne, currency)}</td>
-            <td>{entryInWords(entry, currency)}</td>
+            <td>
+              {entryInWords(entry, currency)}
+              {hasSteps(order, entry.stockId) && <span className={styles.soft}> (its price steps as much lower)</span>}
+            </td>
           </tr>
         ))}
       </tbody>
     </table>
   );
+}
+
+function hasSteps({ stocks }: Order, stockId: string): boolean {
+  return (stocks.find(({ id }) => id === stockId)?.priceSteps?.length ?? 0) > 0;
 }

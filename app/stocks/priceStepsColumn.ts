@@ -1,7 +1,10 @@
+import { pricesRise } from '../../src';
 import { type Column, dropUnread, keepUnread } from './column';
 import { priceStepsText, readPriceSteps } from './priceSteps';
 
 const ID = 'priceSteps';
+const RISING =
+  'A price for all tonnes cannot rise with the quantity: lower it, or write “excess” at the end. Until then the stock is left out.';
 
 /** Prices that fall with the quantity, as one text. */
 export const PRICE_STEPS_COLUMN: Column = {
@@ -18,7 +21,7 @@ export const PRICE_STEPS_COLUMN: Column = {
       return { text: unread, edit: unread, problem: `${why} Until then the stock is left out.` };
     }
     const text = priceStepsText(product);
-    return { text, edit: text };
+    return { text, edit: text, ...(pricesRise(product) && { problem: RISING }) };
   },
   write(product, text, sign) {
     dropUnread(product, ID);

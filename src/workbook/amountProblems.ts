@@ -43,8 +43,18 @@ function wrongAmount(product: Product, cell: (typeof BOUNDS)[number]): string | 
   if (cell === 'availableTonnes') return wrongQuantity(product);
   if (cell === 'lotTonnes') return (product.lotTonnes ?? 1) > 0 ? undefined : 'must be more than zero.';
   if (cell === 'flushCost') return (product.flushCost ?? 0) >= 0 ? undefined : 'must not be below zero.';
-  if (cell === 'priceSteps') return undefined;
+  if (cell === 'priceSteps')
+    return pricesRise(product) ? 'must fall with the quantity, or count for the excess.' : undefined;
   return wrongShare(product[cell]);
+}
+
+/** A price for all tonnes that rises with the quantity would have no least cost at the step. */
+export function pricesRise({ pricePerTonne, priceSteps = [], priceStepsFor }: Product): boolean {
+  if (priceStepsFor === 'the excess') return false;
+  const steps = [...priceSteps].sort((a, b) => a.fromTonnes - b.fromTonnes).map((step) => step.pricePerTonne);
+  return [...(pricePerTonne === undefined ? [] : [pricePerTonne]), ...steps].some(
+    (price, k, all) => price > all[k - 1],
+  );
 }
 
 /** Shares are told as the table shows them, in per cent. */

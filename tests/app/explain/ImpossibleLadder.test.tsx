@@ -59,7 +59,7 @@ describe('an impossible order', () => {
     expect(screen.queryByText('In the way, taken together')).toBeNull();
     expect(screen.getByText('These cannot hold together')).toBeVisible();
     expect(screen.getByText(/^Noack volatility at most 8/)).toBeVisible();
-    expect(screen.getByText(/others can: proven/)).toBeVisible();
+    expect(screen.getByText(/ends this conflict: proven/)).toBeVisible();
   });
 
   it('says what is within reach, alone and together, at what cost', () => {

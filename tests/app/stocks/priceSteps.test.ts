@@ -43,6 +43,14 @@ describe('price steps as a text', () => {
 });
 
 describe('the cell', () => {
+  it('says where a price for all tonnes rises; for the excess it may', () => {
+    const draft = product();
+    PRICE_STEPS_COLUMN.write?.(draft, '5 t: 950', '.');
+    expect(PRICE_STEPS_COLUMN.read(draft).problem).toContain('excess');
+    PRICE_STEPS_COLUMN.write?.(draft, '5 t: 950 excess', '.');
+    expect(PRICE_STEPS_COLUMN.read(draft).problem).toBeUndefined();
+  });
+
   it('keeps what it cannot read, says why, and takes it once it is right', () => {
     const draft = product();
     PRICE_STEPS_COLUMN.write?.(draft, '5 t: cheap', '.');
