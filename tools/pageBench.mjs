@@ -87,7 +87,9 @@ const browser = await chromium.launch({ executablePath: ensureBrowser(), args: B
 try {
   const page = await browser.newPage({ viewport: { width: 1440, height: 900 } });
   await page.goto(server.url);
-  console.log('| order | key to recipe, median ms | most ms | frames a second | frames that moved the limit | frames with a new recipe |');
+  console.log(
+    '| order | key to recipe, median ms | most ms | frames a second | frames that moved the limit | frames with a new recipe |',
+  );
   for (const order of ORDERS) {
     await page.getByRole('button', { name: order }).first().click();
     await page.waitForTimeout(1500);
