@@ -49,6 +49,7 @@ export type {
   Stopped,
 } from './optimise/outcome';
 export { costOfShare } from './optimise/outcomeOf';
+export { pricesRise } from './optimise/rows/priceSegments';
 export { solveBlend } from './optimise/solveBlend';
 export type { SolveOptions } from './optimise/solveOptions';
 export {
@@ -73,7 +74,6 @@ export { FAMILIES, type Family, isBaseOil } from './stock/family';
 export { FIGURE_ORIGINS, type Figure, type FigureOrigin } from './stock/figure';
 export { findFigure } from './stock/findFigure';
 export type { Recipe, RecipeLine, Stock } from './stock/stock';
-export { pricesRise } from './workbook/amountProblems';
 export { emptyOrder } from './workbook/emptyOrder';
 export { emptyWorkbook } from './workbook/emptyWorkbook';
 export type { OmittedProduct, UnreadCell } from './workbook/engineStocks';

@@ -6,7 +6,7 @@ import type { Dose, Limit, Order, ShareRule } from './order';
 import type { OrderProblem } from './outcome';
 import { doseShares } from './rows/doseShares';
 import { limitDefinition, limitEnds } from './rows/limitEnds';
-import { priceSegments } from './rows/priceSegments';
+import { pricesRise } from './rows/priceSegments';
 import { isInSet } from './stockSet';
 
 type Path = (string | number)[];
@@ -54,8 +54,7 @@ function checkPriceSteps(stock: Stock, problems: Problems): void {
     if (seen.has(fromTonnes)) problems.add(path, `${name}: two price steps start at ${fromTonnes} t. Remove one.`);
     seen.add(fromTonnes);
   }
-  const prices = priceSegments(stock).map(({ pricePerTonne }) => pricePerTonne);
-  if (stock.priceStepsFor !== 'the excess' && prices.some((price, place) => price > prices[place - 1])) {
+  if (pricesRise(stock)) {
     problems.add(path, `${name}: a price for all tonnes cannot rise with the quantity. Let it count for the excess.`);
   }
 }

@@ -1,3 +1,4 @@
+import { pricesRise } from '../optimise/rows/priceSegments';
 import type { Product } from './workbook';
 
 /** What the cells of amounts are called in messages, by their key in `Product.unread`. */
@@ -46,15 +47,6 @@ function wrongAmount(product: Product, cell: (typeof BOUNDS)[number]): string | 
   if (cell === 'priceSteps')
     return pricesRise(product) ? 'must fall with the quantity, or count for the excess.' : undefined;
   return wrongShare(product[cell]);
-}
-
-/** A price for all tonnes that rises with the quantity would have no least cost at the step. */
-export function pricesRise({ pricePerTonne, priceSteps = [], priceStepsFor }: Product): boolean {
-  if (priceStepsFor === 'the excess') return false;
-  const steps = [...priceSteps].sort((a, b) => a.fromTonnes - b.fromTonnes).map((step) => step.pricePerTonne);
-  return [...(pricePerTonne === undefined ? [] : [pricePerTonne]), ...steps].some(
-    (price, k, all) => price > all[k - 1],
-  );
 }
 
 /** Shares are told as the table shows them, in per cent. */

@@ -24,6 +24,18 @@ export function priceSegments({ pricePerTonne, priceSteps = [], priceStepsFor }:
   });
 }
 
+/** Whether a price for all tonnes rises with the quantity: it would have no least cost at the step. */
+export function pricesRise({
+  pricePerTonne,
+  priceSteps = [],
+  priceStepsFor,
+}: Pick<Stock, 'priceSteps' | 'priceStepsFor'> & { pricePerTonne?: number }): boolean {
+  if (priceStepsFor === 'the excess') return false;
+  const steps = [...priceSteps].sort((a, b) => a.fromTonnes - b.fromTonnes).map((step) => step.pricePerTonne);
+  const prices = pricePerTonne === undefined ? steps : [pricePerTonne, ...steps];
+  return prices.some((price, place) => price > prices[place - 1]);
+}
+
 /**
  * What so many tonnes of a stock cost in a batch, flush included. From a step on its price holds; a quantity that is
  * below it by no more than `slack` [t] is at it.
